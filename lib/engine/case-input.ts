@@ -1,0 +1,166 @@
+import type {
+  Ampere,
+  Complex,
+  Hertz,
+  KilogramSquareMetre,
+  NewtonMetre,
+  Ohm,
+  PerUnit,
+  RadianPerSecond,
+  Second,
+  Siemens,
+  Volt,
+  VoltAmpere,
+  Watt,
+} from '../units/si'
+
+/** A node of the network; every rating elsewhere converts with its own voltage, never with this nominal. */
+export interface BusInput {
+  id: string
+  nominal: Volt
+}
+
+/** Thevenin equivalent of the supply at its bus, with what is held before the start. */
+export interface SupplyInput {
+  busId: string
+  /** Source impedance in ohm per phase at the supply's bus, c·U²/S_k already applied. */
+  impedance: Complex<Ohm>
+  /** What fixes the EMF: the open-circuit voltage, or the bus voltage before the start with running load on and starters off. */
+  hold: { kind: 'bus-voltage'; voltage: Volt } | { kind: 'emf'; voltage: Volt }
+  /** Plant motors whose contribution the stated level contains; it is taken out before the run. Empty when it contains none. */
+  motorsInLevel: readonly { busId: string; circuit: InductionCircuit }[]
+}
+
+/** Two-winding transformer: ratio U_from(1 + tap/100)/U_to, impedance in ohm on the to side, unchanged by the tap. */
+export interface TransformerInput {
+  id: string
+  fromBusId: string
+  toBusId: string
+  ratio: number
+  impedance: Complex<Ohm>
+}
+
+/** Cable or line with its parallel conductors already combined; zero impedance joins its two buses. */
+export interface LineInput {
+  id: string
+  fromBusId: string
+  toBusId: string
+  impedance: Complex<Ohm>
+  /** Total shunt susceptance, half at either end. */
+  susceptance: Siemens
+}
+
+/** Static load S(u) = S₀(z·u² + i·u + p); below the floor (in parts of its rated voltage) it turns to constant impedance. */
+export interface StaticLoadInput {
+  id: string
+  busId: string
+  power: Complex<VoltAmpere>
+  ratedVoltage: Volt
+  mix: { impedance: number; current: number; power: number }
+  floor: PerUnit
+}
+
+export interface CapacitorInput {
+  id: string
+  busId: string
+  susceptance: Siemens
+}
+
+/** Star-equivalent circuit of a cage induction motor in ohm per phase, rotor referred to the stator; one or two cages, the inner first. */
+export interface InductionCircuit {
+  stator: Complex<Ohm>
+  magnetising: Ohm
+  /** Core-loss resistance beside the magnetising reactance; null where losses are left out. */
+  core: Ohm | null
+  cages: readonly { resistance: Ohm; reactance: Ohm }[]
+}
+
+/** Torque of a driven load at the motor shaft against speed; it opposes motion only. */
+export type LoadCurve =
+  | {
+      kind: 'power'
+      /** Torque at zero speed of the curve, T₀. */
+      constant: NewtonMetre
+      /** Torque at the rated speed, T_r. */
+      atRated: NewtonMetre
+      ratedSpeed: RadianPerSecond
+      exponent: number
+      /** Straight line from this torque at standstill to the curve at `until`; null where there is none. */
+      breakaway: { torque: NewtonMetre; until: RadianPerSecond } | null
+    }
+  | { kind: 'points'; speeds: readonly RadianPerSecond[]; torques: readonly NewtonMetre[] }
+
+/** When a starting device goes to its next position; time counts from the motor's own switching-on. */
+export type ChangeOver = { kind: 'time'; at: Second } | { kind: 'speed'; at: RadianPerSecond }
+
+export type Starter =
+  | { kind: 'direct' }
+  | {
+      kind: 'autotransformer'
+      tap: PerUnit
+      /** Own impedance, ohm per phase on the line side, in series before the ideal ratio; zero where ideal. */
+      impedance: Complex<Ohm>
+      changeOver: ChangeOver
+      /** Time without voltage between tap and line; 0 for a closed transition. */
+      gap: Second
+    }
+  | { kind: 'star-delta'; changeOver: ChangeOver; gap: Second }
+
+export type StarterKind = Starter['kind']
+
+export interface MotorInput {
+  id: string
+  busId: string
+  ratedVoltage: Volt
+  ratedPower: Watt
+  ratedSpeed: RadianPerSecond
+  ratedTorque: NewtonMetre
+  poles: number
+  circuit: InductionCircuit
+  /** Multiplies the circuit's torque only: a named corner such as −15 %, or the saturation sensitivity; 1 otherwise. */
+  torqueFactor: PerUnit
+  /** Motor plus everything it turns, at the motor shaft. */
+  inertia: KilogramSquareMetre
+  duty:
+    | { kind: 'running'; load: LoadCurve }
+    | {
+        kind: 'starting'
+        at: Second
+        starter: Starter
+        /** Curve while starting. */
+        load: LoadCurve
+        /** Curve once the process is on (valve open); null where it does not change. */
+        processLoad: LoadCurve | null
+      }
+  /** As declared at rated voltage; null where the data sheet is silent, and what depends on it is not assessed. */
+  declared: {
+    lockedRotorCurrent: Ampere | null
+    lockedRotorTorque: NewtonMetre | null
+    /** Permissible locked-rotor time that the heat is judged against (hot unless the start is cold). */
+    permissibleTime: { time: Second; state: 'hot' | 'cold' } | null
+  }
+}
+
+export interface RunSettings {
+  /** Started when the speed reaches this part of rated speed (default 0.98) and the starting device is in its running position. */
+  speedCriterion: PerUnit
+  /** The start is given up at this time after the motor's switching-on (default 60 s). */
+  timeLimit: Second
+  /** Relative tolerance of the integration (default 1e-8). */
+  tolerance: number
+}
+
+/** One computable case, all SI; the only thing the engine needs to know. */
+export interface CaseInput {
+  id: string
+  frequency: Hertz
+  buses: readonly BusInput[]
+  supply: SupplyInput
+  transformers: readonly TransformerInput[]
+  lines: readonly LineInput[]
+  loads: readonly StaticLoadInput[]
+  capacitors: readonly CapacitorInput[]
+  /** Connected motors only: running before the start, or started in it. */
+  motors: readonly MotorInput[]
+  settings: RunSettings
+}

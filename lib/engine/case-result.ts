@@ -1,0 +1,191 @@
+import type {
+  Ampere,
+  AmpereSquaredSecond,
+  Complex,
+  Joule,
+  NewtonMetre,
+  Ohm,
+  PerUnit,
+  RadianPerSecond,
+  Second,
+  Volt,
+  VoltAmpere,
+} from '../units/si'
+
+/** How one start ended; every outcome is a result. */
+export type StartOutcome =
+  | { kind: 'started'; at: Second }
+  /** Settled on the tap or in star: the change-over condition was never met. */
+  | { kind: 'not-transferred'; speed: RadianPerSecond }
+  /** In the running position and settled below the speed criterion. */
+  | { kind: 'below-criterion'; speed: RadianPerSecond }
+  /** Came to a halt, or hangs at a speed below breakdown, with this torque missing to go on. */
+  | { kind: 'stalled'; speed: RadianPerSecond; missing: NewtonMetre }
+  | { kind: 'never-turned'; missing: NewtonMetre }
+  | { kind: 'timed-out'; speed: RadianPerSecond }
+
+/** How a machine that was running before the start came through it. */
+export type RunningOutcome = { kind: 'rode-through' } | { kind: 'pulled-out'; at: Second } | { kind: 'no-equilibrium' }
+
+export type CaseOutcome =
+  | { kind: 'complete' }
+  /** The network has no solution from this instant on. */
+  | { kind: 'collapsed'; at: Second; busId: string }
+  /** The network has no solution before the start. */
+  | { kind: 'no-load-flow'; busId: string | null }
+  /** The case cannot be set up, for example buses without a supply. */
+  | {
+      kind: 'refused'
+      cause: 'island' | 'no-supply' | 'zero-impedance-loop' | 'bad-value'
+      buses: readonly string[]
+      detail: string
+    }
+
+export interface VoltageAt {
+  voltage: Volt
+  at: Second
+}
+
+/** Voltages of one bus, line to line; changes are formed from these with a named reference. */
+export interface PlaceResult {
+  busId: string
+  nominal: Volt
+  before: Volt
+  /** Just after the first switching-on, running motors still at their slip before it. */
+  first: Volt
+  deepest: VoltageAt
+  highest: VoltageAt
+  /** Every start over and speeds settled; null when that state was not reached. */
+  settledAfterStart: Volt | null
+  /** As above with the process loads on; null when not reached. */
+  settledAfterProcess: Volt | null
+}
+
+/** Electrical state of a motor at one instant; line means what the supply sees, motor what the winding gets. */
+export interface MotorState {
+  speed: RadianPerSecond
+  lineCurrent: Ampere
+  motorCurrent: Ampere
+  motorVoltage: Volt
+  torque: NewtonMetre
+  /** Power at the line side of the starting device. */
+  power: Complex<VoltAmpere>
+  powerFactor: number
+}
+
+export interface HeatUsed {
+  /** ∫I²dt of the motor current over I_LR²·t_permissible; null when not declared. */
+  byCurrent: PerUnit | null
+  /** Rotor slip energy over T_LR·ω_s·t_permissible; null when not declared. */
+  byRotor: PerUnit | null
+  /** The larger of the two; null unless both are known. */
+  figure: PerUnit | null
+  state: 'hot' | 'cold' | null
+}
+
+export interface StartResult {
+  outcome: StartOutcome
+  switchedOnAt: Second
+  /** From this motor's own switching-on; null when not reached. */
+  timeTo95: Second | null
+  timeToCriterion: Second | null
+  standstill: MotorState
+  peakLineCurrent: { current: Ampere; at: Second }
+  peakMotorCurrent: { current: Ampere; at: Second }
+  /** Least motor torque minus load torque from standstill to 95 % of rated speed. */
+  leastAccelerating: { torque: NewtonMetre; ofRated: PerUnit; speed: RadianPerSecond }
+  lowestMotorVoltage: VoltageAt
+  /** ∫I²dt of the motor current from switching-on to the speed criterion (to the end where not reached). */
+  i2t: AmpereSquaredSecond
+  /** ∫ slip × airgap power dt over the same time. */
+  slipEnergy: Joule
+  kineticEnergy: Joule
+  heatUsed: HeatUsed
+  settledSpeed: RadianPerSecond | null
+}
+
+export interface RunningResult {
+  outcome: RunningOutcome
+  before: MotorState
+  lowestVoltage: VoltageAt
+  lowestSpeed: { speed: RadianPerSecond; at: Second }
+  peakCurrent: { current: Ampere; at: Second }
+  settledSpeed: RadianPerSecond | null
+}
+
+export interface MotorResult {
+  motorId: string
+  /** Exactly one of the two is present. */
+  start: StartResult | null
+  running: RunningResult | null
+  speedAtEnd: RadianPerSecond
+}
+
+/** State just after a starting device moved on. */
+export interface ChangeOverResult {
+  motorId: string
+  at: Second
+  to: 'open' | 'running'
+  speed: RadianPerSecond
+  state: MotorState
+  /** Voltage of every bus at this instant, in the order of `places`. */
+  busVoltages: readonly Volt[]
+  /** Above breakdown slip on the running connection: transferred too early. */
+  tooEarly: boolean
+}
+
+/** What the engine noticed that a reader must know; words are made elsewhere. */
+export type Notice =
+  | { kind: 'reduced-voltage-torque'; motorId: string; voltage: PerUnit }
+  | { kind: 'change-over-too-early'; motorId: string }
+  | { kind: 'open-transition-without-transient'; motorId: string }
+  | { kind: 'levels-motors-taken-out'; level: VoltAmpere }
+  | { kind: 'load-below-floor'; loadId: string; at: Second }
+
+export interface MotorSeries {
+  speed: readonly number[]
+  torque: readonly number[]
+  loadTorque: readonly number[]
+  lineCurrent: readonly number[]
+  motorCurrent: readonly number[]
+  motorVoltage: readonly number[]
+  activePower: readonly number[]
+  reactivePower: readonly number[]
+}
+
+/** Sampled run, SI; every array is as long as `time`. Two samples at one instant are the values before and after a switching. */
+export interface CaseSeries {
+  time: readonly number[]
+  busVoltage: Readonly<Record<string, readonly number[]>>
+  motors: Readonly<Record<string, MotorSeries>>
+}
+
+export interface Counters {
+  steps: number
+  rejected: number
+  evaluations: number
+  networkIterations: number
+  /** Largest current-balance mismatch left, in parts of the largest bus current. */
+  largestMismatch: number
+  /** Largest estimated local error of an accepted step in parts of the tolerance. */
+  largestErrorRatio: number
+}
+
+export interface CaseResult {
+  caseId: string
+  model: 'quasi-static'
+  outcome: CaseOutcome
+  supply: {
+    busId: string
+    impedance: Complex<Ohm>
+    emf: Volt
+    /** Delivered at the supply's bus before the start. */
+    powerBefore: Complex<VoltAmpere>
+  } | null
+  places: readonly PlaceResult[]
+  motors: readonly MotorResult[]
+  changeOvers: readonly ChangeOverResult[]
+  notices: readonly Notice[]
+  counters: Counters
+  series: CaseSeries
+}
