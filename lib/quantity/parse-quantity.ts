@@ -92,7 +92,8 @@ const measured = (
 ): ParseOutcome => {
   const { noun, example } = quantityWording[quantity]
   if (unitText === '') return refuse(`Add a unit, for example ${example}.`)
-  if (/[±<>~;]| \d/.test(unitText)) return refuse(`Write one number with one unit, for example ${example}.`)
+  if (/[±<>~;]| (?!1[ ,.']?000 )\d/.test(unitText))
+    return refuse(`Write one number with one unit, for example ${example}.`)
   const unit = readUnit(unitText)
   if (!unit) return refuse(`“${unitText}” is not a unit known here; write for example ${example}.`)
   const factor = siFactor(unit.expression, quantity, typed.notation)

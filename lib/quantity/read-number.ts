@@ -45,7 +45,7 @@ export const readNumber = (text: string, style: NumberStyle): ReadNumber => {
   if (!match) return { ok: false, problem: 'no-number' }
   const rest = text.slice(match[0].length)
   // `12 34 kW` or `1.2.3`: digits left over mean that the separators were not understood.
-  if (/^ ?[.,']?\d/.test(rest)) return { ok: false, problem: 'separators' }
+  if (/^ ?[.,']?\d/.test(rest) && !/^ 1 ?\//.test(rest)) return { ok: false, problem: 'separators' }
   const plain = plainDigits(match[2] ?? '', style)
   if (!plain) return { ok: false, problem: 'separators' }
   const exponent = match[3] ?? match[4]

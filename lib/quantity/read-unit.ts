@@ -32,7 +32,7 @@ const product = (text: string): ReadUnit | null => {
 
 /** Unit text in plain notation, for example `lb.ft2`, `ohm/1000 ft`, `kg·m^2`, `r/min`; null when a word is not known. */
 export const readUnit = (text: string): ReadUnit | null => {
-  if (/^rpm$/i.test(text)) return { label: 'r/min', expression: 'cycle/minute' }
+  if (/^(?:rpm|1 ?\/ ?min|min ?\^?-1)$/i.test(text)) return { label: 'r/min', expression: 'cycle/minute' }
   const separated = text
     .replace(/ ?(?:\/|\bper\b) ?/g, '/')
     .replace(/\/1[ ,.']?000 ?(ft|feet|m|metres|meters)$/i, (_all, unit: string) => (/^f/i.test(unit) ? '/kft' : '/km'))
@@ -40,8 +40,6 @@ export const readUnit = (text: string): ReadUnit | null => {
     .replace(/ ?[·.*×] ?/g, '·')
     .replace(/ /g, '·')
   const [above = '', ...below] = separated.split('/')
-  if (above === '1' && below.length === 1 && /^min$/i.test(below[0] ?? ''))
-    return { label: 'r/min', expression: 'cycle/minute' }
   const parts = [above, ...below].map(product)
   const known = parts.filter((part) => part !== null)
   if (known.length !== parts.length) return null
