@@ -11,5 +11,6 @@ export default defineConfig({
     testTimeout: 60_000,
     hookTimeout: 120_000,
     pool: 'threads',
+    globalSetup: [path.join(root, 'test/support/stop-cluster.ts')],
   },
 })
