@@ -52,7 +52,12 @@ export interface SignatureVerdict {
   readonly trust: Trust
   readonly trustSentence: string
   /** The bytes under this signature: the file up to and including its own revision. */
-  readonly covers: { readonly bytes: number; readonly ofBytes: number; readonly revision: number; readonly ofRevisions: number }
+  readonly covers: {
+    readonly bytes: number
+    readonly ofBytes: number
+    readonly revision: number
+    readonly ofRevisions: number
+  }
   /** The bytes under the signature are those that were signed. */
   readonly intact: boolean
   /** Intact, and nothing after it changed anything but the next signature's own field. */
