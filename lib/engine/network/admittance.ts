@@ -1,0 +1,89 @@
+import type { Complex } from '../../units/si'
+import type { CapacitorInput, LineInput, TransformerInput } from '../case-input'
+import { isZero, reciprocal, scale } from '../numeric/complex'
+import type { Topology } from './topology'
+
+/**
+ * Nodal admittance matrix in siemens per phase (star), line-to-line voltages on line-to-line current √3·I.
+ * Order = number of nodes; layout as in numeric/complex-lu.
+ */
+export interface AdmittanceMatrix {
+  order: number
+  data: Float64Array
+}
+
+export const emptyMatrix = (order: number): AdmittanceMatrix => ({ order, data: new Float64Array(2 * order * order) })
+
+/** Adds to element (i, j). */
+export function addElement(matrix: AdmittanceMatrix, i: number, j: number, value: Complex): void {
+  const at = 2 * (i * matrix.order + j)
+  matrix.data[at] = matrix.data[at]! + value.re
+  matrix.data[at + 1] = matrix.data[at + 1]! + value.im
+}
+
+/** A series admittance between two nodes. */
+export function addBranch(matrix: AdmittanceMatrix, i: number, j: number, y: Complex): void {
+  addElement(matrix, i, i, y)
+  addElement(matrix, j, j, y)
+  addElement(matrix, i, j, scale(y, -1))
+  addElement(matrix, j, i, scale(y, -1))
+}
+
+/** Lines and transformers alone: what short-circuit current flows through. */
+export function branchMatrix(
+  topology: Topology,
+  lines: readonly LineInput[],
+  transformers: readonly TransformerInput[],
+): AdmittanceMatrix {
+  const matrix = emptyMatrix(topology.count)
+  for (const line of lines) {
+    if (isZero(line.impedance)) continue
+    addBranch(
+      matrix,
+      topology.nodeOf.get(line.fromBusId)!,
+      topology.nodeOf.get(line.toBusId)!,
+      reciprocal(line.impedance),
+    )
+  }
+  for (const transformer of transformers) {
+    const y = reciprocal(transformer.impedance)
+    const [from, to] = [topology.nodeOf.get(transformer.fromBusId)!, topology.nodeOf.get(transformer.toBusId)!]
+    // Impedance on the to side behind an ideal ratio: Y_ff = y/a², Y_tt = y, Y_ft = Y_tf = −y/a.
+    addElement(matrix, from, from, scale(y, 1 / transformer.ratio ** 2))
+    addElement(matrix, to, to, y)
+    addElement(matrix, from, to, scale(y, -1 / transformer.ratio))
+    addElement(matrix, to, from, scale(y, -1 / transformer.ratio))
+  }
+  return matrix
+}
+
+/** Adds charging of lines and capacitors, which carry no short-circuit current. */
+export function addShunts(
+  matrix: AdmittanceMatrix,
+  topology: Topology,
+  lines: readonly LineInput[],
+  capacitors: readonly CapacitorInput[],
+): void {
+  for (const line of lines) {
+    const half = { re: 0, im: line.susceptance / 2 }
+    for (const busId of [line.fromBusId, line.toBusId]) {
+      const node = topology.nodeOf.get(busId)!
+      addElement(matrix, node, node, half)
+    }
+  }
+  for (const capacitor of capacitors) {
+    const node = topology.nodeOf.get(capacitor.busId)!
+    addElement(matrix, node, node, { re: 0, im: capacitor.susceptance })
+  }
+}
+
+/** The same network with one more node behind a series impedance: the EMF behind the source. */
+export function withSourceNode(matrix: AdmittanceMatrix, node: number, impedance: Complex): AdmittanceMatrix {
+  const n = matrix.order
+  const larger = emptyMatrix(n + 1)
+  for (let i = 0; i < n; i++) {
+    larger.data.set(matrix.data.subarray(2 * i * n, 2 * (i + 1) * n), 2 * i * (n + 1))
+  }
+  addBranch(larger, node, n, reciprocal(impedance))
+  return larger
+}
