@@ -1,0 +1,55 @@
+import { line, path, type Scene, type SceneItem } from '../scene'
+import { LabelPlacer } from './label-placer'
+import { limitItems, limitLevels, limitName } from './limit-items'
+import type { LinePlotSpec, ShadeSpec } from './line-plot-spec'
+import { eventItems, markerItems } from './mark-items'
+import { type PlotFrame, plotFrame } from './plot-frame'
+import { seriesItems, seriesParts } from './series-items'
+
+const shadeItems = (shade: ShadeSpec, { x, y, area }: PlotFrame): readonly SceneItem[] => {
+  const clamped = (value: number) => Math.min(Math.max(y(value), area.y), area.y + area.height)
+  const along = (values: readonly number[]) => shade.x.map((at, i) => [x(at), clamped(values[i]!)] as const)
+  return [path(line([...along(shade.upper), ...along(shade.lower).reverse()], true), { fill: 'shade' })]
+}
+
+/** A plot of up to six lines over linear axes, with limits, instants and points that are worth reading off. */
+export const linePlot = (spec: LinePlotSpec): Scene => {
+  const frame = plotFrame(spec)
+  const drawn = spec.series.map((series) => ({ spec: series, parts: seriesParts(series, frame) }))
+  const limits = (spec.limits ?? [])
+    .map((limit) => ({ limit, levels: limitLevels(limit, frame) }))
+    .filter(({ levels }) => levels.length > 0)
+  const placer = new LabelPlacer(frame.area)
+  for (const { parts } of drawn) for (const points of parts) placer.avoidCurve(points)
+  for (const { levels } of limits)
+    for (const { from, to, y } of levels)
+      placer.avoidCurve([
+        [from, y],
+        [to, y],
+      ])
+  for (const { at } of spec.events ?? []) {
+    placer.avoidCurve([
+      [frame.x(at), frame.area.y],
+      [frame.x(at), frame.area.y + frame.area.height],
+    ])
+  }
+  const names = limits.flatMap(({ limit, levels }) => limitName(limit, levels, placer) ?? [])
+  const markers = (spec.markers ?? []).flatMap((marker) => markerItems(marker, frame, placer))
+  const events = (spec.events ?? []).flatMap((event) => eventItems(event, frame, placer))
+  return {
+    width: frame.width,
+    height: frame.height,
+    title: spec.title,
+    description: spec.description,
+    items: [
+      ...(spec.shade ? shadeItems(spec.shade, frame) : []),
+      ...frame.grid,
+      ...limits.flatMap(({ limit, levels }) => limitItems(limit, levels)),
+      ...events,
+      ...seriesItems(drawn, frame),
+      ...frame.axes,
+      ...names,
+      ...markers,
+    ],
+  }
+}

@@ -1,0 +1,77 @@
+import { formatNumber } from '@/lib/quantity/format-number'
+import { caseEvents } from './case-events'
+import { busOf, type CaseFigure, caseOf, type FigureSize, placeOf } from './case-figure'
+import { domainAround } from './domain'
+import { linePlot } from './plot/line-plot'
+import type { MarkerSpec } from './plot/line-plot-spec'
+import type { Scene } from './scene'
+import { mostSeries } from './series-style'
+import { timeWindow } from './time-window'
+import { voltageLimits } from './voltage-limits'
+
+const percent = (value: number, decimals = 2) => `${formatNumber(100 * value, { decimals })}\u2009%`
+
+const deepest = (figure: CaseFigure, busId: string): readonly MarkerSpec[] => {
+  const place = placeOf(figure.result, busId)
+  if (!place) return []
+  const { voltage, at } = place.deepest
+  const change = percent((place.before - voltage) / place.before)
+  const name = `deepest ${formatNumber(voltage / 1000, { digits: 4 })}\u2009kV, change ${change} at ${formatNumber(at, { decimals: 2 })}\u2009s`
+  return [{ x: at, y: (100 * voltage) / place.nominal, name }]
+}
+
+const inWords = (figure: CaseFigure, busIds: readonly string[]): string =>
+  busIds
+    .flatMap((id) => {
+      const place = placeOf(figure.result, id)
+      if (!place) return []
+      const part = (value: number) => percent(value / place.nominal, 1)
+      return `${busOf(figure.document, id).tag}: ${part(place.before)} of nominal before the start, lowest ${part(place.deepest.voltage)} at ${formatNumber(place.deepest.at, { decimals: 2 })} s.`
+    })
+    .join(' ')
+
+/**
+ * Remaining voltage against time at up to six buses, in per cent of each bus's nominal voltage. With a single bus the limits
+ * that apply to it in this case are drawn, and its deepest point is read off.
+ */
+export const voltagePlot = (
+  figure: CaseFigure,
+  { busIds, ...size }: FigureSize & { busIds: readonly string[] },
+): Scene => {
+  const shown = busIds.slice(0, mostSeries)
+  const window = timeWindow(figure.result)
+  const only = shown.length === 1 ? shown[0] : undefined
+  const nominal = only === undefined ? 1 : busOf(figure.document, only).nominal.si
+  const limits = (only === undefined ? [] : voltageLimits(figure, only, window)).map((limit) => ({
+    ...limit,
+    steps: limit.steps.map((step) => ({ ...step, value: (100 * step.value) / nominal })),
+  }))
+  const series = shown.map((id, style) => {
+    const bus = busOf(figure.document, id)
+    const values = figure.result.series.busVoltage[id] ?? []
+    const y = values.map((value) => (100 * value) / bus.nominal.si)
+    return { name: bus.tag, style, x: figure.result.series.time.slice(0, y.length), y }
+  })
+  const levels = limits.flatMap((limit) => limit.steps.map((step) => step.value))
+  return linePlot({
+    ...size,
+    title: `${caseOf(figure).tag}: voltage at ${series.map((one) => one.name).join(', ')}`,
+    description: inWords(figure, shown),
+    x: { label: 'time, s', domain: window, ticks: 8 },
+    y: {
+      label: 'line voltage, % of nominal',
+      domain: domainAround(
+        series.flatMap((one) => one.y),
+        levels,
+      ),
+    },
+    series,
+    limits,
+    events: caseEvents(figure),
+    markers: only === undefined ? [] : deepest(figure, only),
+  })
+}
+
+/** Buses that a voltage limit in use applies to in this case, in the order of the records. */
+export const limitedBuses = (figure: CaseFigure): readonly string[] =>
+  figure.document.plant.buses.map((bus) => bus.id).filter((id) => voltageLimits(figure, id, [0, 1]).length > 0)
