@@ -1,0 +1,55 @@
+'use client'
+
+import { useCallback, useEffect, useState } from 'react'
+import type { FieldIssue } from '@/lib/errors'
+import type { GroupDraft } from './draft'
+import { forgetDraft, keepDraft, keptDraft } from './kept-draft'
+
+interface FormState {
+  draft: GroupDraft
+  issues: readonly FieldIssue[]
+  /** Version that the text was typed over. */
+  version: number
+  /** When text that was found again had been typed; null where none was found. */
+  restoredFrom: number | null
+  /** False until the browser has looked for kept text: typing before would be lost. */
+  ready: boolean
+}
+
+/** The state of a form whose unsaved text survives a reload, a closed tab and an ended session. */
+export const useKeptDraft = (key: string, saved: GroupDraft, version: number) => {
+  const [state, setState] = useState<FormState>({ draft: saved, issues: [], version, restoredFrom: null, ready: false })
+
+  useEffect(() => {
+    const kept = keptDraft(key)
+    setState((now) =>
+      kept && !now.ready
+        ? { ...now, draft: kept.draft, version: kept.version, restoredFrom: kept.at, ready: true }
+        : { ...now, ready: true },
+    )
+  }, [key])
+
+  const change = useCallback(
+    (draft: GroupDraft, issues: readonly FieldIssue[]) => {
+      setState((now) => {
+        keepDraft(key, { draft, version: now.version, at: Date.now() })
+        return { ...now, draft, issues }
+      })
+    },
+    [key],
+  )
+
+  const refuse = useCallback((issues: readonly FieldIssue[]) => setState((now) => ({ ...now, issues })), [])
+
+  /** Goes on from another state of the record: the saved one, or a colleague's. */
+  const startFrom = useCallback(
+    (draft: GroupDraft, from: number, unsaved: boolean) => {
+      if (unsaved) keepDraft(key, { draft, version: from, at: Date.now() })
+      else forgetDraft(key)
+      setState({ draft, issues: [], version: from, restoredFrom: null, ready: true })
+    },
+    [key],
+  )
+
+  return { ...state, change, refuse, startFrom }
+}
