@@ -42,7 +42,7 @@ export const currentPlot = (figure: CaseFigure, options: FigureSize & MotorChoic
           : `${motorOf(document, motorId).tag} runs throughout.`,
       )
       .join(' '),
-    x: { label: 'time, s', domain: timeWindow(result), ticks: 8 },
+    x: { label: 'time from the first switching-on, s', domain: timeWindow(result), ticks: 8 },
     y: {
       label: 'current, A (RMS)',
       domain: domainAround(

@@ -51,7 +51,7 @@ export const speedPlot = (figure: CaseFigure, options: FigureSize & MotorChoice 
         return `${motorOf(document, motorId).tag}: ${start ? `${time}, ` : ''}${end}.`
       })
       .join(' '),
-    x: { label: 'time, s', domain: window, ticks: 8 },
+    x: { label: 'time from the first switching-on, s', domain: window, ticks: 8 },
     y: {
       label: 'speed, r/min',
       domain: domainAround(

@@ -6,7 +6,7 @@ import type { LimitSpec } from './plot/line-plot-spec'
 type Step = { from: number; to: number; value: number }
 
 /** Part of the plot that a limit on the first instant or on the settled state is drawn over. */
-const stub = 0.12
+const stub = 0.2
 
 const motorsUnder = ({ document, result }: CaseFigure, rule: LimitRecord, busId: string) =>
   result.motors

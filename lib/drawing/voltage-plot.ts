@@ -3,7 +3,7 @@ import { caseEvents } from './case-events'
 import { busOf, type CaseFigure, caseOf, type FigureSize, placeOf } from './case-figure'
 import { domainAround } from './domain'
 import { linePlot } from './plot/line-plot'
-import type { MarkerSpec } from './plot/line-plot-spec'
+import type { LimitSpec, MarkerSpec } from './plot/line-plot-spec'
 import type { Scene } from './scene'
 import { mostSeries } from './series-style'
 import { timeWindow } from './time-window'
@@ -30,6 +30,15 @@ const inWords = (figure: CaseFigure, busIds: readonly string[]): string =>
     })
     .join(' ')
 
+/** A limit on the highest voltage that is far away would only flatten the dip; it is named beside the plot instead. */
+const nearLevels = (limits: readonly LimitSpec[], values: readonly number[]): readonly number[] => {
+  const highest = values.reduce((a, b) => Math.max(a, b), Number.NEGATIVE_INFINITY)
+  const span = highest - values.reduce((a, b) => Math.min(a, b), Number.POSITIVE_INFINITY)
+  return limits
+    .flatMap((limit) => limit.steps.map((step) => step.value))
+    .filter((level) => level - highest < Math.max(0.3 * span, 1))
+}
+
 /**
  * Remaining voltage against time at up to six buses, in per cent of each bus's nominal voltage. With a single bus the limits
  * that apply to it in this case are drawn, and its deepest point is read off.
@@ -52,18 +61,15 @@ export const voltagePlot = (
     const y = values.map((value) => (100 * value) / bus.nominal.si)
     return { name: bus.tag, style, x: figure.result.series.time.slice(0, y.length), y }
   })
-  const levels = limits.flatMap((limit) => limit.steps.map((step) => step.value))
+  const values = series.flatMap((one) => one.y)
   return linePlot({
     ...size,
     title: `${caseOf(figure).tag}: voltage at ${series.map((one) => one.name).join(', ')}`,
     description: inWords(figure, shown),
-    x: { label: 'time, s', domain: window, ticks: 8 },
+    x: { label: 'time from the first switching-on, s', domain: window, ticks: 8 },
     y: {
       label: 'line voltage, % of nominal',
-      domain: domainAround(
-        series.flatMap((one) => one.y),
-        levels,
-      ),
+      domain: domainAround(values, nearLevels(limits, values)),
     },
     series,
     limits,

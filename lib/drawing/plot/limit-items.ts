@@ -23,6 +23,9 @@ export const limitLevels = (limit: LimitSpec, { x, y, area }: PlotFrame): readon
     return visible ? [level] : []
   })
 
+export const limitLength = (levels: readonly Level[]): number =>
+  levels.reduce((sum, { from, to }) => sum + to - from, 0)
+
 const hatching = (limit: LimitSpec, levels: readonly Level[]): readonly SceneItem[] =>
   limit.hatched === false
     ? []
@@ -42,6 +45,35 @@ export const limitItems = (limit: LimitSpec, levels: readonly Level[]): readonly
   }),
 ]
 
+/** What a label should not cover: the line itself and the hatching beside it. */
+export const limitObstacles = (
+  limit: LimitSpec,
+  levels: readonly Level[],
+): readonly (readonly [number, number])[][] => {
+  const outwards = limit.forbidden === 'below' ? hatchDepth : -hatchDepth
+  const depths = limit.hatched === false ? [0] : [0, outwards / 2, outwards]
+  return levels.flatMap(({ from, to, y }) =>
+    depths.map((depth): [number, number][] => [
+      [from, y + depth],
+      [to, y + depth],
+    ]),
+  )
+}
+
+/** Names of the limits that the plot cannot show or name, so that none is left out without a word. */
+export const limitNote = (
+  outside: readonly string[],
+  unnamed: readonly string[],
+  { area }: PlotFrame,
+): readonly TextItem[] => {
+  const parts = [
+    ...(outside.length > 0 ? [`outside the axes: ${outside.join('; ')}`] : []),
+    ...(unnamed.length > 0 ? [`without a name for want of room: ${unnamed.join('; ')}`] : []),
+  ]
+  if (parts.length === 0) return []
+  return [text(area.x + area.width, 2.6, parts.join('; '), { size: labelSize, anchor: 'end', ink: 'soft' })]
+}
+
 /** The name on the line: on the allowed side where there is room, from the right to the left, else beyond the hatching. */
 export const limitName = (limit: LimitSpec, levels: readonly Level[], placer: LabelPlacer): TextItem | null => {
   const length = textWidth(limit.name, labelSize)
@@ -60,5 +92,9 @@ export const limitName = (limit: LimitSpec, levels: readonly Level[], placer: La
       )
     }),
   )
-  return placer.place(candidates)
+  const first = levels[0]
+  const before = first
+    ? [text(first.from - 1, first.y + 0.33 * labelSize, limit.name, { size: labelSize, anchor: 'end' })]
+    : []
+  return placer.place([...candidates, ...before])
 }

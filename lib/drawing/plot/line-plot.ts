@@ -1,6 +1,6 @@
 import { line, path, type Scene, type SceneItem } from '../scene'
 import { LabelPlacer } from './label-placer'
-import { limitItems, limitLevels, limitName } from './limit-items'
+import { limitItems, limitLength, limitLevels, limitName, limitNote, limitObstacles } from './limit-items'
 import type { LinePlotSpec, ShadeSpec } from './line-plot-spec'
 import { eventItems, markerItems } from './mark-items'
 import { type PlotFrame, plotFrame } from './plot-frame'
@@ -16,24 +16,24 @@ const shadeItems = (shade: ShadeSpec, { x, y, area }: PlotFrame): readonly Scene
 export const linePlot = (spec: LinePlotSpec): Scene => {
   const frame = plotFrame(spec)
   const drawn = spec.series.map((series) => ({ spec: series, parts: seriesParts(series, frame) }))
-  const limits = (spec.limits ?? [])
-    .map((limit) => ({ limit, levels: limitLevels(limit, frame) }))
-    .filter(({ levels }) => levels.length > 0)
+  const levelled = (spec.limits ?? []).map((limit) => ({ limit, levels: limitLevels(limit, frame) }))
+  const limits = levelled.filter(({ levels }) => levels.length > 0)
+  const outside = levelled.filter(({ levels }) => levels.length === 0).map(({ limit }) => limit.name)
   const placer = new LabelPlacer(frame.area)
   for (const { parts } of drawn) for (const points of parts) placer.avoidCurve(points)
-  for (const { levels } of limits)
-    for (const { from, to, y } of levels)
-      placer.avoidCurve([
-        [from, y],
-        [to, y],
-      ])
+  for (const { limit, levels } of limits) for (const points of limitObstacles(limit, levels)) placer.avoidCurve(points)
   for (const { at } of spec.events ?? []) {
     placer.avoidCurve([
       [frame.x(at), frame.area.y],
       [frame.x(at), frame.area.y + frame.area.height],
     ])
   }
-  const names = limits.flatMap(({ limit, levels }) => limitName(limit, levels, placer) ?? [])
+  // The shortest line has the fewest places for its name, so it chooses first.
+  const named = limits
+    .toSorted((a, b) => limitLength(a.levels) - limitLength(b.levels))
+    .map(({ limit, levels }) => ({ limit, name: limitName(limit, levels, placer) }))
+  const names = named.flatMap(({ name }) => name ?? [])
+  const unnamed = named.filter(({ name }) => name === null).map(({ limit }) => limit.name)
   const markers = (spec.markers ?? []).flatMap((marker) => markerItems(marker, frame, placer))
   const events = (spec.events ?? []).flatMap((event) => eventItems(event, frame, placer))
   return {
@@ -48,6 +48,7 @@ export const linePlot = (spec: LinePlotSpec): Scene => {
       ...events,
       ...seriesItems(drawn, frame),
       ...frame.axes,
+      ...limitNote(outside, unnamed, frame),
       ...names,
       ...markers,
     ],

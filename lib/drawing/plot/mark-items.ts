@@ -39,7 +39,7 @@ export const markerItems = (
   const outside = at[0] < area.x || at[0] > area.x + area.width || at[1] < area.y || at[1] > area.y + area.height
   if (outside) return []
   placer.avoidBox({ x: at[0] - 0.9, y: at[1] - 0.9, width: 1.8, height: 1.8 })
-  const offsets = [2, 4, 6.5, 9.5, 13].flatMap((away) => [3.4, 6, -1.6, 0.8, -4.2, 9].map((down) => ({ away, down })))
+  const offsets = [2, 4, 6.5, 9.5, 13].flatMap((away) => [-1.6, 3.4, -4.2, 6, 0.8, 9].map((down) => ({ away, down })))
   const name = placer.place(
     offsets.flatMap(({ away, down }) => [
       text(at[0] + away, at[1] + down, marker.name, { size: labelSize }),
