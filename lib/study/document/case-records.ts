@@ -2,10 +2,12 @@ import * as z from 'zod'
 import { entered } from './entered'
 import { note, recordId, tag } from './identity'
 
-const changeOver = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('time'), at: entered('time') }),
-  z.strictObject({ kind: z.literal('speed'), at: entered('speed') }),
-])
+const changeOver = z
+  .discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('time'), at: entered('time') }),
+    z.strictObject({ kind: z.literal('speed'), at: entered('speed') }),
+  ])
+  .describe("When the device goes to its running position: a speed, or a time from the motor's switching-on.")
 
 /** A starting method with its settings; several motors and cases may use the same. */
 export const starterRecord = z.discriminatedUnion('kind', [
@@ -14,15 +16,17 @@ export const starterRecord = z.discriminatedUnion('kind', [
     id: recordId,
     tag,
     kind: z.literal('autotransformer'),
-    tap: entered('ratio'),
-    /** Own impedance in parts of its rating at the motor's rated voltage, line side; null where taken as ideal. */
+    tap: entered('ratio').describe('Voltage of the tap in parts of line voltage, for example 65 %.'),
     own: z
       .strictObject({ impedance: entered('ratio'), rating: entered('apparent-power'), xOverR: entered('ratio') })
-      .nullable(),
+      .nullable()
+      .default(null)
+      .describe(
+        "Own impedance in parts of its rating at the motor's rated voltage, line side; null where taken as ideal.",
+      ),
     changeOver,
-    /** Time without voltage; 0 s for a closed transition. */
-    gap: entered('time'),
-    duty: z.string().max(200).default(''),
+    gap: entered('time').describe('Time without voltage; 0 s for a closed transition.'),
+    duty: z.string().max(200).default('').describe('Starts that the maker of the device allows.'),
     note,
   }),
   z.strictObject({
@@ -40,16 +44,22 @@ export const starterRecord = z.discriminatedUnion('kind', [
 export const plantConditionRecord = z.strictObject({
   id: recordId,
   tag,
-  running: z.array(z.strictObject({ motor: recordId, curve: recordId })).max(200),
-  /** Capacitors in service. */
-  capacitors: z.array(recordId).max(100),
-  /** Static loads switched off in this condition; all others are on. */
-  loadsOff: z.array(recordId).max(200).default([]),
-  /** Taps that differ from the transformer's record. */
+  running: z
+    .array(z.strictObject({ motor: recordId, curve: recordId }))
+    .max(200)
+    .default([])
+    .describe('Motors that run before the start, each with the curve its load follows.'),
+  capacitors: z.array(recordId).max(100).default([]).describe('Capacitors in service.'),
+  loadsOff: z
+    .array(recordId)
+    .max(200)
+    .default([])
+    .describe('Static loads switched off in this condition; all others are on.'),
   taps: z
     .array(z.strictObject({ transformer: recordId, tap: entered('ratio') }))
     .max(100)
-    .default([]),
+    .default([])
+    .describe("Taps that differ from the transformer's record."),
   note,
 })
 
@@ -59,7 +69,8 @@ export const scheduleRecord = z.strictObject({
   starts: z
     .array(z.strictObject({ motor: recordId, at: entered('time'), starter: recordId }))
     .min(1)
-    .max(50),
+    .max(50)
+    .describe('Which motors start, when, and by which method.'),
   note,
 })
 
@@ -67,19 +78,26 @@ export const scheduleRecord = z.strictObject({
 export const loadConditionRecord = z.strictObject({
   id: recordId,
   tag,
-  curves: z.array(z.strictObject({ motor: recordId, starting: recordId, process: recordId.nullable() })).max(200),
+  curves: z
+    .array(z.strictObject({ motor: recordId, starting: recordId, process: recordId.nullable().default(null) }))
+    .max(200)
+    .describe(
+      'The curve that each driven load follows during the start and, where it changes, once the process is on.',
+    ),
   note,
 })
 
 /** A departure from the records that makes a sensitivity case; the reason prints. */
-export const caseChange = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('voltage-before'), voltage: entered('voltage') }),
-  z.strictObject({ kind: z.literal('voltage-factor'), value: entered('ratio') }),
-  z.strictObject({ kind: z.literal('transformer-impedance'), transformer: recordId, impedance: entered('ratio') }),
-  z.strictObject({ kind: z.literal('motor-admittance'), motor: recordId, factor: entered('ratio') }),
-  z.strictObject({ kind: z.literal('motor-torque'), motor: recordId, factor: entered('ratio') }),
-  z.strictObject({ kind: z.literal('inertia'), motor: recordId, factor: entered('ratio') }),
-])
+export const caseChange = z
+  .discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('voltage-before'), voltage: entered('voltage') }),
+    z.strictObject({ kind: z.literal('voltage-factor'), value: entered('ratio') }),
+    z.strictObject({ kind: z.literal('transformer-impedance'), transformer: recordId, impedance: entered('ratio') }),
+    z.strictObject({ kind: z.literal('motor-admittance'), motor: recordId, factor: entered('ratio') }),
+    z.strictObject({ kind: z.literal('motor-torque'), motor: recordId, factor: entered('ratio') }),
+    z.strictObject({ kind: z.literal('inertia'), motor: recordId, factor: entered('ratio') }),
+  ])
+  .describe('One departure from the records: a value in its place, or a factor on it.')
 
 /** Supply × plant condition × schedule × load condition, with any changes that make it a sensitivity. */
 export const caseRecord = z.strictObject({
@@ -90,10 +108,12 @@ export const caseRecord = z.strictObject({
   schedule: recordId,
   loadCondition: recordId,
   changes: z.array(caseChange).max(20).default([]),
-  /** Why the case is there; required in words for a sensitivity. */
-  reason: z.string().max(500).default(''),
-  /** A sensitivity is shown beside the others and does not count in the verdict of the whole. */
-  role: z.enum(['design', 'sensitivity', 'comparison']),
+  reason: z.string().max(500).default('').describe('Why the case is there; required in words for a sensitivity.'),
+  role: z
+    .enum(['design', 'sensitivity', 'comparison'])
+    .describe(
+      'Only design cases count in the verdict of the whole; sensitivities and comparisons are shown beside them.',
+    ),
 })
 
 export type StarterRecord = z.infer<typeof starterRecord>

@@ -3,8 +3,9 @@ import { entered } from './entered'
 import { note, recordId, tag } from './identity'
 
 const perUnitBase = z.discriminatedUnion('unit', [
-  /** Per unit on the base power and the motor's rated voltage. */
-  z.strictObject({ unit: z.literal('pu'), base: entered('apparent-power') }),
+  z
+    .strictObject({ unit: z.literal('pu'), base: entered('apparent-power') })
+    .describe("Per unit on this power and the motor's rated voltage."),
   z.strictObject({ unit: z.literal('ohm') }),
 ])
 
@@ -12,8 +13,12 @@ const perUnitBase = z.discriminatedUnion('unit', [
 const circuitValues = {
   scale: perUnitBase,
   stator: z.strictObject({ r: z.number().min(0), x: z.number().positive() }),
-  magnetising: z.number().positive(),
-  core: z.number().positive().nullable(),
+  magnetising: z.number().positive().describe('Magnetising reactance.'),
+  core: z
+    .number()
+    .positive()
+    .nullable()
+    .describe('Core-loss resistance beside the magnetising reactance; null where losses are left out.'),
   provenance: z
     .strictObject({
       kind: z.enum(['test', 'guaranteed', 'typical', 'derived', 'assumed']),
@@ -23,19 +28,22 @@ const circuitValues = {
 }
 const cage = z.strictObject({ r: z.number().positive(), x: z.number().min(0) })
 
-/** Typed parameters, or a circuit estimated from the nameplate each time the study is computed. */
-export const motorCircuit = z.discriminatedUnion('kind', [
-  z.strictObject({ kind: z.literal('single-cage'), ...circuitValues, cage }),
-  z.strictObject({ kind: z.literal('double-cage'), ...circuitValues, inner: cage, outer: cage }),
-  z.strictObject({ kind: z.literal('estimated') }),
-])
+export const motorCircuit = z
+  .discriminatedUnion('kind', [
+    z.strictObject({ kind: z.literal('single-cage'), ...circuitValues, cage }),
+    z.strictObject({ kind: z.literal('double-cage'), ...circuitValues, inner: cage, outer: cage }),
+    z.strictObject({ kind: z.literal('estimated') }),
+  ])
+  .describe(
+    'Star-equivalent circuit, rotor referred to the stator: typed, or estimated from the nameplate each time the study is computed.',
+  )
 
 export const motorRecord = z.strictObject({
   id: recordId,
   tag,
   bus: recordId,
   maker: z.string().max(120).default(''),
-  ratedPower: entered('active-power'),
+  ratedPower: entered('active-power').describe('Power at the shaft.'),
   ratedVoltage: entered('voltage'),
   poles: z
     .int()
@@ -43,47 +51,60 @@ export const motorRecord = z.strictObject({
     .max(48)
     .refine((n) => n % 2 === 0, 'The number of poles is even.'),
   ratedSpeed: entered('speed'),
-  efficiency: entered('ratio').nullable(),
-  powerFactor: entered('ratio').nullable(),
-  ratedCurrent: entered('current').nullable(),
-  lockedRotorCurrent: entered('current').nullable(),
-  /** Multiples of rated torque. */
-  lockedRotorTorque: entered('ratio').nullable(),
-  pullUpTorque: entered('ratio').nullable(),
-  breakdownTorque: entered('ratio').nullable(),
-  lockedRotorPowerFactor: entered('ratio').nullable(),
+  efficiency: entered('ratio').nullable().default(null).describe('At full load.'),
+  powerFactor: entered('ratio').nullable().default(null).describe('At full load.'),
+  ratedCurrent: entered('current').nullable().default(null),
+  lockedRotorCurrent: entered('current').nullable().default(null).describe('At rated voltage.'),
+  lockedRotorTorque: entered('ratio').nullable().default(null).describe('As a multiple of rated torque.'),
+  pullUpTorque: entered('ratio')
+    .nullable()
+    .default(null)
+    .describe('Least torque between standstill and breakdown, as a multiple of rated torque; null where not stated.'),
+  breakdownTorque: entered('ratio').nullable().default(null).describe('As a multiple of rated torque.'),
+  lockedRotorPowerFactor: entered('ratio').nullable().default(null),
   circuit: motorCircuit,
-  /** Rotor inertia J of the motor alone. */
-  inertia: entered('inertia'),
-  permissibleCold: entered('time').nullable(),
-  permissibleHot: entered('time').nullable(),
-  startsCold: z.int().min(0).max(20).nullable(),
-  startsHot: z.int().min(0).max(20).nullable(),
-  startsPerHour: z.int().min(0).max(60).nullable(),
+  inertia: entered('inertia').describe('Inertia J of the rotor alone.'),
+  permissibleCold: entered('time')
+    .nullable()
+    .default(null)
+    .describe('Permissible locked-rotor time from cold at rated voltage.'),
+  permissibleHot: entered('time')
+    .nullable()
+    .default(null)
+    .describe('Permissible locked-rotor time from hot at rated voltage.'),
+  startsCold: z.int().min(0).max(20).nullable().default(null).describe('Starts in succession from cold.'),
+  startsHot: z.int().min(0).max(20).nullable().default(null).describe('Starts in succession from hot.'),
+  startsPerHour: z.int().min(0).max(60).nullable().default(null),
   note,
 })
 
 const curvePoint = z.strictObject({ speed: entered('speed'), torque: entered('torque') })
 
 /** Torque at the motor shaft against motor speed under one process condition. */
-export const loadCurve = z.discriminatedUnion('kind', [
-  z.strictObject({
-    id: recordId,
-    name: z.string().min(1).max(80),
-    kind: z.literal('power'),
-    constant: entered('torque'),
-    atRated: entered('torque'),
-    ratedSpeed: entered('speed'),
-    exponent: entered('number'),
-    breakaway: z.strictObject({ torque: entered('torque'), until: entered('speed') }).nullable(),
-  }),
-  z.strictObject({
-    id: recordId,
-    name: z.string().min(1).max(80),
-    kind: z.literal('points'),
-    points: z.array(curvePoint).min(2).max(200),
-  }),
-])
+export const loadCurve = z
+  .discriminatedUnion('kind', [
+    z.strictObject({
+      id: recordId,
+      name: z.string().min(1).max(80).describe('The process condition, for example “valve closed”.'),
+      kind: z.literal('power'),
+      constant: entered('torque').describe('Torque of the curve at zero speed.'),
+      atRated: entered('torque').describe('Torque at the rated speed.'),
+      ratedSpeed: entered('speed'),
+      exponent: entered('number'),
+      breakaway: z
+        .strictObject({ torque: entered('torque'), until: entered('speed') })
+        .nullable()
+        .default(null)
+        .describe('Straight line from this torque at standstill to the curve at that speed.'),
+    }),
+    z.strictObject({
+      id: recordId,
+      name: z.string().min(1).max(80),
+      kind: z.literal('points'),
+      points: z.array(curvePoint).min(2).max(200).describe('Straight lines between points of rising speed.'),
+    }),
+  ])
+  .describe('Torque at the motor shaft against motor speed under one process condition.')
 
 export const drivenLoadRecord = z.strictObject({
   id: recordId,
@@ -100,12 +121,13 @@ export const drivenLoadRecord = z.strictObject({
     'mill',
     'other',
   ]),
-  /** Everything the motor turns, each with its speed as a multiple of motor speed. */
   inertias: z
     .array(
       z.strictObject({ part: z.string().min(1).max(80), inertia: entered('inertia'), speedRatio: entered('ratio') }),
     )
-    .max(20),
+    .max(20)
+    .default([])
+    .describe('Everything the motor turns, each with its speed as a multiple of motor speed.'),
   curves: z.array(loadCurve).min(1).max(20),
   note,
 })

@@ -29,38 +29,40 @@ export const studyTexts = z.strictObject({
 
 /** Settings of the calculation, each with its default stated in the report. */
 export const studySettings = z.strictObject({
-  /** Part of rated speed at which a motor counts as started. */
-  speedCriterion: entered('ratio'),
-  timeLimit: entered('time'),
-  /** Which permissible locked-rotor time the heat is judged against. */
-  thermalState: z.enum(['hot', 'cold']),
-  closeOfLimit: entered('ratio'),
-  closeVoltage: entered('ratio'),
-  startsPerDay: entered('number'),
-  startsPerHour: entered('number'),
+  speedCriterion: entered('ratio').describe('Part of rated speed at which a motor counts as started, usually 98 %.'),
+  timeLimit: entered('time').describe("A start is given up at this time after the motor's switching-on."),
+  thermalState: z.enum(['hot', 'cold']).describe('Which permissible locked-rotor time the heat is judged against.'),
+  closeOfLimit: entered('ratio').describe(
+    'Inside a limit on change, time, torque or heat by less than this part of it reads “close”.',
+  ),
+  closeVoltage: entered('ratio').describe(
+    'Inside a limit on remaining or highest voltage by less than this reads “close”, per unit.',
+  ),
+  startsPerDay: entered('number').describe('Intended use; decides which class of limits is in use.'),
+  startsPerHour: entered('number').describe('Intended use; decides which class of limits is in use.'),
 })
 
 export const plantRecords = z.strictObject({
-  buses: z.array(busRecord).max(2000),
-  supplies: z.array(supplyRecord).max(50),
-  transformers: z.array(transformerRecord).max(2000),
-  lines: z.array(lineRecord).max(2000),
-  loads: z.array(loadRecord).max(2000),
-  capacitors: z.array(capacitorRecord).max(500),
-  motors: z.array(motorRecord).max(2000),
-  drivenLoads: z.array(drivenLoadRecord).max(2000),
-  starters: z.array(starterRecord).max(500),
-  plantConditions: z.array(plantConditionRecord).max(200),
-  loadConditions: z.array(loadConditionRecord).max(200),
+  buses: z.array(busRecord).max(2000).default([]),
+  supplies: z.array(supplyRecord).max(50).default([]),
+  transformers: z.array(transformerRecord).max(2000).default([]),
+  lines: z.array(lineRecord).max(2000).default([]),
+  loads: z.array(loadRecord).max(2000).default([]),
+  capacitors: z.array(capacitorRecord).max(500).default([]),
+  motors: z.array(motorRecord).max(2000).default([]),
+  drivenLoads: z.array(drivenLoadRecord).max(2000).default([]),
+  starters: z.array(starterRecord).max(500).default([]),
+  plantConditions: z.array(plantConditionRecord).max(200).default([]),
+  loadConditions: z.array(loadConditionRecord).max(200).default([]),
 })
 
 /** The one shape: what a file holds, what a revision freezes, what the report is attached to. */
 export const studyDocument = z.strictObject({
   format: z.literal('breakaway-study'),
-  formatVersion: z.literal(1),
+  formatVersion: z.literal(1).describe('Version of this format; older files are brought up to it when read.'),
   head: studyHead,
-  frequency: entered('frequency'),
-  numberStyle: z.enum(['point', 'comma']),
+  frequency: entered('frequency').describe('System frequency.'),
+  numberStyle: z.enum(['point', 'comma']).describe('Which sign marks the decimals in values typed from now on.'),
   settings: studySettings,
   texts: studyTexts,
   plant: plantRecords,
