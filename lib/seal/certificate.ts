@@ -16,10 +16,9 @@ export interface Certificate {
   readonly spki: Uint8Array
 }
 
-/** Reads a DER certificate; anything else is refused as `invalid`. */
+/** Reads a DER certificate; anything else, and bytes after it, are refused as `invalid`. */
 export function readCertificate(der: Uint8Array): Certificate {
-  const parsed = parseCertificate(der)
-  return {
+  return reading(der, (parsed) => ({
     der,
     subject: subjectOf(parsed),
     fingerprint: sha256Hex(der),
@@ -27,15 +26,20 @@ export function readCertificate(der: Uint8Array): Certificate {
     notBefore: parsed.notBefore,
     notAfter: parsed.notAfter,
     spki: new Uint8Array(parsed.publicKey.rawData),
-  }
+  }))
 }
 
-/** The library's own view of a DER certificate; anything else, and bytes after it, are refused as `invalid`. */
+/** The library's own view of a DER certificate; refused as `readCertificate` refuses. */
 export function parseCertificate(der: Uint8Array): x509.X509Certificate {
+  return reading(der, (parsed) => parsed)
+}
+
+/** The library reads some parts late and throws what it meets: all of it means that the certificate is none. */
+function reading<T>(der: Uint8Array, use: (parsed: x509.X509Certificate) => T): T {
   try {
     const parsed = new x509.X509Certificate(new Uint8Array(der))
-    // The parser accepts looser encodings; only one file of bytes may carry a given fingerprint's names.
-    if (Buffer.compare(Buffer.from(parsed.rawData), der) === 0) return parsed
+    // The parser accepts looser encodings, and bytes behind the end; a fingerprint must name one reading only.
+    if (Buffer.compare(Buffer.from(parsed.rawData), der) === 0) return use(parsed)
   } catch {
     // refused below
   }

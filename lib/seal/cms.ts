@@ -1,5 +1,6 @@
 import * as asn1js from 'asn1js'
 import * as pkijs from 'pkijs'
+import { readCertificate } from './certificate'
 import { ecdsaFromDer, ecdsaToDer } from './ecdsa-value'
 import { signedAttributes } from './signed-attributes'
 
@@ -54,9 +55,10 @@ export function encodeCms({ documentDigest, certificate, chain, value }: CmsPart
 export function decodeCms(der: Uint8Array): CmsParts | undefined {
   try {
     const parts = partsOf(der)
+    if (parts) readCertificate(parts.certificate)
     return parts && Buffer.compare(encodeCms(parts), der) === 0 ? parts : undefined
   } catch {
-    // The library throws whatever its schema trips over; any of it means the same: not a signature of ours.
+    // The library throws whatever its schema trips over; any of it means the same: not a signature of ours, or not by a certificate.
     return undefined
   }
 }

@@ -29,13 +29,19 @@ export function appendRevision(view: PdfView, objects: ReadonlyMap<number, PDFOb
     pieces.push(piece)
     at += piece.length
   }
-  pieces.push(
-    Buffer.from(
-      `${table(offsets)}trailer\n${trailer(view, offsets, sha256(before, ...pieces))}\nstartxref\n${at}\n%%EOF\n`,
-      'latin1',
-    ),
-  )
+  // The second half of the file identifier must change with the contents, so it follows from them.
+  pieces.push(Buffer.from(revisionTail(view, offsets, at, sha256(before, ...pieces).subarray(0, 16)), 'latin1'))
   return { bytes: new Uint8Array(Buffer.concat([before, ...pieces])), offsets }
+}
+
+/** What ends a revision that follows `before`: the table of its objects, the trailer, and where the table lies. */
+export function revisionTail(
+  before: PdfView,
+  offsets: ReadonlyMap<number, number>,
+  at: number,
+  identifier: Uint8Array,
+): string {
+  return `${table(offsets)}trailer\n${trailer(before, offsets, identifier)}\nstartxref\n${at}\n%%EOF\n`
 }
 
 function table(offsets: ReadonlyMap<number, number>): string {
@@ -57,8 +63,7 @@ function consecutive(numbers: readonly number[]): number[][] {
   return runs
 }
 
-/** The trailer of the new revision; the second half of the file identifier follows the contents, as it must change with them. */
-function trailer(view: PdfView, offsets: ReadonlyMap<number, number>, digest: Uint8Array): PDFDict {
+function trailer(view: PdfView, offsets: ReadonlyMap<number, number>, identifier: Uint8Array): PDFDict {
   const old = view.trailer
   const { context, revisions } = view.file
   const dict = context.obj({
@@ -70,7 +75,7 @@ function trailer(view: PdfView, offsets: ReadonlyMap<number, number>, digest: Ui
     if (value) dict.set(key, value)
   }
   const first = view.items(old.get(PDFName.of('ID')))[0]
-  if (first) dict.set(PDFName.of('ID'), context.obj([first, PDFHexString.fromBytes(digest.subarray(0, 16))]))
+  if (first) dict.set(PDFName.of('ID'), context.obj([first, PDFHexString.fromBytes(identifier)]))
   return dict
 }
 

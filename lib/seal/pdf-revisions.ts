@@ -1,4 +1,4 @@
-import { PDFContext, PDFDict, PDFName, PDFNumber, PDFObjectParser } from '@cantoo/pdf-lib'
+import { PDFContext, PDFDict, PDFName, PDFNumber, type PDFObject, PDFObjectParser } from '@cantoo/pdf-lib'
 import { DomainError } from '@/lib/errors'
 import { verificationLimits } from './verification-limits'
 
@@ -21,6 +21,8 @@ export interface PdfFile {
   readonly bytes: Uint8Array
   readonly context: PDFContext
   readonly revisions: readonly Revision[]
+  /** The objects that have been read so far, by offset; shared by all views of the file. */
+  readonly parsed: Map<number, PDFObject>
 }
 
 /**
@@ -51,7 +53,7 @@ export function readRevisions(bytes: Uint8Array): PdfFile {
     if (previous !== undefined && previous >= xrefAt) throw broken('its revisions do not follow one another')
     xrefAt = previous
   }
-  return { bytes, context, revisions: chain(newestFirst.reverse()) }
+  return { bytes, context, revisions: chain(newestFirst.reverse()), parsed: new Map() }
 }
 
 function chain(oldestFirst: readonly Omit<Revision, 'start'>[]): Revision[] {
@@ -79,7 +81,7 @@ function readRevision(buffer: Buffer, xrefAt: number, context: PDFContext): Omit
   const table = readTable(buffer, xrefAt + 5)
   const trailer = readTrailer(buffer, table.end, context)
   if (trailer.has(PDFName.of('Encrypt')))
-    throw new DomainError('unsupported', 'The file is encrypted: reports never are.')
+    throw new DomainError('invalid', 'The file is encrypted, which reports never are: ask for the report itself.')
   if (trailer.has(PDFName.of('XRefStm')))
     throw new DomainError('unsupported', 'The file mixes two forms of object tables: reports never do.')
   const mark = buffer.indexOf('startxref', table.end, 'latin1')

@@ -15,7 +15,6 @@ export class PdfView {
   readonly file: PdfFile
   readonly revision: number
   readonly #offsets: ReadonlyMap<number, number>
-  readonly #read = new Map<number, PDFObject>()
 
   /** Looks at the file after revision `revision` (0 = as first written); the last one by default. */
   constructor(file: PdfFile, revision = file.revisions.length - 1) {
@@ -42,10 +41,10 @@ export class PdfView {
   object(number: number): PDFObject | undefined {
     const offset = this.#offsets.get(number)
     if (offset === undefined) return undefined
-    const known = this.#read.get(number)
+    const known = this.file.parsed.get(offset)
     if (known) return known
     const object = readObjectAt(this.file, number, offset)
-    this.#read.set(number, object)
+    this.file.parsed.set(offset, object)
     return object
   }
 

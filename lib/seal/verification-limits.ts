@@ -10,4 +10,6 @@ export const verificationLimits = {
   attachment: 32 * 2 ** 20,
   /** Wall-clock time of a whole check in its thread, milliseconds. */
   milliseconds: 10_000,
+  /** Memory of that thread's heap. */
+  heapMegabytes: 512,
 } as const

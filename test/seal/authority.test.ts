@@ -3,7 +3,7 @@ import { tmpdir } from 'node:os'
 import path from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { DomainError } from '@/lib/errors'
-import { type Authority, makeAuthority } from '@/lib/seal/authority'
+import { type Authority, makeAuthority, signingAlgorithm } from '@/lib/seal/authority'
 import { parseCertificate, readCertificate } from '@/lib/seal/certificate'
 import { issueSigner } from '@/lib/seal/issue-signer'
 import { makeRevocationList } from '@/lib/seal/revocation-list'
@@ -41,13 +41,41 @@ describe('the certificate authority', () => {
     expect(printed).toContain('email:marit.solberg@example.org')
   })
 
-  it('is held to leaves by its own path length: a signer cannot issue', async () => {
-    const { proof, sign } = await makeKey()
-    const leaf = await issueSigner(authority, person, proof, '0b', year)
-    const constraints = parseCertificate(authority.certificate).getExtension(x509.BasicConstraintsExtension)
-    expect(constraints).toMatchObject({ ca: true, pathLength: 0, critical: true })
-    expect(parseCertificate(leaf).getExtension(x509.BasicConstraintsExtension)?.ca).toBe(false)
-    expect((await sign(leaf)).length).toBe(64)
+  it('can issue leaves only: a checker refuses whatever is issued below them', async () => {
+    // Somebody with the authority's key issues a second authority, which issues a signer.
+    const keys = await crypto.subtle.generateKey(signingAlgorithm, true, ['sign', 'verify'])
+    const middle = await x509.X509CertificateGenerator.create({
+      serialNumber: '0b01',
+      subject: 'CN=Second authority',
+      issuer: parseCertificate(authority.certificate).subjectName,
+      ...year,
+      publicKey: keys.publicKey,
+      signingKey: authority.key,
+      signingAlgorithm,
+      extensions: [
+        new x509.BasicConstraintsExtension(true, undefined, true),
+        new x509.KeyUsagesExtension(x509.KeyUsageFlags.keyCertSign, true),
+      ],
+    })
+    const below = await makeSigner(
+      { certificate: new Uint8Array(middle.rawData), key: keys.privateKey },
+      'Too Deep',
+      '0b02',
+    )
+    const root = file('root.pem', toPem(authority.certificate, 'CERTIFICATE'))
+    const second = file('second.pem', toPem(new Uint8Array(middle.rawData), 'CERTIFICATE'))
+    const leaf = file('below.pem', toPem(below.certificate, 'CERTIFICATE'))
+    const { output } = runTool('openssl', [
+      'verify',
+      '-attime',
+      '1780000000',
+      '-CAfile',
+      root,
+      '-untrusted',
+      second,
+      leaf,
+    ])
+    expect(output).toContain('path length constraint exceeded')
   })
 
   it('writes names with letters of any language and reads them back', async () => {

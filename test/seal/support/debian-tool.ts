@@ -1,7 +1,13 @@
 import { spawnSync } from 'node:child_process'
 
 /** The Debian package that holds each outside tool with which signatures are checked. */
-const packages = { pdfsig: 'poppler-utils', certutil: 'libnss3-tools', openssl: 'openssl', qpdf: 'qpdf' } as const
+const packages = {
+  pdfsig: 'poppler-utils',
+  pdftotext: 'poppler-utils',
+  certutil: 'libnss3-tools',
+  openssl: 'openssl',
+  qpdf: 'qpdf',
+} as const
 
 /** Runs an outside tool and gives what it printed (both streams); a missing tool fails with the package to install. */
 export function runTool(tool: keyof typeof packages, args: readonly string[]): { status: number; output: string } {
