@@ -181,6 +181,8 @@ export interface CaseResult {
     emf: Volt
     /** Delivered at the supply's bus before the start. */
     powerBefore: Complex<VoltAmpere>
+    /** Delivered there just after the first switching-on; null when nothing is started or that state does not exist. */
+    powerFirst: Complex<VoltAmpere> | null
   } | null
   places: readonly PlaceResult[]
   motors: readonly MotorResult[]

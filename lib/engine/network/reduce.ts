@@ -22,12 +22,13 @@ export interface ReducedNetwork {
 /**
  * Eliminates every node that is neither kept nor driven and draws no current of its own (Kron's reduction).
  *
+ * @param driven node of known voltage; null leaves a network without source (its driving-point admittances)
  * @returns null where the eliminated part is singular (an exact resonance or a floating node)
  */
 export function reduceNetwork(
   matrix: AdmittanceMatrix,
   keep: readonly number[],
-  driven: number,
+  driven: number | null,
 ): ReducedNetwork | null {
   const n = matrix.order
   const rowOf = new Int32Array(n).fill(-1)
@@ -36,7 +37,7 @@ export function reduceNetwork(
   })
   const gone: number[] = []
   for (let node = 0; node < n; node++) if (rowOf[node] === -1 && node !== driven) gone.push(node)
-  const ends = [...keep, driven]
+  const ends = driven === null ? [...keep] : [...keep, driven]
   const columns = ends.length
 
   const inner = block(matrix, gone, gone)

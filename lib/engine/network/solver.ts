@@ -13,8 +13,8 @@ export interface NetworkSolver {
   readonly counters: { solutions: number; iterations: number; continuations: number }
   /** False where the network has no solution; `weakest` then names the row of the lowest voltage reached. */
   solve(): boolean
-  /** Forgets the last solution: the next search starts from constant impedance. */
-  forget(): void
+  /** Takes the present `voltage` for the last solution, so that the next search starts from it. */
+  resume(): void
   readonly weakest: number
   /** Largest current-balance mismatch of the last solution, in parts of the largest current at a node. */
   mismatch(): number
@@ -287,8 +287,8 @@ export function createSolver(
     get weakest() {
       return weakest
     },
-    forget() {
-      warm = false
+    resume() {
+      warm = true
     },
     solve() {
       counters.solutions++

@@ -1,0 +1,159 @@
+import type { CaseInput, InductionCircuit, LoadCurve, MotorInput } from '../case-input'
+import { type Refusal, refuse } from '../network/refusal'
+import { isZero } from '../numeric/complex'
+
+/** The first thing in a case that no calculation can be made of, or null. Values are SI. */
+export function checkCase(input: CaseInput): Refusal | null {
+  return checkBuses(input) ?? checkSupply(input) ?? checkBranches(input) ?? checkShunts(input) ?? checkMotors(input)
+}
+
+const bad = (buses: readonly string[], detail: string): Refusal => refuse('bad-value', buses, detail).outcome
+
+const positive = (value: number): boolean => Number.isFinite(value) && value > 0
+const notNegative = (value: number): boolean => Number.isFinite(value) && value >= 0
+const finite = (value: { re: number; im: number }): boolean => Number.isFinite(value.re) && Number.isFinite(value.im)
+
+function checkBuses(input: CaseInput): Refusal | null {
+  const known = new Set<string>()
+  for (const bus of input.buses) {
+    if (known.has(bus.id)) return bad([bus.id], `Bus ${bus.id} is there twice.`)
+    if (!positive(bus.nominal)) return bad([bus.id], `Bus ${bus.id} needs a nominal voltage above zero.`)
+    known.add(bus.id)
+  }
+  if (!positive(input.frequency)) return bad([], 'The frequency must be above zero.')
+  const { speedCriterion, timeLimit, tolerance } = input.settings
+  if (!positive(speedCriterion) || speedCriterion >= 1.2)
+    return bad([], 'The speed criterion must lie between 0 and 1.2 of rated speed.')
+  if (!positive(timeLimit)) return bad([], 'The time limit of a start must be above zero.')
+  if (!positive(tolerance) || tolerance > 1e-2)
+    return bad([], 'The tolerance of the integration must lie between 0 and 0.01.')
+  return null
+}
+
+function checkSupply(input: CaseInput): Refusal | null {
+  const { supply } = input
+  if (!input.buses.some((bus) => bus.id === supply.busId)) {
+    return refuse('no-supply', [supply.busId], 'The supply stands at a bus that is not in the case.').outcome
+  }
+  if (!finite(supply.impedance) || isZero(supply.impedance) || supply.impedance.re < 0) {
+    return bad([supply.busId], 'The source impedance must be above zero.')
+  }
+  if (!positive(supply.hold.voltage)) return bad([supply.busId], 'The voltage of the supply must be above zero.')
+  for (const motor of supply.motorsInLevel) {
+    const problem = circuitProblem(motor.circuit)
+    if (problem !== null) return bad([motor.busId], `A motor in the stated level: ${problem}`)
+    if (!input.buses.some((bus) => bus.id === motor.busId))
+      return bad([motor.busId], 'A motor in the stated level stands at a bus that is not in the case.')
+  }
+  return null
+}
+
+function checkBranches(input: CaseInput): Refusal | null {
+  const known = new Set(input.buses.map((bus) => bus.id))
+  for (const branch of [...input.lines, ...input.transformers]) {
+    const ends = [branch.fromBusId, branch.toBusId]
+    if (ends.some((id) => !known.has(id)))
+      return bad(ends, `Branch ${branch.id} ends at a bus that is not in the case.`)
+    if (ends[0] === ends[1]) return bad(ends, `Branch ${branch.id} begins and ends at the same bus.`)
+    if (!finite(branch.impedance) || branch.impedance.re < 0)
+      return bad(ends, `Branch ${branch.id} needs an impedance with a resistance that is not negative.`)
+  }
+  for (const line of input.lines) {
+    if (!notNegative(line.susceptance))
+      return bad([line.fromBusId, line.toBusId], `Line ${line.id} needs a susceptance of zero or more.`)
+  }
+  for (const transformer of input.transformers) {
+    const ends = [transformer.fromBusId, transformer.toBusId]
+    if (isZero(transformer.impedance)) return bad(ends, `Transformer ${transformer.id} needs an impedance above zero.`)
+    if (!positive(transformer.ratio)) return bad(ends, `Transformer ${transformer.id} needs a ratio above zero.`)
+  }
+  return null
+}
+
+function checkShunts(input: CaseInput): Refusal | null {
+  const known = new Set(input.buses.map((bus) => bus.id))
+  for (const load of input.loads) {
+    if (!known.has(load.busId)) return bad([load.busId], `Load ${load.id} stands at a bus that is not in the case.`)
+    const mix = [load.mix.impedance, load.mix.current, load.mix.power]
+    if (!finite(load.power) || !positive(load.ratedVoltage) || !notNegative(load.floor)) {
+      return bad([load.busId], `Load ${load.id} needs a power, a rated voltage above zero and a floor of zero or more.`)
+    }
+    if (!mix.every(Number.isFinite))
+      return bad([load.busId], `Load ${load.id} needs three shares of impedance, current and power.`)
+  }
+  for (const capacitor of input.capacitors) {
+    if (!known.has(capacitor.busId))
+      return bad([capacitor.busId], `Capacitor ${capacitor.id} stands at a bus that is not in the case.`)
+    if (!notNegative(capacitor.susceptance))
+      return bad([capacitor.busId], `Capacitor ${capacitor.id} needs a susceptance of zero or more.`)
+  }
+  return null
+}
+
+function checkMotors(input: CaseInput): Refusal | null {
+  const known = new Set(input.buses.map((bus) => bus.id))
+  const seen = new Set<string>()
+  for (const motor of input.motors) {
+    if (!known.has(motor.busId)) return bad([motor.busId], `Motor ${motor.id} stands at a bus that is not in the case.`)
+    if (seen.has(motor.id)) return bad([motor.busId], `Motor ${motor.id} is there twice.`)
+    seen.add(motor.id)
+    const problem = motorProblem(motor, input)
+    if (problem !== null) return bad([motor.busId], `Motor ${motor.id}: ${problem}`)
+  }
+  return null
+}
+
+function motorProblem(motor: MotorInput, input: CaseInput): string | null {
+  if (!positive(motor.ratedVoltage) || !positive(motor.ratedSpeed) || !positive(motor.ratedTorque)) {
+    return 'rated voltage, speed and torque must be above zero.'
+  }
+  if (!Number.isInteger(motor.poles) || motor.poles < 2 || motor.poles % 2 === 1)
+    return 'the number of poles must be even.'
+  if (motor.ratedSpeed >= (4 * Math.PI * input.frequency) / motor.poles)
+    return 'the rated speed must lie below synchronous speed.'
+  if (!positive(motor.inertia)) return 'the inertia must be above zero.'
+  if (!positive(motor.torqueFactor)) return 'the torque factor must be above zero.'
+  const circuit = circuitProblem(motor.circuit)
+  if (circuit !== null) return circuit
+  if (motor.duty.kind === 'running') return curveProblem(motor.duty.load)
+  const { at, starter, load, processLoad } = motor.duty
+  if (!notNegative(at)) return 'the start cannot lie before zero.'
+  if (starter.kind !== 'direct') {
+    if (!notNegative(starter.gap)) return 'the gap of the change-over must be zero or more.'
+    if (!notNegative(starter.changeOver.at)) return 'the change-over must lie at zero or later.'
+  }
+  if (starter.kind === 'autotransformer') {
+    if (!positive(starter.tap) || starter.tap > 1) return 'the tap must lie between 0 and 1.'
+    if (!finite(starter.impedance) || starter.impedance.re < 0)
+      return 'the autotransformer needs an impedance of zero or more.'
+  }
+  return curveProblem(load) ?? (processLoad === null ? null : curveProblem(processLoad))
+}
+
+function circuitProblem(circuit: InductionCircuit): string | null {
+  const { stator, magnetising, core, cages } = circuit
+  if (!finite(stator) || stator.re < 0 || stator.im < 0) return 'the stator impedance must not be negative.'
+  if (!positive(magnetising)) return 'the magnetising reactance must be above zero.'
+  if (core !== null && !positive(core)) return 'the core resistance must be above zero.'
+  if (cages.length < 1 || cages.length > 2) return 'the circuit needs one or two cages.'
+  const sound = cages.every((cage) => positive(cage.resistance) && notNegative(cage.reactance))
+  return sound ? null : 'each cage needs a resistance above zero and a reactance of zero or more.'
+}
+
+function curveProblem(curve: LoadCurve): string | null {
+  if (curve.kind === 'points') {
+    if (curve.speeds.length < 1 || curve.speeds.length !== curve.torques.length)
+      return 'the load curve needs a torque for each speed.'
+    if (!curve.torques.every(notNegative) || !curve.speeds.every(notNegative))
+      return 'the load curve needs speeds and torques of zero or more.'
+    const rising = curve.speeds.every((speed, index) => index === 0 || speed > curve.speeds[index - 1]!)
+    return rising ? null : 'the speeds of the load curve must rise.'
+  }
+  if (!notNegative(curve.constant) || !notNegative(curve.atRated)) return 'the load needs torques of zero or more.'
+  if (!positive(curve.ratedSpeed) || !notNegative(curve.exponent))
+    return 'the load curve needs a rated speed above zero and an exponent of zero or more.'
+  if (curve.breakaway !== null && (!notNegative(curve.breakaway.torque) || !positive(curve.breakaway.until))) {
+    return 'the breakaway line needs a torque of zero or more and a speed above zero.'
+  }
+  return null
+}

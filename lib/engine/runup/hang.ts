@@ -1,0 +1,64 @@
+import { newtonMetre, radianPerSecond } from '../../units/si'
+import type { StartOutcome } from '../case-result'
+import type { StartCourse } from './course'
+import { balanceNear, isStable } from './equilibrium'
+import type { System } from './system'
+
+/** How far from its balance, in parts of synchronous speed, a shaft counts as on its last stretch. */
+const near = 5e-3
+
+/**
+ * Looks whether the starts that are still open have come to where they stay: every shaft at or close to a stable
+ * balance of torques short of what the start waits for.
+ *
+ * @returns speeds at that balance, or null when a start is still on its way
+ */
+export function findHang(system: System, open: readonly StartCourse[], state: Float64Array): Float64Array | null {
+  const speeds = Float64Array.from(state)
+  const moving = turningMotors(system)
+  if (moving.length > 0) {
+    if (!balanceNear(system, moving, speeds)) return null
+    for (const i of moving) {
+      if (Math.abs(speeds[i]! - state[i]!) > near * system.plant.synchronous[i]!) return null
+    }
+    if (!isStable(system, moving, speeds) || !system.solveAt(speeds)) return null
+  }
+  for (const start of open) {
+    if (system.resting[start.motor]) continue
+    const goal = start.position === 'running' ? start.speedCriterion : start.speedChangeOver
+    if (goal !== null && speeds[start.motor]! >= goal) return null
+  }
+  return speeds
+}
+
+/** Connected motors whose shafts turn. */
+export const turningMotors = (system: System): number[] =>
+  system.plant.motors.flatMap((_, i) => (system.connection.code[i] !== 0 && !system.resting[i] ? [i] : []))
+
+/** The outcome of a start that hangs at the given speeds. */
+export function hangOutcome(system: System, start: StartCourse, speeds: Float64Array): StartOutcome {
+  const i = start.motor
+  const speed = radianPerSecond(speeds[i]!)
+  if (system.resting[i]) {
+    system.solveAt(speeds)
+    const missing = newtonMetre(-system.balance(i, 0))
+    return start.turned ? { kind: 'stalled', speed: radianPerSecond(0), missing } : { kind: 'never-turned', missing }
+  }
+  if (start.position !== 'running') return { kind: 'not-transferred', speed }
+  if (speed >= system.plant.breakdownSpeed[i]!) return { kind: 'below-criterion', speed }
+  return { kind: 'stalled', speed, missing: newtonMetre(largestLack(system, i, speeds)) }
+}
+
+/** Largest excess of load torque over motor torque between the hang and breakdown speed, the others at their speeds. */
+function largestLack(system: System, i: number, speeds: Float64Array): number {
+  const trial = Float64Array.from(speeds)
+  const [from, to] = [speeds[i]!, system.plant.breakdownSpeed[i]!]
+  const points = 200
+  let largest = 0
+  for (let p = 1; p <= points; p++) {
+    trial[i] = from + ((to - from) * p) / points
+    if (!system.solveAt(trial)) continue
+    largest = Math.max(largest, -system.balance(i, trial[i]!))
+  }
+  return largest
+}

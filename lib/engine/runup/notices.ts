@@ -1,0 +1,40 @@
+import { perUnit, second } from '../../units/si'
+import type { Notice } from '../case-result'
+import { gapOf } from '../starters/position'
+import type { BeforeStart } from './before-start'
+import type { Courses } from './course'
+import type { RunRecord } from './simulate'
+
+/** Below this part of rated voltage at the winding, torque falls faster than with the square of the voltage. */
+const reduced = 0.85
+
+/** What a reader of the results must know besides the numbers. */
+export function notices(before: BeforeStart, courses: Courses, record: RunRecord): Notice[] {
+  const { system, source } = before
+  const { plant } = system
+  const found: Notice[] = []
+  if (source.takenOut !== null) found.push({ kind: 'levels-motors-taken-out', level: source.takenOut })
+  for (const start of courses.starts) {
+    const motor = plant.motors[start.motor]!
+    if (start.standstill !== null) {
+      const share = start.starter.kind === 'star-delta' ? Math.sqrt(1 / 3) : 1
+      const winding = (share * start.standstill.motorVoltage) / motor.ratedVoltage
+      if (winding < reduced)
+        found.push({ kind: 'reduced-voltage-torque', motorId: motor.id, voltage: perUnit(winding) })
+    }
+    if (courses.changeOvers.some((change) => change.motorId === motor.id && change.tooEarly)) {
+      found.push({ kind: 'change-over-too-early', motorId: motor.id })
+    }
+    if (gapOf(start.starter) > 0) found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
+  }
+  const { buses, loads } = plant.input
+  for (const load of loads) {
+    const b = buses.findIndex((bus) => bus.id === load.busId)
+    const constant = load.mix.current === 0 && load.mix.power === 0
+    const under = constant
+      ? undefined
+      : record.samples.find((sample) => sample.observation[b]! < load.floor * load.ratedVoltage)
+    if (under) found.push({ kind: 'load-below-floor', loadId: load.id, at: second(under.t) })
+  }
+  return found
+}

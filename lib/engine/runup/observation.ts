@@ -1,0 +1,78 @@
+import { ampere, newtonMetre, radianPerSecond, type Volt, volt, voltAmpere } from '../../units/si'
+import type { MotorState } from '../case-result'
+import { loadTorqueAt } from '../driven/load-segments'
+import type { System } from './system'
+
+/**
+ * Everything that is reported of one instant, in one Float64Array: the voltage of every bus (V line to line, in the
+ * order of the input), then `perMotor` numbers a motor in the order of `channel`.
+ */
+export const channel = {
+  speed: 0,
+  torque: 1,
+  loadTorque: 2,
+  accelerating: 3,
+  lineCurrent: 4,
+  motorCurrent: 5,
+  motorVoltage: 6,
+  active: 7,
+  reactive: 8,
+} as const
+
+export const perMotor = 9
+
+export const observationLength = (system: System): number =>
+  system.plant.input.buses.length + perMotor * system.plant.motors.length
+
+/** Place of a motor's channel in an observation. */
+export const placeOf = (system: System, motor: number, which: keyof typeof channel): number =>
+  system.plant.input.buses.length + perMotor * motor + channel[which]
+
+/** Solves the network at the speeds of a state and writes down what it is like; false where there is no solution. */
+export function createObserver(system: System): (state: Float64Array, into: Float64Array) => boolean {
+  const { plant, connection } = system
+  const buses = plant.input.buses.length
+  const nodes = new Float64Array(2 * (plant.network.order + 1))
+  const { nodeOfBus } = plant.topology
+  return (state, into) => {
+    if (!system.solveAt(state)) return false
+    system.solver.recover(nodes)
+    for (let b = 0; b < buses; b++) into[b] = Math.hypot(nodes[2 * nodeOfBus[b]!]!, nodes[2 * nodeOfBus[b]! + 1]!)
+    for (let i = 0; i < plant.motors.length; i++) {
+      const at = buses + perMotor * i
+      const load = loadTorqueAt(system.driven[i]!, state[i]!)
+      const square = system.busSquare[i]!
+      const current = Math.sqrt(system.currentSquare[i]!)
+      into[at] = state[i]!
+      into[at + 1] = system.torque[i]!
+      into[at + 2] = load
+      into[at + 3] = system.torque[i]! - load
+      into[at + 4] = current / connection.current[i]!
+      into[at + 5] = current
+      into[at + 6] = Math.sqrt(square) * connection.terminal[i]!
+      into[at + 7] = square * connection.admittance[2 * i]!
+      into[at + 8] = -square * connection.admittance[2 * i + 1]!
+    }
+    return true
+  }
+}
+
+/** The electrical state of one motor in an observation. */
+export function motorState(system: System, observation: Float64Array, motor: number): MotorState {
+  const at = placeOf(system, motor, 'speed')
+  const [active, reactive] = [observation[at + channel.active]!, observation[at + channel.reactive]!]
+  const apparent = Math.hypot(active, reactive)
+  return {
+    speed: radianPerSecond(observation[at]!),
+    lineCurrent: ampere(observation[at + channel.lineCurrent]!),
+    motorCurrent: ampere(observation[at + channel.motorCurrent]!),
+    motorVoltage: volt(observation[at + channel.motorVoltage]!),
+    torque: newtonMetre(observation[at + channel.torque]!),
+    power: { re: voltAmpere(active), im: voltAmpere(reactive) },
+    powerFactor: apparent > 0 ? active / apparent : 0,
+  }
+}
+
+/** Voltages of every bus in an observation. */
+export const busVoltages = (system: System, observation: Float64Array): Volt[] =>
+  Array.from(observation.subarray(0, system.plant.input.buses.length), volt)

@@ -1,0 +1,82 @@
+import { synchronousSpeed } from '../../units/speed'
+import type { CaseInput, LoadCurve, MotorInput, Starter } from '../case-input'
+import { type LoadSegments, loadSegments } from '../driven/load-segments'
+import { breakdownSlip } from '../machines/breakdown-slip'
+import { type MachineTable, machineTable } from '../machines/machine-table'
+import { type AdmittanceMatrix, addElement, addShunts, branchMatrix } from '../network/admittance'
+import { refuse, type Setup } from '../network/refusal'
+import { impedancePart, type NonlinearLoads, nonlinearLoads } from '../network/static-load'
+import { findTopology, type Topology } from '../network/topology'
+import { checkCase } from './check-case'
+
+/** A case made ready for calculation: numbers in arrays, one entry a motor in the order of the input. */
+export interface Plant {
+  input: CaseInput
+  topology: Topology
+  /** Branches alone, through which short-circuit current flows. */
+  branches: AdmittanceMatrix
+  /** Branches, capacitors, charging and the impedance part of static loads; without source and motors. */
+  network: AdmittanceMatrix
+  supplyNode: number
+  loads: NonlinearLoads
+  motors: readonly MotorInput[]
+  machines: MachineTable
+  starters: readonly (Starter | null)[]
+  node: Int32Array
+  synchronous: Float64Array
+  inertia: Float64Array
+  torqueFactor: Float64Array
+  ratedTorque: Float64Array
+  /** Speed of the first torque maximum at constant terminal voltage, rad/s. */
+  breakdownSpeed: Float64Array
+  /** Curve before and during the start. */
+  driven: readonly LoadSegments[]
+  /** Curve once the process is on. */
+  process: readonly LoadSegments[]
+}
+
+/** Checks a case and lays out its numbers. */
+export function preparePlant(input: CaseInput): Setup<Plant> {
+  const refusal = checkCase(input)
+  if (refusal !== null) return { ok: false, outcome: refusal }
+  const found = findTopology(input.buses, input.lines, input.transformers, input.supply.busId)
+  if (!found.ok) return found
+  const topology = found.value
+  const nodeOf = (busId: string): number => topology.nodeOf.get(busId)!
+  const network = branchMatrix(topology, input.lines, input.transformers)
+  addShunts(network, topology, input.lines, input.capacitors)
+  for (const load of input.loads) {
+    const node = nodeOf(load.busId)
+    addElement(network, node, node, impedancePart(load))
+  }
+  const { motors } = input
+  if (motors.length === 0 && input.loads.length === 0 && input.buses.length === 0) {
+    return refuse('no-supply', [], 'The case has no bus.')
+  }
+  const synchronous = Float64Array.from(motors, (motor) => synchronousSpeed(input.frequency, motor.poles))
+  return {
+    ok: true,
+    value: {
+      input,
+      topology,
+      branches: branchMatrix(topology, input.lines, input.transformers),
+      network,
+      supplyNode: nodeOf(input.supply.busId),
+      loads: nonlinearLoads(input.loads, topology.nodeOf),
+      motors,
+      machines: machineTable(motors.map((motor) => motor.circuit)),
+      starters: motors.map((motor) => (motor.duty.kind === 'starting' ? motor.duty.starter : null)),
+      node: Int32Array.from(motors, (motor) => nodeOf(motor.busId)),
+      synchronous,
+      inertia: Float64Array.from(motors, (motor) => motor.inertia),
+      torqueFactor: Float64Array.from(motors, (motor) => motor.torqueFactor),
+      ratedTorque: Float64Array.from(motors, (motor) => motor.ratedTorque),
+      breakdownSpeed: Float64Array.from(motors, (motor, i) => synchronous[i]! * (1 - breakdownSlip(motor.circuit))),
+      driven: motors.map((motor) => loadSegments(motor.duty.load)),
+      process: motors.map((motor) => loadSegments(processCurve(motor))),
+    },
+  }
+}
+
+const processCurve = (motor: MotorInput): LoadCurve =>
+  motor.duty.kind === 'starting' && motor.duty.processLoad !== null ? motor.duty.processLoad : motor.duty.load

@@ -1,0 +1,181 @@
+import {
+  ampere,
+  ampereSquaredSecond,
+  joule,
+  newtonMetre,
+  perUnit,
+  type RadianPerSecond,
+  radianPerSecond,
+  second,
+  volt,
+} from '../../units/si'
+import type { CaseSeries, HeatUsed, MotorResult, PlaceResult, RunningResult, StartResult } from '../case-result'
+import type { Courses, RunningCourse, StartCourse } from './course'
+import type { Watch } from './extremes'
+import { channel, perMotor, placeOf } from './observation'
+import { channelRange, type Sample, thinSamples } from './sampler'
+import type { SettledStates } from './settled'
+import { plotScales, type RunRecord } from './simulate'
+import type { System } from './system'
+
+const voltageAt = (watch: Watch) => ({ voltage: volt(watch.value), at: second(watch.at) })
+const currentAt = (watch: Watch) => ({ current: ampere(watch.value), at: second(watch.at) })
+
+/** Voltages of every bus. Empty when the network had no solution at the first switching-on. */
+export function placeResults(
+  system: System,
+  courses: Courses,
+  record: RunRecord,
+  settled: SettledStates,
+): PlaceResult[] {
+  const { buses } = system.plant.input
+  const before = record.samples[0]!.observation
+  const first = record.first ?? (courses.starts.length === 0 ? before : null)
+  if (first === null) return []
+  const none = courses.starts.length === 0
+  return buses.map((bus, b) => {
+    const { deepest, highest } = courses.buses[b]!
+    return {
+      busId: bus.id,
+      nominal: bus.nominal,
+      before: volt(before[b]!),
+      first: volt(first[b]!),
+      deepest: none ? { voltage: volt(before[b]!), at: second(0) } : voltageAt(deepest),
+      highest: voltageAt(highest),
+      settledAfterStart: settled.afterStart === null ? null : volt(settled.afterStart[b]!),
+      settledAfterProcess: settled.afterProcess === null ? null : volt(settled.afterProcess[b]!),
+    }
+  })
+}
+
+/** Results of every motor, in the order of the case. Motors that a collapse kept from being switched on are left out. */
+export function motorResults(
+  system: System,
+  courses: Courses,
+  record: RunRecord,
+  settled: SettledStates,
+): MotorResult[] {
+  const speedOf = (motor: number): RadianPerSecond => radianPerSecond(settled.speeds[motor]!)
+  const settledSpeed = (motor: number): RadianPerSecond | null =>
+    settled.afterStart === null ? null : radianPerSecond(settled.afterStart[placeOf(system, motor, 'speed')]!)
+  return system.plant.motors.flatMap((motor, i): MotorResult[] => {
+    const start = courses.starts.find((each) => each.motor === i)
+    const running = courses.running.find((each) => each.motor === i)
+    const shared = { motorId: motor.id, speedAtEnd: speedOf(i) }
+    if (running) return [{ ...shared, start: null, running: runningResult(running, record, settledSpeed(i)) }]
+    if (!start || start.standstill === null) return []
+    return [{ ...shared, start: startResult(system, start, record, speedOf(i), settledSpeed(i)), running: null }]
+  })
+}
+
+function startResult(
+  system: System,
+  start: StartCourse,
+  record: RunRecord,
+  speedAtEnd: RadianPerSecond,
+  settledSpeed: RadianPerSecond | null,
+): StartResult {
+  const i = start.motor
+  const motor = system.plant.motors[i]!
+  const at = system.integral[i]!
+  const i2t = start.i2t ?? record.state[at]!
+  const slipEnergy = start.slipEnergy ?? record.state[at + 1]!
+  const since = (instant: number | null) => (instant === null ? null : second(instant - start.at))
+  const { accelerating } = start.watches
+  const hangs = start.outcome !== null && start.outcome.kind !== 'started'
+  const reached = start.atCriterion === null ? speedAtEnd : start.speedCriterion
+  return {
+    outcome: start.outcome ?? { kind: 'timed-out', speed: radianPerSecond(record.state[i]!) },
+    switchedOnAt: second(start.at),
+    timeTo95: since(start.at95),
+    timeToCriterion: since(start.atCriterion),
+    standstill: start.standstill!,
+    peakLineCurrent: currentAt(start.watches.line),
+    peakMotorCurrent: currentAt(start.watches.motor),
+    leastAccelerating: {
+      torque: newtonMetre(accelerating.value),
+      ofRated: perUnit(accelerating.value / motor.ratedTorque),
+      speed: speedAt(system, record, i, accelerating.at),
+    },
+    lowestMotorVoltage: voltageAt(start.watches.voltage),
+    i2t: ampereSquaredSecond(i2t),
+    slipEnergy: joule(slipEnergy),
+    kineticEnergy: joule((motor.inertia * reached ** 2) / 2),
+    heatUsed: heatUsed(system, i, i2t, slipEnergy),
+    settledSpeed: hangs && record.end.kind === 'settled' ? speedAtEnd : settledSpeed,
+  }
+}
+
+/** ∫I²dt and slip energy in parts of what the permissible locked-rotor time allows, both at rated voltage and as declared. */
+function heatUsed(system: System, i: number, i2t: number, slipEnergy: number): HeatUsed {
+  const { lockedRotorCurrent, lockedRotorTorque, permissibleTime } = system.plant.motors[i]!.declared
+  if (permissibleTime === null) return { byCurrent: null, byRotor: null, figure: null, state: null }
+  const { time, state } = permissibleTime
+  const byCurrent = lockedRotorCurrent === null ? null : perUnit(i2t / (lockedRotorCurrent ** 2 * time))
+  const byRotor =
+    lockedRotorTorque === null ? null : perUnit(slipEnergy / (lockedRotorTorque * system.plant.synchronous[i]! * time))
+  const figure = byCurrent === null || byRotor === null ? null : perUnit(Math.max(byCurrent, byRotor))
+  return { byCurrent, byRotor, figure, state }
+}
+
+function runningResult(running: RunningCourse, record: RunRecord, settledSpeed: RadianPerSecond | null): RunningResult {
+  const { watches, before, motor, pulledOutAt } = running
+  const none = Number.isNaN(watches.voltage.value)
+  return {
+    outcome: pulledOutAt === null ? { kind: 'rode-through' } : { kind: 'pulled-out', at: second(pulledOutAt) },
+    before,
+    lowestVoltage: none ? { voltage: before.motorVoltage, at: second(0) } : voltageAt(watches.voltage),
+    lowestSpeed: none
+      ? { speed: before.speed, at: second(0) }
+      : { speed: radianPerSecond(watches.speed.value), at: second(watches.speed.at) },
+    peakCurrent: none ? { current: before.motorCurrent, at: second(0) } : currentAt(watches.current),
+    settledSpeed: settledSpeed ?? (record.end.kind === 'settled' ? radianPerSecond(record.state[motor]!) : null),
+  }
+}
+
+/** Speed of a motor at an instant of the run, by a straight line between samples. */
+function speedAt(system: System, record: RunRecord, motor: number, t: number): RadianPerSecond {
+  const place = placeOf(system, motor, 'speed')
+  const { samples } = record
+  let [low, high] = [0, samples.length - 1]
+  while (high - low > 1) {
+    const middle = (low + high) >> 1
+    if (samples[middle]!.t <= t) low = middle
+    else high = middle
+  }
+  const [from, to] = [samples[low]!, samples[high] ?? samples[low]!]
+  const part = to.t > from.t ? Math.min(1, Math.max(0, (t - from.t) / (to.t - from.t))) : 0
+  return radianPerSecond(from.observation[place]! + part * (to.observation[place]! - from.observation[place]!))
+}
+
+/** The run as lines to draw: as few samples as show it truly. */
+export function caseSeries(system: System, samples: readonly Sample[]): CaseSeries {
+  const scales = plotScales(system)
+  const { buses } = system.plant.input
+  const kept = thinSamples(
+    samples,
+    channelRange(samples, (c) => scales[c]!),
+  )
+  const column = (place: number): number[] => kept.map((sample) => sample.observation[place]!)
+  const motors = system.plant.motors.map((motor, i) => {
+    const at = buses.length + perMotor * i
+    return [
+      motor.id,
+      {
+        speed: column(at + channel.speed),
+        torque: column(at + channel.torque),
+        loadTorque: column(at + channel.loadTorque),
+        lineCurrent: column(at + channel.lineCurrent),
+        motorCurrent: column(at + channel.motorCurrent),
+        motorVoltage: column(at + channel.motorVoltage),
+        activePower: column(at + channel.active),
+        reactivePower: column(at + channel.reactive),
+      },
+    ] as const
+  })
+  return {
+    time: kept.map((sample) => sample.t),
+    busVoltage: Object.fromEntries(buses.map((bus, b) => [bus.id, column(b)])),
+    motors: Object.fromEntries(motors),
+  }
+}

@@ -1,0 +1,51 @@
+import type { Courses } from './course'
+import { balanceNear, isStable, runningEquilibrium } from './equilibrium'
+import { turningMotors } from './hang'
+import { createObserver, observationLength } from './observation'
+import type { RunRecord } from './simulate'
+import type { System } from './system'
+
+/** States in which every torque balances, once the run is over; null where they were not reached or do not exist. */
+export interface SettledStates {
+  /** With the load curves of the start. */
+  afterStart: Float64Array | null
+  /** With the process on. */
+  afterProcess: Float64Array | null
+  /** Speeds at the end, rad/s: at the balance where there is one. */
+  speeds: Float64Array
+}
+
+/** Farthest balance, in parts of synchronous speed, that the end of a run is taken to lead to. */
+const near = 2e-2
+
+/** Solves for the balances that a run leads to, by algebra instead of waiting for them. */
+export function settledStates(system: System, courses: Courses, record: RunRecord): SettledStates {
+  const speeds = Float64Array.from(record.state)
+  if (record.end.kind === 'collapsed') return { afterStart: null, afterProcess: null, speeds }
+  const observe = createObserver(system)
+  const observation = (): Float64Array | null => {
+    const into = new Float64Array(observationLength(system))
+    return observe(speeds, into) ? into : null
+  }
+  const moving = turningMotors(system)
+  if (!settle(system, moving, speeds)) {
+    return { afterStart: null, afterProcess: null, speeds: Float64Array.from(record.state) }
+  }
+  const ended = Float64Array.from(speeds)
+  const started = courses.starts.every((start) => start.outcome?.kind === 'started')
+  if (!started) return { afterStart: null, afterProcess: null, speeds: ended }
+  const afterStart = observation()
+  const crawling = moving.some((i) => speeds[i]! < system.plant.breakdownSpeed[i]!)
+  system.driven = system.plant.process
+  const carried = !crawling && runningEquilibrium(system, moving, speeds).kind === 'found'
+  const afterProcess = carried ? observation() : null
+  system.driven = system.plant.driven
+  return { afterStart, afterProcess, speeds: ended }
+}
+
+function settle(system: System, moving: readonly number[], speeds: Float64Array): boolean {
+  const from = Float64Array.from(speeds)
+  if (!balanceNear(system, moving, speeds)) return false
+  const close = moving.every((i) => Math.abs(speeds[i]! - from[i]!) < near * system.plant.synchronous[i]!)
+  return close && isStable(system, moving, speeds)
+}

@@ -1,0 +1,51 @@
+import { type Complex, type VoltAmpere, voltAmpere } from '../../units/si'
+import { atSlip } from '../machines/at-slip'
+import { addElement } from '../network/admittance'
+import { reduceNetwork } from '../network/reduce'
+import { refuse, type Setup } from '../network/refusal'
+import { reciprocal } from '../numeric/complex'
+import type { Plant } from './plant'
+
+/** The supply's own impedance, and what was taken out of the stated one. */
+export interface SourceImpedance {
+  impedance: Complex
+  /** Short-circuit power of the plant's motors in the stated level at nominal voltage; null when it contains none. */
+  takenOut: VoltAmpere | null
+}
+
+/**
+ * Source impedance without the plant's motors: the admittance of the stated level minus the locked-rotor admittance
+ * of the motors in it, seen from the supply's bus through lines and transformers with static loads and capacitors off.
+ *
+ * Refused when nothing inductive remains: the motors would feed more than the whole level.
+ */
+export function sourceImpedance(plant: Plant): Setup<SourceImpedance> {
+  const { supply } = plant.input
+  if (supply.motorsInLevel.length === 0) return { ok: true, value: { impedance: supply.impedance, takenOut: null } }
+  const matrix = { order: plant.branches.order, data: Float64Array.from(plant.branches.data) }
+  for (const motor of supply.motorsInLevel) {
+    const node = plant.topology.nodeOf.get(motor.busId)!
+    addElement(matrix, node, node, atSlip(motor.circuit, 1).admittance)
+  }
+  const seen = reduceNetwork(matrix, [plant.supplyNode], null)
+  if (seen === null) return refuse('bad-value', [supply.busId], 'The network between supply and motors is singular.')
+  const motors: Complex = { re: seen.admittance[0]!, im: seen.admittance[1]! }
+  const whole = reciprocal(supply.impedance)
+  const rest = { re: whole.re - motors.re, im: whole.im - motors.im }
+  if (!(rest.re >= 0 && rest.im < 0)) {
+    return refuse(
+      'bad-value',
+      [supply.busId],
+      'The motors in the stated level feed more than the whole level; nothing remains for the supply.',
+    )
+  }
+  const impedance = reciprocal(rest)
+  const nominal = plant.topology.busOfNode[plant.supplyNode]!.nominal
+  return {
+    ok: true,
+    value: {
+      impedance,
+      takenOut: voltAmpere(nominal ** 2 * Math.hypot(motors.re, motors.im)),
+    },
+  }
+}
