@@ -14,6 +14,7 @@ import type {
 
 /** How one start ended; every outcome is a result. */
 export type StartOutcome =
+  /** Speed criterion reached and starting device in its running position; from this motor's own switching-on. */
   | { kind: 'started'; at: Second }
   /** Settled on the tap or in star: the change-over condition was never met. */
   | { kind: 'not-transferred'; speed: RadianPerSecond }
@@ -92,7 +93,7 @@ export interface StartResult {
   standstill: MotorState
   peakLineCurrent: { current: Ampere; at: Second }
   peakMotorCurrent: { current: Ampere; at: Second }
-  /** Least motor torque minus load torque from standstill to 95 % of rated speed. */
+  /** Least motor torque minus load torque from standstill to 95 % of rated speed; a gap without voltage does not count. */
   leastAccelerating: { torque: NewtonMetre; ofRated: PerUnit; speed: RadianPerSecond }
   lowestMotorVoltage: VoltageAt
   /** ∫I²dt of the motor current from switching-on to the speed criterion (to the end where not reached). */

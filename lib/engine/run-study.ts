@@ -1,18 +1,34 @@
+import type { CaseInput } from './case-input'
+import type { CaseResult } from './case-result'
+import { judge } from './criteria/judge'
+import { overallVerdict } from './criteria/overall'
+import type { Verdict } from './criteria/rule'
 import { runCase } from './run-case'
 import type { StudyResult, StudyRunInput } from './study-run'
 import { ENGINE_VERSION } from './version'
 
 /** Computes every case of a study and holds the limits against them; `onProgress` hears of each finished case. */
 export function runStudy(input: StudyRunInput, onProgress?: (done: number, of: number) => void): StudyResult {
-  const cases = input.cases.map((each, index) => {
-    const result = runCase(each)
-    onProgress?.(index + 1, input.cases.length)
-    return result
-  })
-  return {
-    engineVersion: ENGINE_VERSION,
-    cases,
-    verdicts: [],
-    overall: { word: 'not-assessed', governing: null, counts: { meets: 0, close: 0, fails: 0, 'not-assessed': 0 } },
+  const results: CaseResult[] = []
+  for (const result of computeCases(input.cases)) {
+    results.push(result)
+    onProgress?.(results.length, input.cases.length)
   }
+  return judgeStudy(input, results)
+}
+
+/** Computes cases one after the other, so that a caller can stop, report or yield between them. */
+export function* computeCases(cases: readonly CaseInput[]): Generator<CaseResult, void, undefined> {
+  for (const each of cases) yield runCase(each)
+}
+
+/** Holds the limits of a study against cases already computed, in the order of its cases. */
+export function judgeStudy(input: StudyRunInput, results: readonly CaseResult[]): StudyResult {
+  const verdicts = input.rules.flatMap((rule) =>
+    input.cases.flatMap((each, index): Verdict[] => {
+      const verdict = judge(rule, each, results[index]!, input.starts, input.margins)
+      return verdict === null ? [] : [verdict]
+    }),
+  )
+  return { engineVersion: ENGINE_VERSION, cases: results, verdicts, overall: overallVerdict(verdicts) }
 }

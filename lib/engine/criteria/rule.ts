@@ -9,7 +9,7 @@ export type RulePlace =
   | { kind: 'running-motors' }
 
 /**
- * What is limited. Change: (reference − U)/reference, the largest for `deepest`. Remaining: U/reference, the least.
+ * What is limited. Change: (U before − U)/reference, the largest for `deepest`. Remaining: U/reference, the least.
  * Highest: U/reference, the largest over the run. Time in s, torque in parts of rated torque, heat in parts of the permissible.
  */
 export type RuleQuantity =
