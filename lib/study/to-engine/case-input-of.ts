@@ -1,0 +1,92 @@
+import type { CaseInput, InductionCircuit, MotorInput } from '../../engine/case-input'
+import { hertz, perUnit, second, volt } from '../../units/si'
+import type { CaseRecord } from '../document/case-records'
+import type { StudyDocument } from '../document/study-document'
+import { curveOf, type RecordIndex } from '../references/record-index'
+import { lineInput, transformerInput } from './branch-inputs'
+import { loadCurveInput } from './load-curve-input'
+import { motorInput } from './motor-input'
+import { capacitorInput, staticLoadInput } from './shunt-inputs'
+import { starterInput } from './starter-input'
+import { supplyInput } from './supply-input'
+
+/** Local error that the run-up is integrated to; tight enough that no printed digit depends on it. */
+const tolerance = 1e-8
+
+const found = <T>(value: T | undefined, what: string): T => {
+  if (value === undefined) throw new RangeError(`${what} was not checked: a reference leads nowhere`)
+  return value
+}
+
+type Duties = readonly { motorId: string; duty: MotorInput['duty'] }[]
+
+const runningDuties = (record: CaseRecord, index: RecordIndex): Duties =>
+  found(index.plantConditions.get(record.plantCondition), record.id).running.map(({ motor, curve }) => ({
+    motorId: motor,
+    duty: { kind: 'running', load: loadCurveInput(found(curveOf(index, motor, curve), record.id)) },
+  }))
+
+const startingDuties = (record: CaseRecord, index: RecordIndex): Duties => {
+  const { curves } = found(index.loadConditions.get(record.loadCondition), record.id)
+  return found(index.schedules.get(record.schedule), record.id).starts.map(({ motor, at, starter }) => {
+    const { starting, process } = found(
+      curves.find((one) => one.motor === motor),
+      record.id,
+    )
+    const curve = (id: string) => loadCurveInput(found(curveOf(index, motor, id), record.id))
+    return {
+      motorId: motor,
+      duty: {
+        kind: 'starting',
+        at: second(at.si),
+        starter: starterInput(found(index.starters.get(starter), record.id), found(index.motors.get(motor), record.id)),
+        load: curve(starting),
+        processLoad: process === null ? null : curve(process),
+      },
+    }
+  })
+}
+
+/** One case of a checked document as the engine sees it, all in SI. */
+export const caseInputOf = (
+  document: StudyDocument,
+  record: CaseRecord,
+  index: RecordIndex,
+  circuits: ReadonlyMap<string, InductionCircuit>,
+): CaseInput => {
+  const { plant, settings, frequency } = document
+  const condition = found(index.plantConditions.get(record.plantCondition), record.id)
+  const supply = found(index.supplies.get(record.supply), record.id)
+  const circuitOf = (motorId: string) => found(circuits.get(motorId), `motor ${motorId}`)
+  return {
+    id: record.id,
+    frequency: hertz(frequency.si),
+    buses: plant.buses.map(({ id, nominal }) => ({ id, nominal: volt(nominal.si) })),
+    supply: supplyInput(
+      supply,
+      record,
+      supply.plantMotorsIncluded === 'yes'
+        ? plant.motors.map(({ id, bus }) => ({ busId: bus, circuit: circuitOf(id) }))
+        : [],
+    ),
+    transformers: plant.transformers.map((transformer) => transformerInput(transformer, condition, record)),
+    lines: plant.lines.map(lineInput),
+    loads: plant.loads.filter(({ id }) => !condition.loadsOff.includes(id)).map(staticLoadInput),
+    capacitors: plant.capacitors.filter(({ id }) => condition.capacitors.includes(id)).map(capacitorInput),
+    motors: [...runningDuties(record, index), ...startingDuties(record, index)].map(({ motorId, duty }) =>
+      motorInput({
+        motor: found(index.motors.get(motorId), record.id),
+        load: found(index.loadOfMotor.get(motorId), record.id),
+        circuit: circuitOf(motorId),
+        duty,
+        record,
+        settings,
+      }),
+    ),
+    settings: {
+      speedCriterion: perUnit(settings.speedCriterion.si),
+      timeLimit: second(settings.timeLimit.si),
+      tolerance,
+    },
+  }
+}

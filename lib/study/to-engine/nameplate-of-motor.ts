@@ -1,0 +1,28 @@
+import type { Nameplate } from '../../engine/estimate/nameplate'
+import { ampere, hertz, newtonMetre, radianPerSecond, volt, watt } from '../../units/si'
+import type { MotorRecord } from '../document/machine-records'
+
+/** Rated torque P/ω of a motor, in N·m. */
+export const ratedTorqueOf = (motor: MotorRecord): number => motor.ratedPower.si / motor.ratedSpeed.si
+
+/** What the estimator reads of a motor's record; null where the record lacks what it cannot do without. */
+export const nameplateOf = (motor: MotorRecord, frequency: number): Nameplate | null => {
+  const { efficiency, powerFactor, lockedRotorCurrent } = motor
+  if (!efficiency || !powerFactor || !lockedRotorCurrent) return null
+  const torque = (multiple: MotorRecord['lockedRotorTorque']) =>
+    multiple && newtonMetre(multiple.si * ratedTorqueOf(motor))
+  return {
+    ratedPower: watt(motor.ratedPower.si),
+    ratedVoltage: volt(motor.ratedVoltage.si),
+    frequency: hertz(frequency),
+    poles: motor.poles,
+    ratedSpeed: radianPerSecond(motor.ratedSpeed.si),
+    efficiency: efficiency.si,
+    powerFactor: powerFactor.si,
+    ratedCurrent: motor.ratedCurrent && ampere(motor.ratedCurrent.si),
+    lockedRotorCurrent: ampere(lockedRotorCurrent.si),
+    lockedRotorTorque: torque(motor.lockedRotorTorque),
+    breakdownTorque: torque(motor.breakdownTorque),
+    lockedRotorPowerFactor: motor.lockedRotorPowerFactor?.si ?? null,
+  }
+}

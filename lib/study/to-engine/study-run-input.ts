@@ -1,0 +1,61 @@
+import type { InductionCircuit } from '../../engine/case-input'
+import type { StudyRunInput } from '../../engine/study-run'
+import { DomainError, type FieldIssue } from '../../errors'
+import { perUnit } from '../../units/si'
+import type { StudyDocument } from '../document/study-document'
+import { checkReferences } from '../references/check-references'
+import { type RecordIndex, recordIndex } from '../references/record-index'
+import { caseInputOf } from './case-input-of'
+import { circuitEstimator, circuitInput } from './circuit-input'
+import { ruleInputOf } from './rule-input-of'
+
+/** Motors whose circuit some case needs: connected ones, and all where a level contains the plant's motors. */
+const neededMotors = (document: StudyDocument, index: RecordIndex): ReadonlySet<string> => {
+  const { cases, plant } = document
+  const connected = cases.flatMap((record) => [
+    ...(index.plantConditions.get(record.plantCondition)?.running ?? []),
+    ...(index.schedules.get(record.schedule)?.starts ?? []),
+  ])
+  const inLevel = cases.some((record) => index.supplies.get(record.supply)?.plantMotorsIncluded === 'yes')
+  return new Set([...connected.map(({ motor }) => motor), ...(inLevel ? plant.motors.map(({ id }) => id) : [])])
+}
+
+const circuitsOf = (document: StudyDocument, index: RecordIndex) => {
+  const estimate = circuitEstimator(document.frequency.si)
+  const needed = neededMotors(document, index)
+  const circuits = new Map<string, InductionCircuit>()
+  const issues: FieldIssue[] = []
+  document.plant.motors.forEach((motor, i) => {
+    if (!needed.has(motor.id)) return
+    const outcome = circuitInput(motor, estimate)
+    if (outcome.ok) circuits.set(motor.id, outcome.circuit)
+    else
+      issues.push({
+        path: ['plant', 'motors', i, 'circuit'],
+        message: `No circuit fits the nameplate of motor ${motor.tag}. ${outcome.detail}`,
+      })
+  })
+  return { circuits, issues }
+}
+
+const refuse = (issues: readonly FieldIssue[]): DomainError =>
+  new DomainError('invalid', `The study cannot be computed: ${issues[0]?.message}`, issues)
+
+/**
+ * All cases and limits of a document as the engine computes them, in SI. A document that does not fit together, or a
+ * nameplate that no motor can have, is refused with one sentence a field.
+ */
+export const studyRunInput = (document: StudyDocument): StudyRunInput => {
+  const broken = checkReferences(document)
+  if (broken.length > 0) throw refuse(broken)
+  const index = recordIndex(document)
+  const { circuits, issues } = circuitsOf(document, index)
+  if (issues.length > 0) throw refuse(issues)
+  const { settings, cases, limits } = document
+  return {
+    cases: cases.map((record) => caseInputOf(document, record, index, circuits)),
+    rules: limits.map((limit) => ruleInputOf(limit, cases)),
+    starts: { perDay: settings.startsPerDay.si, perHour: settings.startsPerHour.si },
+    margins: { ofLimit: perUnit(settings.closeOfLimit.si), voltage: perUnit(settings.closeVoltage.si) },
+  }
+}
