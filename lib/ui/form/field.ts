@@ -36,6 +36,8 @@ export interface DecimalField extends Named {
   kind: 'decimal'
   optional?: true
   initial?: string
+  /** How it reads in a line with others, `#` standing for the number. */
+  inLine?: string
 }
 
 /** A value with its unit as typed, and where it came from. */

@@ -18,7 +18,9 @@ const joined = (fields: readonly Field[], group: GroupDraft, options: Options): 
   fields
     .map((field) => {
       const part = group.parts[field.name]
-      return part ? showDraft(field, part, options).text : ''
+      if (!part) return ''
+      const { text } = showDraft(field, part, options)
+      return field.kind === 'decimal' && field.inLine && text !== '' ? field.inLine.replace('#', text) : text
     })
     .filter((text) => text !== '')
     .join(' ')
@@ -72,6 +74,12 @@ export const fieldAt = (
   if (rest.length === 0) return { field, draft: part }
   if (part.is !== 'group') return null
   if (field.kind === 'group') return fieldAt(field.fields, part, rest)
+  // The name of the shape itself.
+  if (field.kind === 'variants' && rest.length === 1 && rest[0] === field.tag)
+    return {
+      field: { kind: 'choice', name: field.tag, label: field.label, options: field.options },
+      draft: { is: 'text', text: part.choice },
+    }
   const chosen = field.kind === 'variants' ? field.options.find((option) => option.value === part.choice) : undefined
   return chosen ? fieldAt(chosen.fields, part, rest) : null
 }

@@ -12,19 +12,28 @@ interface FormState {
   version: number
   /** When text that was found again had been typed; null where none was found. */
   restoredFrom: number | null
+  /** True once typed into and not saved. */
+  touched: boolean
   /** False until the browser has looked for kept text: typing before would be lost. */
   ready: boolean
 }
 
 /** The state of a form whose unsaved text survives a reload, a closed tab and an ended session. */
 export const useKeptDraft = (key: string, saved: GroupDraft, version: number) => {
-  const [state, setState] = useState<FormState>({ draft: saved, issues: [], version, restoredFrom: null, ready: false })
+  const [state, setState] = useState<FormState>({
+    draft: saved,
+    issues: [],
+    version,
+    restoredFrom: null,
+    touched: false,
+    ready: false,
+  })
 
   useEffect(() => {
     const kept = keptDraft(key)
     setState((now) =>
       kept && !now.ready
-        ? { ...now, draft: kept.draft, version: kept.version, restoredFrom: kept.at, ready: true }
+        ? { ...now, draft: kept.draft, version: kept.version, restoredFrom: kept.at, touched: true, ready: true }
         : { ...now, ready: true },
     )
   }, [key])
@@ -33,7 +42,7 @@ export const useKeptDraft = (key: string, saved: GroupDraft, version: number) =>
     (draft: GroupDraft, issues: readonly FieldIssue[]) => {
       setState((now) => {
         keepDraft(key, { draft, version: now.version, at: Date.now() })
-        return { ...now, draft, issues }
+        return { ...now, draft, issues, touched: true }
       })
     },
     [key],
@@ -46,10 +55,15 @@ export const useKeptDraft = (key: string, saved: GroupDraft, version: number) =>
     (draft: GroupDraft, from: number, unsaved: boolean) => {
       if (unsaved) keepDraft(key, { draft, version: from, at: Date.now() })
       else forgetDraft(key)
-      setState({ draft, issues: [], version: from, restoredFrom: null, ready: true })
+      setState({ draft, issues: [], version: from, restoredFrom: null, touched: unsaved, ready: true })
     },
     [key],
   )
+
+  useEffect(() => {
+    // Somebody else's change, or one made in the table, reaches a sheet that holds no text of its own.
+    if (!state.touched && state.ready && version !== state.version) startFrom(saved, version, false)
+  }, [state.touched, state.ready, state.version, version, saved, startFrom])
 
   return { ...state, change, refuse, startFrom }
 }

@@ -1,0 +1,97 @@
+import type { Field, Variant } from '@/lib/ui/form/field'
+import { column, type KindDescription } from '../kind-description'
+import { motorField, tagField } from './fields-for-all'
+
+const factor = (name: string, label: string, hint: string): Field => ({
+  kind: 'quantity',
+  name,
+  label,
+  quantity: 'ratio',
+  hint,
+})
+
+const changes: readonly Variant[] = [
+  {
+    value: 'voltage-before',
+    label: 'voltage before the start',
+    fields: [{ kind: 'quantity', name: 'voltage', label: 'Line voltage', quantity: 'voltage' }],
+  },
+  {
+    value: 'voltage-factor',
+    label: 'voltage factor inside the level',
+    fields: [factor('value', 'Voltage factor', 'For example 1.10.')],
+  },
+  {
+    value: 'transformer-impedance',
+    label: 'transformer impedance',
+    fields: [
+      { kind: 'reference', name: 'transformer', label: 'Transformer', to: 'transformer' },
+      factor('impedance', 'Short-circuit impedance', 'For example 8.8 %.'),
+    ],
+  },
+  {
+    value: 'motor-admittance',
+    label: 'all admittances of a motor',
+    fields: [motorField(), factor('factor', 'Multiplied by', '1.2 is a locked-rotor current 20 % higher.')],
+  },
+  {
+    value: 'motor-torque',
+    label: 'torque of a motor',
+    fields: [motorField(), factor('factor', 'Multiplied by', '0.85 is a torque 15 % lower.')],
+  },
+  {
+    value: 'inertia',
+    label: 'inertia of a drive',
+    fields: [motorField(), factor('factor', 'Multiplied by', '1.1 is an inertia 10 % higher.')],
+  },
+]
+
+/** The study's cases; not a word of the language, so the name says what it is. */
+export const studyCase: KindDescription = {
+  kind: 'case',
+  one: 'case',
+  many: 'Cases',
+  empty: 'Add the weakest supply with all others running, direct-on-line; then the first start, and the other methods.',
+  sourced: false,
+  fields: [
+    tagField(),
+    {
+      kind: 'choice',
+      name: 'role',
+      label: 'What it is for',
+      initial: 'design',
+      options: [
+        { value: 'design', label: 'design: counts in the verdict' },
+        { value: 'sensitivity', label: 'sensitivity: shown beside it' },
+        { value: 'comparison', label: 'comparison: shown beside it' },
+      ],
+    },
+    { kind: 'reference', name: 'supply', label: 'Supply condition', to: 'supply' },
+    { kind: 'reference', name: 'plantCondition', label: 'Plant condition', to: 'plant-condition' },
+    { kind: 'reference', name: 'schedule', label: 'Start schedule', to: 'schedule' },
+    { kind: 'reference', name: 'loadCondition', label: 'Load condition', to: 'load-condition' },
+    {
+      kind: 'list',
+      name: 'changes',
+      label: 'Departures from the records',
+      item: 'change',
+      fields: [{ kind: 'variants', name: '', label: 'What differs', tag: 'kind', options: changes }],
+    },
+    {
+      kind: 'text',
+      name: 'reason',
+      label: 'Why this case',
+      lines: 2,
+      optional: true,
+      hint: 'Needed for a sensitivity.',
+    },
+  ],
+  columns: [
+    column('Role', 'role'),
+    column('Supply', 'supply'),
+    column('Plant condition', 'plantCondition'),
+    column('Start schedule', 'schedule'),
+    column('Load condition', 'loadCondition'),
+    column('Departures', 'changes'),
+  ],
+}
