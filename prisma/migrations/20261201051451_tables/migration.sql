@@ -279,7 +279,6 @@ CREATE TABLE "prepared_signature" (
     "user_id" TEXT NOT NULL,
     "fingerprint" TEXT NOT NULL,
     "base_sha256" TEXT NOT NULL,
-    "state" BYTEA NOT NULL,
     "at" TIMESTAMPTZ(3) NOT NULL,
     "expires_at" TIMESTAMPTZ(3) NOT NULL,
 

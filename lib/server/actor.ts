@@ -1,0 +1,10 @@
+/** A signed-in person. */
+export interface Actor {
+  userId: string
+  name: string
+  email: string
+  /** The organisation that a command without a project means; the person's first one where it is left out. */
+  organisationId?: string
+  /** True until the password that an administrator handed over is replaced. */
+  initialPassword?: boolean
+}

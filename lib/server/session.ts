@@ -1,0 +1,24 @@
+import 'server-only'
+import { headers } from 'next/headers'
+import { redirect } from 'next/navigation'
+import { cache } from 'react'
+import type { Actor } from './actor'
+import { auth } from './auth'
+
+/** The person behind a request's headers; null without a session that is in force. */
+export async function actorOf(requestHeaders: Headers): Promise<Actor | null> {
+  const session = await auth().api.getSession({ headers: requestHeaders })
+  if (!session) return null
+  const { id, name, email, initialPassword } = session.user
+  return { userId: id, name, email, initialPassword: initialPassword ?? false }
+}
+
+/** The signed-in person, looked up once a request; null when nobody is signed in. */
+export const currentActor: () => Promise<Actor | null> = cache(async () => actorOf(await headers()))
+
+/** The signed-in person; anybody else is sent to the sign-in page. */
+export async function requireActor(): Promise<Actor> {
+  const actor = await currentActor()
+  if (!actor) redirect('/sign-in')
+  return actor
+}
