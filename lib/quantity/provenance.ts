@@ -6,7 +6,7 @@ export type ProvenanceKind = (typeof provenanceKinds)[number]
 /** The kind, and beside it the document, the formula (derived) or the reason (assumed). */
 export interface Provenance {
   kind: ProvenanceKind
-  note: string
+  source: string
 }
 
 /** The mark before a value and its words in a legend; the same on the screen and in the report. */

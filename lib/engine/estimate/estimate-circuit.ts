@@ -1,0 +1,147 @@
+import { ohm } from '../../units/si'
+import type { InductionCircuit } from '../case-input'
+import {
+  highest,
+  looseness,
+  lowest,
+  plainGuess,
+  toCircuit,
+  type UnknownName,
+  type Unknowns,
+  unknownNames,
+} from './circuit-unknowns'
+import type { CircuitVector } from './circuit-vector'
+import { dampedLeastSquares } from './damped-least-squares'
+import { inPerUnit, type Nameplate, type PlateInPerUnit, plateBase } from './nameplate'
+import { fitResiduals, type PlateQuantity, plateFigures, relativeMismatch, stated } from './plate-mismatch'
+import { type PlateContradiction, type PlateRefusal, plateContradictions, refusePlate } from './plate-problems'
+
+/** How far the circuit is from one quantity of the plate: figure over plate minus one. */
+export interface PlateResidual {
+  quantity: PlateQuantity
+  residual: number
+}
+
+export type EstimateFlag =
+  /** The circuit misses this quantity by more than a part in a thousand: the plate cannot be met by one motor. */
+  | { kind: 'not-met'; quantity: PlateQuantity; residual: number }
+  /** This parameter lies at the edge of what motors have. */
+  | { kind: 'at-edge'; parameter: UnknownName }
+
+export type EstimateOutcome =
+  | {
+      kind: 'estimated'
+      /** Star, ohm per phase, rotor referred to the stator. */
+      circuit: InductionCircuit
+      residuals: readonly PlateResidual[]
+      /** Largest size among the residuals. */
+      largestResidual: number
+      flags: readonly EstimateFlag[]
+      contradictions: readonly PlateContradiction[]
+    }
+  | { kind: 'refused'; cause: PlateRefusal; detail: string }
+
+/** Weights of the priors, from a firm hand to one that only picks among equals. */
+const fading = [0.1, 0.03, 0.01, 3e-3, 1e-3, 1e-4, 1e-5, 1e-6]
+
+/** Residual at which a start is good enough that no other one is tried. */
+const goodEnough = 1e-5
+
+/** Where the search begins beside the plain guess: shifts of the unknowns, as logarithms. */
+const otherStarts: readonly (readonly number[])[] = [
+  [0.7, 0, 0, 0.7, -0.4, 0.8, 0, 0.8],
+  [-0.7, 0.4, 0, -0.4, 0.3, -0.8, -0.4, -0.8],
+  [0, -0.6, 0.5, 0, -0.2, 1.4, 0.5, 0],
+  [-1.2, 0.5, -0.3, 0, 0, 0.5, -0.8, 1.5],
+  [0.4, -0.9, 0.2, 1.2, 0.2, 0, 0.7, -1.5],
+  [1.1, 0.3, 0, 1.6, -0.3, 2, -0.9, 1.2],
+  [-1.8, 0, 0, -0.8, 0.1, -1.5, 0.2, 0.4],
+]
+
+interface Fit {
+  circuit: CircuitVector
+  unknowns: Unknowns
+  residuals: readonly number[]
+  largest: number
+}
+
+const fitFrom = (plate: PlateInPerUnit, start: Unknowns, weights: readonly number[]): Fit => {
+  const wanted = stated(plate)
+  const guess = plainGuess(plate)
+  const circuit = new Float64Array(8)
+  let unknowns = start
+  for (const weight of weights) {
+    const problem = {
+      low: lowest,
+      high: highest,
+      residuals: (x: Unknowns) => [
+        ...fitResiduals(toCircuit(x, circuit), plate.slip, wanted),
+        ...Array.from(x, (value, i) => (weight * (value - guess[i]!)) / looseness[i]!),
+      ],
+    }
+    unknowns = dampedLeastSquares(problem, unknowns).x
+  }
+  const found = toCircuit(unknowns, new Float64Array(8))
+  const residuals = relativeMismatch(plateFigures(found, plate.slip).figures, wanted)
+  return { circuit: found, unknowns, residuals, largest: Math.max(...residuals.map(Math.abs)) }
+}
+
+/** The first start that meets the plate, else the nearest of all. */
+const bestFit = (plate: PlateInPerUnit): Fit => {
+  const guess = plainGuess(plate)
+  let best = fitFrom(plate, guess, fading)
+  for (const shift of otherStarts) {
+    if (best.largest <= goodEnough) break
+    const start = guess.map((value, i) => Math.min(highest[i]!, Math.max(lowest[i]!, value + shift[i]!)))
+    const other = fitFrom(plate, start, fading.slice(3))
+    if (other.largest < best.largest) best = other
+  }
+  return best
+}
+
+const flagsOf = (found: Fit, residuals: readonly PlateResidual[]): readonly EstimateFlag[] => [
+  ...residuals
+    .filter(({ residual }) => Math.abs(residual) > 1e-3)
+    .map(({ quantity, residual }) => ({ kind: 'not-met' as const, quantity, residual })),
+  ...unknownNames.flatMap((parameter, i) => {
+    const value = found.unknowns[i]!
+    const atEdge = value <= lowest[i]! + 1e-9 || value >= highest[i]! - 1e-9
+    return atEdge ? [{ kind: 'at-edge' as const, parameter }] : []
+  }),
+]
+
+/**
+ * The plainest double-cage circuit that has a plate's shaft power, power factor, efficiency, locked-rotor current and,
+ * where given, locked-rotor torque, breakdown torque and locked-rotor power factor.
+ *
+ * Eight unknowns in logarithms, per unit on P/(η·cos φ), in a box of plausible values; damped least squares with priors
+ * that fade, so that among all circuits that meet the plate the one nearest to the plain guess is taken. Friction and
+ * stray losses lie in the core resistance. Valid for cage motors of about 11 kW to 15 MW. A plate does not fix the
+ * run-up: circuits that meet the same plate differ by a fifth in run-up time.
+ * Refused, with the reason, where no circuit can have such a plate (efficiency at or above 1 − slip, for example).
+ */
+export const estimateCircuit = (plate: Nameplate): EstimateOutcome => {
+  const refusal = refusePlate(plate)
+  if (refusal) return { kind: 'refused', ...refusal }
+  const base = plateBase(plate)
+  const perUnit = inPerUnit(plate, base)
+  const found = bestFit(perUnit)
+  const residuals = stated(perUnit).map(([quantity], i) => ({ quantity, residual: found.residuals[i]! }))
+  const inOhm = (index: number) => ohm(found.circuit[index]! * base.impedance)
+  return {
+    kind: 'estimated',
+    circuit: {
+      stator: { re: inOhm(0), im: inOhm(1) },
+      magnetising: inOhm(2),
+      core: inOhm(3),
+      cages: [
+        { resistance: inOhm(4), reactance: inOhm(5) },
+        { resistance: inOhm(6), reactance: inOhm(7) },
+      ],
+    },
+    residuals,
+    largestResidual: found.largest,
+    flags: flagsOf(found, residuals),
+    contradictions: plateContradictions(plate),
+  }
+}
