@@ -1,4 +1,5 @@
-import type { CircuitVector } from './circuit-vector'
+import { ohm } from '../../units/si'
+import type { InductionCircuit } from '../case-input'
 import type { PlateInPerUnit } from './nameplate'
 
 /**
@@ -29,18 +30,18 @@ export const highest: Unknowns = Float64Array.from(box, ([, high]) => Math.log(h
 /** How far from the plain guess an unknown may lie before it counts, as a factor's logarithm. */
 export const looseness: Unknowns = Float64Array.from([0.4, 0.4, 1, 0.8, 0.5, 0.8, 0.4, 0.8])
 
-export const toCircuit = (unknowns: Unknowns, into: CircuitVector): CircuitVector => {
-  const innerResistance = Math.exp(unknowns[4]!)
-  const outerReactance = Math.exp(unknowns[6]!)
-  into[0] = Math.exp(unknowns[0]!)
-  into[1] = Math.exp(unknowns[1]!)
-  into[2] = Math.exp(unknowns[2]!)
-  into[3] = Math.exp(unknowns[3]!)
-  into[4] = innerResistance
-  into[5] = outerReactance * (1 + Math.exp(unknowns[7]!))
-  into[6] = innerResistance * (1 + Math.exp(unknowns[5]!))
-  into[7] = outerReactance
-  return into
+/** The circuit of the unknowns, with this many ohm in one per unit (1 Ω keeps it in per unit). */
+export const toCircuit = (unknowns: Unknowns, base: number): InductionCircuit => {
+  const of = (index: number): number => Math.exp(unknowns[index]!)
+  return {
+    stator: { re: ohm(of(0) * base), im: ohm(of(1) * base) },
+    magnetising: ohm(of(2) * base),
+    core: ohm(of(3) * base),
+    cages: [
+      { resistance: ohm(of(4) * base), reactance: ohm(of(6) * (1 + of(7)) * base) },
+      { resistance: ohm(of(4) * (1 + of(5)) * base), reactance: ohm(of(6) * base) },
+    ],
+  }
 }
 
 const clamp = (value: number, low: number, high: number): number => Math.min(high, Math.max(low, value))

@@ -1,4 +1,3 @@
-import { ohm } from '../../units/si'
 import type { InductionCircuit } from '../case-input'
 import {
   highest,
@@ -10,7 +9,6 @@ import {
   type Unknowns,
   unknownNames,
 } from './circuit-unknowns'
-import type { CircuitVector } from './circuit-vector'
 import { dampedLeastSquares } from './damped-least-squares'
 import { inPerUnit, type Nameplate, type PlateInPerUnit, plateBase } from './nameplate'
 import { fitResiduals, type PlateQuantity, plateFigures, relativeMismatch, stated } from './plate-mismatch'
@@ -59,7 +57,6 @@ const otherStarts: readonly (readonly number[])[] = [
 ]
 
 interface Fit {
-  circuit: CircuitVector
   unknowns: Unknowns
   residuals: readonly number[]
   largest: number
@@ -68,22 +65,21 @@ interface Fit {
 const fitFrom = (plate: PlateInPerUnit, start: Unknowns, weights: readonly number[]): Fit => {
   const wanted = stated(plate)
   const guess = plainGuess(plate)
-  const circuit = new Float64Array(8)
   let unknowns = start
   for (const weight of weights) {
     const problem = {
       low: lowest,
       high: highest,
       residuals: (x: Unknowns) => [
-        ...fitResiduals(toCircuit(x, circuit), plate.slip, wanted),
+        ...fitResiduals(toCircuit(x, 1), plate.slip, wanted),
         ...Array.from(x, (value, i) => (weight * (value - guess[i]!)) / looseness[i]!),
       ],
     }
     unknowns = dampedLeastSquares(problem, unknowns).x
   }
-  const found = toCircuit(unknowns, new Float64Array(8))
-  const residuals = relativeMismatch(plateFigures(found, plate.slip).figures, wanted)
-  return { circuit: found, unknowns, residuals, largest: Math.max(...residuals.map(Math.abs)) }
+  const { figures } = plateFigures(toCircuit(unknowns, 1), plate.slip)
+  const residuals = relativeMismatch(figures, wanted)
+  return { unknowns, residuals, largest: Math.max(...residuals.map(Math.abs)) }
 }
 
 /** The first start that meets the plate, else the nearest of all. */
@@ -127,18 +123,9 @@ export const estimateCircuit = (plate: Nameplate): EstimateOutcome => {
   const perUnit = inPerUnit(plate, base)
   const found = bestFit(perUnit)
   const residuals = stated(perUnit).map(([quantity], i) => ({ quantity, residual: found.residuals[i]! }))
-  const inOhm = (index: number) => ohm(found.circuit[index]! * base.impedance)
   return {
     kind: 'estimated',
-    circuit: {
-      stator: { re: inOhm(0), im: inOhm(1) },
-      magnetising: inOhm(2),
-      core: inOhm(3),
-      cages: [
-        { resistance: inOhm(4), reactance: inOhm(5) },
-        { resistance: inOhm(6), reactance: inOhm(7) },
-      ],
-    },
+    circuit: toCircuit(found.unknowns, base.impedance),
     residuals,
     largestResidual: found.largest,
     flags: flagsOf(found, residuals),

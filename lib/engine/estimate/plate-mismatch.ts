@@ -1,4 +1,5 @@
-import { type CircuitVector, stateAtSlip } from './circuit-vector'
+import type { InductionCircuit } from '../case-input'
+import { evaluateMachine, type MachineTable, machineTable } from '../machines/machine-table'
 import type { PlateInPerUnit } from './nameplate'
 import { torquePeaks } from './torque-peaks'
 
@@ -16,12 +17,26 @@ export type PlateQuantity = (typeof plateQuantities)[number]
 
 type Figures = Record<PlateQuantity, number>
 
-/** The same figures of a circuit at rated voltage and the plate's slip, per unit as the plate, and every torque peak. */
-export const plateFigures = (circuit: CircuitVector, slip: number): { figures: Figures; peaks: readonly number[] } => {
-  const rated = stateAtSlip(circuit, slip)
-  const locked = stateAtSlip(circuit, 1)
+/** Power drawn, current and airgap power of the table's first machine at one volt. */
+const drawn = (table: MachineTable, slip: number) => {
+  evaluateMachine(table, 0, slip)
+  const active = table.admittance[0]!
+  return { active, current: Math.hypot(active, table.admittance[1]!), airgap: table.airgap[0]! }
+}
+
+/**
+ * The plate's figures of a circuit in per unit, at rated voltage and the plate's slip, and every torque peak.
+ * Current and power at one volt equal the admittance: no √3 enters in per unit.
+ */
+export const plateFigures = (
+  circuit: InductionCircuit,
+  slip: number,
+): { figures: Figures; peaks: readonly number[] } => {
+  const table = machineTable([circuit])
+  const rated = drawn(table, slip)
+  const locked = drawn(table, 1)
   const shaft = (1 - slip) * rated.airgap
-  const peaks = torquePeaks(circuit)
+  const peaks = torquePeaks(table)
   const figures = {
     'shaft-power': shaft,
     'power-factor': rated.active / rated.current,
@@ -72,7 +87,7 @@ const peakResiduals = (peaks: readonly number[], value: number): readonly number
  * What the fit drives to zero. Efficiency counts by its losses, since a part in a thousand of efficiency is some
  * percent of them; it weighs less, for a plate is least exact there.
  */
-export const fitResiduals = (circuit: CircuitVector, slip: number, wanted: readonly Stated[]): readonly number[] => {
+export const fitResiduals = (circuit: InductionCircuit, slip: number, wanted: readonly Stated[]): readonly number[] => {
   const { figures, peaks } = plateFigures(circuit, slip)
   return wanted.flatMap(([name, value]) => {
     if (name === 'efficiency') return [0.3 * ((1 - figures.efficiency) / (1 - value) - 1)]

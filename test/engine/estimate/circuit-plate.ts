@@ -1,22 +1,45 @@
-import { type CircuitVector, stateAtSlip } from '@/lib/engine/estimate/circuit-vector'
+import type { InductionCircuit } from '@/lib/engine/case-input'
 import type { Nameplate } from '@/lib/engine/estimate/nameplate'
 import { plateFigures } from '@/lib/engine/estimate/plate-mismatch'
-import { ampere, hertz, newtonMetre, radianPerSecond, volt, watt } from '@/lib/units/si'
+import { atSlip } from '@/lib/engine/machines/at-slip'
+import { magnitude } from '@/lib/engine/numeric/complex'
+import { ampere, hertz, newtonMetre, ohm, radianPerSecond, volt, watt } from '@/lib/units/si'
+
+/** Double cage from r_s, x_s, x_m, r_c, r₁, x₁ (inner), r₂, x₂ (outer), in per unit. */
+export const doubleCage = (values: readonly number[]): InductionCircuit => {
+  const of = (index: number) => ohm(values[index]!)
+  return {
+    stator: { re: of(0), im: of(1) },
+    magnetising: of(2),
+    core: of(3),
+    cages: [
+      { resistance: of(4), reactance: of(5) },
+      { resistance: of(6), reactance: of(7) },
+    ],
+  }
+}
 
 /** Slip at which the circuit draws 1 pu at 1 pu voltage; null where it does not lie between 0.0001 and 0.1. */
-export const fullLoadSlip = (circuit: CircuitVector): number | null => {
+export const fullLoadSlip = (circuit: InductionCircuit): number | null => {
+  const current = (slip: number) => magnitude(atSlip(circuit, slip).admittance)
   let [low, high] = [1e-4, 0.1]
-  if (stateAtSlip(circuit, low).current > 1 || stateAtSlip(circuit, high).current < 1) return null
+  if (current(low) > 1 || current(high) < 1) return null
   for (let round = 0; round < 100; round++) {
     const middle = (low + high) / 2
-    if (stateAtSlip(circuit, middle).current > 1) high = middle
+    if (current(middle) > 1) high = middle
     else low = middle
   }
   return low
 }
 
 /** The exact plate of a circuit in per unit at a slip, on so many VA and volts; the current there is 1 pu. */
-export const plateOf = (circuit: CircuitVector, slip: number, power: number, voltage: number, poles = 4): Nameplate => {
+export const plateOf = (
+  circuit: InductionCircuit,
+  slip: number,
+  power: number,
+  voltage: number,
+  poles = 4,
+): Nameplate => {
   const { figures } = plateFigures(circuit, slip)
   const synchronous = (4 * Math.PI * 50) / poles
   const current = power / (Math.sqrt(3) * voltage)
