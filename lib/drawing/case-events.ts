@@ -1,11 +1,29 @@
+import { formatNumber } from '@/lib/quantity/format-number'
 import { type CaseFigure, motorOf } from './case-figure'
 import type { EventSpec } from './plot/line-plot-spec'
 
-/** Change-overs of the starting devices and the instants at which motors reach the speed criterion. */
-export const caseEvents = ({ document, result }: CaseFigure): readonly EventSpec[] => {
+/** Instants closer than this part of the plot share one name. */
+const close = 0.03
+
+const seconds = (value: number) => `${formatNumber(value, { decimals: 2 })}\u2009s`
+
+/** Change-overs of the starting devices to their running position; those at nearly the same instant are named together. */
+export const caseEvents = (
+  { document, result }: CaseFigure,
+  window: readonly [number, number],
+): readonly EventSpec[] => {
   const several = result.motors.filter((motor) => motor.start !== null).length > 1
-  const prefix = (motorId: string) => (several ? `${motorOf(document, motorId).tag} ` : '')
-  return result.changeOvers
-    .filter((one) => one.to === 'running')
-    .map((one) => ({ name: `${prefix(one.motorId)}change-over ${one.at.toFixed(2)}\u2009s`, at: one.at }))
+  const changes = result.changeOvers.filter((one) => one.to === 'running').toSorted((a, b) => a.at - b.at)
+  const groups: (typeof changes)[] = []
+  for (const change of changes) {
+    const group = groups.at(-1)
+    if (group && change.at - group[0]!.at < close * (window[1] - window[0])) group.push(change)
+    else groups.push([change])
+  }
+  return groups.map((group) => {
+    const first = group[0]!
+    const tags = group.map((one) => motorOf(document, one.motorId).tag).join(', ')
+    const when = group.length > 1 ? `from ${seconds(first.at)}` : seconds(first.at)
+    return { name: `${several ? `${tags} ` : ''}change-over ${when}`, at: first.at }
+  })
 }

@@ -7,7 +7,7 @@ import { linePlot } from './plot/line-plot'
 import type { SeriesSpec } from './plot/line-plot-spec'
 import type { Scene } from './scene'
 import { mostSeries } from './series-style'
-import { timeWindow } from './time-window'
+import { held, timeWindow } from './time-window'
 
 const differ = (a: readonly number[], b: readonly number[]): boolean =>
   a.some((value, i) => Math.abs(value - b[i]!) > 1e-3 * Math.abs(value))
@@ -15,6 +15,7 @@ const differ = (a: readonly number[], b: readonly number[]): boolean =>
 /** Line and motor current against time; one curve where the starting device leaves them equal. */
 export const currentPlot = (figure: CaseFigure, options: FigureSize & MotorChoice = {}): Scene => {
   const { document, result } = figure
+  const window = timeWindow(result)
   const motors = chosenMotors(figure, options)
   const curves = motors.flatMap(({ motorId }) => {
     const series = result.series.motors[motorId]
@@ -27,9 +28,12 @@ export const currentPlot = (figure: CaseFigure, options: FigureSize & MotorChoic
         ]
       : [{ name: tag, y: series.lineCurrent }]
   })
-  const series: SeriesSpec[] = curves
+  // With many motors the line currents alone are drawn: they are what the supply sees.
+  const chosen = curves.length > mostSeries ? curves.filter(({ name }) => !name.endsWith(' motor')) : curves
+  const left = curves.filter((curve) => !chosen.slice(0, mostSeries).includes(curve))
+  const series: SeriesSpec[] = chosen
     .slice(0, mostSeries)
-    .map(({ name, y }, style) => ({ name, y, style, x: result.series.time }))
+    .map(({ name, y }, style) => ({ name, style, ...held({ x: result.series.time, y }, window) }))
   const ampere = (value: number) => `${formatNumber(value, { digits: 4 })} A`
   return linePlot({
     width: options.width,
@@ -42,7 +46,7 @@ export const currentPlot = (figure: CaseFigure, options: FigureSize & MotorChoic
           : `${motorOf(document, motorId).tag} runs throughout.`,
       )
       .join(' '),
-    x: { label: 'time from the first switching-on, s', domain: timeWindow(result), ticks: 8 },
+    x: { label: 'time from the first switching-on, s', domain: window, ticks: 8 },
     y: {
       label: 'current, A (RMS)',
       domain: domainAround(
@@ -51,6 +55,7 @@ export const currentPlot = (figure: CaseFigure, options: FigureSize & MotorChoic
       ),
     },
     series,
-    events: caseEvents(figure),
+    events: caseEvents(figure, window),
+    notes: left.length > 0 ? [`not drawn: ${left.map(({ name }) => name).join(', ')}`] : [],
   })
 }

@@ -7,23 +7,21 @@ import { domainAround } from './domain'
 import { chosenMotors, type MotorChoice } from './motor-choice'
 import { linePlot } from './plot/line-plot'
 import type { Scene } from './scene'
-import { timeWindow } from './time-window'
+import { held, timeWindow } from './time-window'
 
 /** Speed of up to six motors against time, with the speed criterion of a single one as a line to be reached. */
 export const speedPlot = (figure: CaseFigure, options: FigureSize & MotorChoice = {}): Scene => {
   const { document, result } = figure
   const motors = chosenMotors(figure, options)
-  const series = motors.map(({ motorId }, style) => ({
-    name: motorOf(document, motorId).tag,
-    style,
-    x: result.series.time,
-    y: (result.series.motors[motorId]?.speed ?? []).map((value) => toRpm(radianPerSecond(value))),
-  }))
+  const window = timeWindow(result)
+  const series = motors.map(({ motorId }, style) => {
+    const y = (result.series.motors[motorId]?.speed ?? []).map((value) => toRpm(radianPerSecond(value)))
+    return { name: motorOf(document, motorId).tag, style, ...held({ x: result.series.time, y }, window) }
+  })
   const criterion = document.settings.speedCriterion
   const rated = [
     ...new Set(motors.map(({ motorId }) => toRpm(radianPerSecond(motorOf(document, motorId).ratedSpeed.si)))),
   ]
-  const window = timeWindow(result)
   const limits =
     rated.length === 1 && motors.some((motor) => motor.start !== null)
       ? [
@@ -62,6 +60,6 @@ export const speedPlot = (figure: CaseFigure, options: FigureSize & MotorChoice 
     },
     series,
     limits,
-    events: caseEvents(figure),
+    events: caseEvents(figure, window),
   })
 }

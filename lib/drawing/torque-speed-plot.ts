@@ -4,10 +4,22 @@ import { synchronousSpeed, toRpm } from '@/lib/units/speed'
 import { type CaseFigure, caseOf, type FigureSize, motorOf } from './case-figure'
 import { domainAround } from './domain'
 import { linePlot } from './plot/line-plot'
-import type { MarkerSpec } from './plot/line-plot-spec'
+import type { MarkerSpec, ShadeSpec } from './plot/line-plot-spec'
 import type { Scene } from './scene'
 
 const rpm = (speed: number) => toRpm(radianPerSecond(speed))
+
+/** The samples that go on to a higher speed than before: a gap without voltage, in which the speed falls back, is not shaded. */
+const rising = (x: readonly number[], lower: readonly number[], upper: readonly number[]): ShadeSpec => {
+  let highest = Number.NEGATIVE_INFINITY
+  const kept = x.flatMap((value, i) => {
+    if (value < highest || upper[i]! < lower[i]!) return []
+    highest = value
+    return [i]
+  })
+  const pick = (values: readonly number[]) => kept.map((i) => values[i]!)
+  return { name: 'accelerating', x: pick(x), lower: pick(lower), upper: pick(upper) }
+}
 
 /**
  * Torque of a starting motor at the voltage that it really had, against speed, with the load's torque; what is left to
@@ -18,7 +30,8 @@ export const torqueSpeedPlot = (figure: CaseFigure, { motorId, ...size }: Figure
   const motor = motorOf(document, motorId)
   const start = result.motors.find((one) => one.motorId === motorId)?.start
   const series = result.series.motors[motorId]
-  const from = result.series.time.findIndex((time) => time >= (start?.switchedOnAt ?? 0))
+  // Of the two samples at the switching-on the later one is the motor with voltage.
+  const from = result.series.time.lastIndexOf(start?.switchedOnAt ?? 0)
   const cut = (values: readonly number[] = []) => values.slice(Math.max(0, from))
   const speed = cut(series?.speed).map(rpm)
   const kilo = (values: readonly number[] | undefined) => cut(values).map((value) => value / 1000)
@@ -45,7 +58,7 @@ export const torqueSpeedPlot = (figure: CaseFigure, { motorId, ...size }: Figure
       { name: `${motor.tag} motor`, style: 0, x: speed, y: torque },
       { name: 'load', style: 1, x: speed, y: load },
     ],
-    shade: { name: 'accelerating', x: speed, lower: load, upper: torque },
+    shade: rising(speed, load, torque),
     markers,
   })
 }

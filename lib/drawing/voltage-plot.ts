@@ -1,23 +1,32 @@
+import type { PlaceResult } from '@/lib/engine/case-result'
 import { formatNumber } from '@/lib/quantity/format-number'
+import { printQuantity } from '@/lib/quantity/print-quantity'
 import { caseEvents } from './case-events'
 import { busOf, type CaseFigure, caseOf, type FigureSize, placeOf } from './case-figure'
 import { domainAround } from './domain'
 import { linePlot } from './plot/line-plot'
-import type { LimitSpec, MarkerSpec } from './plot/line-plot-spec'
+import type { EndMarkSpec, LimitSpec, MarkerSpec } from './plot/line-plot-spec'
 import type { Scene } from './scene'
 import { mostSeries } from './series-style'
-import { timeWindow } from './time-window'
+import { held, timeWindow } from './time-window'
 import { voltageLimits } from './voltage-limits'
 
 const percent = (value: number, decimals = 2) => `${formatNumber(100 * value, { decimals })}\u2009%`
 
-const deepest = (figure: CaseFigure, busId: string): readonly MarkerSpec[] => {
-  const place = placeOf(figure.result, busId)
-  if (!place) return []
-  const { voltage, at } = place.deepest
-  const change = percent((place.before - voltage) / place.before)
-  const name = `deepest ${formatNumber(voltage / 1000, { digits: 4 })}\u2009kV, change ${change} at ${formatNumber(at, { decimals: 2 })}\u2009s`
-  return [{ x: at, y: (100 * voltage) / place.nominal, name }]
+const volts = (value: number) => printQuantity(value, 'voltage', { digits: 4 })
+
+/** The deepest point with its change against the voltage before. */
+const deepest = ({ before, nominal, deepest: { voltage, at } }: PlaceResult): MarkerSpec => ({
+  x: at,
+  y: (100 * voltage) / nominal,
+  name: `deepest ${volts(voltage)}, change ${percent((before - voltage) / before)} at ${formatNumber(at, { decimals: 2 })}\u2009s`,
+})
+
+/** The settled voltage once the process loads are on, where that moves it. */
+const withProcess = ({ nominal, settledAfterStart, settledAfterProcess }: PlaceResult): readonly EndMarkSpec[] => {
+  if (settledAfterProcess === null) return []
+  const moved = settledAfterStart === null || Math.abs(settledAfterProcess - settledAfterStart) > 1e-4 * nominal
+  return moved ? [{ y: (100 * settledAfterProcess) / nominal, name: 'with process' }] : []
 }
 
 const inWords = (figure: CaseFigure, busIds: readonly string[]): string =>
@@ -59,9 +68,11 @@ export const voltagePlot = (
     const bus = busOf(figure.document, id)
     const values = figure.result.series.busVoltage[id] ?? []
     const y = values.map((value) => (100 * value) / bus.nominal.si)
-    return { name: bus.tag, style, x: figure.result.series.time.slice(0, y.length), y }
+    return { name: bus.tag, style, ...held({ x: figure.result.series.time, y }, window) }
   })
-  const values = series.flatMap((one) => one.y)
+  const place = only === undefined ? undefined : placeOf(figure.result, only)
+  const endMarks = place ? withProcess(place) : []
+  const values = [...series.flatMap((one) => one.y), ...endMarks.map((mark) => mark.y)]
   return linePlot({
     ...size,
     title: `${caseOf(figure).tag}: voltage at ${series.map((one) => one.name).join(', ')}`,
@@ -73,8 +84,9 @@ export const voltagePlot = (
     },
     series,
     limits,
-    events: caseEvents(figure),
-    markers: only === undefined ? [] : deepest(figure, only),
+    events: caseEvents(figure, window),
+    markers: place ? [deepest(place)] : [],
+    endMarks,
   })
 }
 

@@ -75,6 +75,7 @@ export const inventedResult = (caseId: string, depth: number, duration: number, 
       impedance: { re: ohm(4.494), im: ohm(11.235) },
       emf: volt(33_479),
       powerBefore: { re: voltAmpere(3.8e6), im: voltAmpere(1.54e6) },
+      powerFirst: { re: voltAmpere(4.2e6), im: voltAmpere(8.1e6) },
     },
     places,
     motors: [

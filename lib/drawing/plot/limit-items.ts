@@ -38,7 +38,6 @@ const hatching = (limit: LimitSpec, levels: readonly Level[]): readonly SceneIte
 
 export const limitItems = (limit: LimitSpec, levels: readonly Level[]): readonly SceneItem[] => [
   ...hatching(limit, levels),
-  path(levels.map(({ from, to, y }) => hatch(from, to, y, limit.forbidden)).join(''), { stroke: 'soft', width: 0.12 }),
   path(line(levels.flatMap(({ from, to, y }) => [[from, y] as const, [to, y] as const])), {
     stroke: 'ink',
     width: 0.22,
@@ -60,16 +59,13 @@ export const limitObstacles = (
   )
 }
 
-/** Names of the limits that the plot cannot show or name, so that none is left out without a word. */
-export const limitNote = (
+/** What the plot does not show: limits outside its axes, and whatever else was left out. */
+export const noteItems = (
   outside: readonly string[],
-  unnamed: readonly string[],
+  notes: readonly string[],
   { area }: PlotFrame,
 ): readonly TextItem[] => {
-  const parts = [
-    ...(outside.length > 0 ? [`outside the axes: ${outside.join('; ')}`] : []),
-    ...(unnamed.length > 0 ? [`without a name for want of room: ${unnamed.join('; ')}`] : []),
-  ]
+  const parts = [...(outside.length > 0 ? [`outside the axes: ${outside.join('; ')}`] : []), ...notes]
   if (parts.length === 0) return []
   return [text(area.x + area.width, 2.6, parts.join('; '), { size: labelSize, anchor: 'end', ink: 'soft' })]
 }

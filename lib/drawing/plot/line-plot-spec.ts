@@ -37,6 +37,12 @@ export interface MarkerSpec {
   name: string
 }
 
+/** A level at the right edge, after the last instant that is drawn. */
+export interface EndMarkSpec {
+  y: number
+  name: string
+}
+
 /** The area between two curves over the same x, where `upper` lies above `lower`. */
 export interface ShadeSpec {
   name: string
@@ -54,7 +60,10 @@ export interface LinePlotSpec {
   limits?: readonly LimitSpec[]
   events?: readonly EventSpec[]
   markers?: readonly MarkerSpec[]
+  endMarks?: readonly EndMarkSpec[]
   shade?: ShadeSpec
+  /** What was left out, said above the plot. */
+  notes?: readonly string[]
   /** Size on the sheet in mm. */
   width?: number
   height?: number

@@ -1,10 +1,11 @@
 import { line, path, type Scene, type SceneItem } from '../scene'
+import { endLabels } from './end-labels'
 import { LabelPlacer } from './label-placer'
-import { limitItems, limitLength, limitLevels, limitName, limitNote, limitObstacles } from './limit-items'
+import { limitItems, limitLength, limitLevels, limitName, limitObstacles, noteItems } from './limit-items'
 import type { LinePlotSpec, ShadeSpec } from './line-plot-spec'
 import { eventItems, markerItems } from './mark-items'
 import { type PlotFrame, plotFrame } from './plot-frame'
-import { seriesItems, seriesParts } from './series-items'
+import { drawnSeries, seriesItems } from './series-items'
 
 const shadeItems = (shade: ShadeSpec, { x, y, area }: PlotFrame): readonly SceneItem[] => {
   const clamped = (value: number) => Math.min(Math.max(y(value), area.y), area.y + area.height)
@@ -15,7 +16,7 @@ const shadeItems = (shade: ShadeSpec, { x, y, area }: PlotFrame): readonly Scene
 /** A plot of up to six lines over linear axes, with limits, instants and points that are worth reading off. */
 export const linePlot = (spec: LinePlotSpec): Scene => {
   const frame = plotFrame(spec)
-  const drawn = spec.series.map((series) => ({ spec: series, parts: seriesParts(series, frame) }))
+  const drawn = spec.series.map((series) => drawnSeries(series, frame))
   const levelled = (spec.limits ?? []).map((limit) => ({ limit, levels: limitLevels(limit, frame) }))
   const limits = levelled.filter(({ levels }) => levels.length > 0)
   const outside = levelled.filter(({ levels }) => levels.length === 0).map(({ limit }) => limit.name)
@@ -33,7 +34,10 @@ export const linePlot = (spec: LinePlotSpec): Scene => {
     .toSorted((a, b) => limitLength(a.levels) - limitLength(b.levels))
     .map(({ limit, levels }) => ({ limit, name: limitName(limit, levels, placer) }))
   const names = named.flatMap(({ name }) => name ?? [])
-  const unnamed = named.filter(({ name }) => name === null).map(({ limit }) => limit.name)
+  const unnamed = named
+    .filter(({ name }) => name === null)
+    .map(({ limit }) => `unnamed for want of room: ${limit.name}`)
+  const notes = [...unnamed, ...(spec.notes ?? [])]
   const markers = (spec.markers ?? []).flatMap((marker) => markerItems(marker, frame, placer))
   const events = (spec.events ?? []).flatMap((event) => eventItems(event, frame, placer))
   return {
@@ -46,9 +50,10 @@ export const linePlot = (spec: LinePlotSpec): Scene => {
       ...frame.grid,
       ...limits.flatMap(({ limit, levels }) => limitItems(limit, levels)),
       ...events,
-      ...seriesItems(drawn, frame),
+      ...drawn.flatMap(seriesItems),
+      ...endLabels(drawn, spec.endMarks ?? [], frame),
       ...frame.axes,
-      ...limitNote(outside, unnamed, frame),
+      ...noteItems(outside, notes, frame),
       ...names,
       ...markers,
     ],

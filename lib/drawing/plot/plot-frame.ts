@@ -34,7 +34,11 @@ const ticksOf = (scale: ScaleLinear<number, number>, axis: AxisSpec) => {
 export const plotFrame = (spec: LinePlotSpec): PlotFrame => {
   const width = spec.width ?? 174
   const height = spec.height ?? 62
-  const names = Math.max(0, ...spec.series.map((one) => textWidth(one.name, labelSize, 'semibold')))
+  const names = Math.max(
+    0,
+    ...spec.series.map((one) => textWidth(one.name, labelSize, 'semibold')),
+    ...(spec.endMarks ?? []).map((one) => textWidth(one.name, labelSize)),
+  )
   const yScale = scaleLinear().domain(spec.y.domain)
   const yTicks = ticksOf(yScale, spec.y)
   const left = Math.max(6, ...yTicks.map((tick) => textWidth(tick.label, tickSize))) + 2.2
