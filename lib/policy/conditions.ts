@@ -1,28 +1,20 @@
 import type { RevisionMove, RevisionState, SignOffRole } from '../study/states'
-import { nextSignature, nextState } from '../study/states'
+import { nextSignature, nextState, revisionStateWords } from '../study/states'
 import { allowed, denied, type Permission } from './permission'
 import type { PolicyActor, Role } from './role'
 import type { RevisionSubject } from './subject'
-
-const stateWords: Record<RevisionState, string> = {
-  draft: 'a draft',
-  'in-check': 'in check',
-  'in-review': 'in review',
-  'review-closed': 'closed for review and being signed',
-  issued: 'issued',
-  superseded: 'superseded',
-  withdrawn: 'withdrawn',
-}
 
 export const holds = (actor: PolicyActor, any: readonly Role[], otherwise: string): Permission =>
   any.some((role) => actor.roles.includes(role)) ? allowed : denied(otherwise)
 
 export const inState = (subject: RevisionSubject, states: readonly RevisionState[]): Permission =>
-  states.includes(subject.state) ? allowed : denied(`Not possible while the revision is ${stateWords[subject.state]}.`)
+  states.includes(subject.state)
+    ? allowed
+    : denied(`Not possible while the revision is ${revisionStateWords[subject.state]}.`)
 
 export const moves = (subject: RevisionSubject, move: RevisionMove): Permission =>
   nextState(subject.state, move) === null
-    ? denied(`Not possible while the revision is ${stateWords[subject.state]}.`)
+    ? denied(`Not possible while the revision is ${revisionStateWords[subject.state]}.`)
     : allowed
 
 export const isPreparer = (actor: PolicyActor, subject: RevisionSubject): Permission =>

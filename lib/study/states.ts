@@ -62,3 +62,14 @@ export const nextState = (state: RevisionState, move: RevisionMove): RevisionSta
 /** The signature that is due next in the round; null when all three are given. */
 export const nextSignature = (given: readonly SignOffRole[]): SignOffRole | null =>
   signOffRoles.find((role) => !given.includes(role)) ?? null
+
+/** How each state reads behind “the revision is”. */
+export const revisionStateWords: Record<RevisionState, string> = {
+  draft: 'a draft',
+  'in-check': 'in check',
+  'in-review': 'in review',
+  'review-closed': 'closed for review and being signed',
+  issued: 'issued',
+  superseded: 'superseded',
+  withdrawn: 'withdrawn',
+}
