@@ -5,7 +5,8 @@ import { withClient } from '../embedded/owner.mjs'
 function report(message, code) {
   const fields = { message, error_code: code }
   const line = { level: 'ERROR', target: 'schema_engine::logger', timestamp: new Date().toISOString(), fields }
-  process.stderr.write(`${JSON.stringify(line)}\n`)
+  // the command line skips the first line, where the native engine has none of its messages
+  process.stderr.write(`\n${JSON.stringify(line)}\n`)
 }
 
 /**
