@@ -26,7 +26,8 @@ export function judgeTrust(
   const listed = context.listed.find((candidate) => sha256Hex(candidate.certificate) === certificate.fingerprint)
   if (!listed) return judge('unknown', 'This certificate is not on the organisation’s list.')
   if (!at || at > context.now) return judge('unknown', 'The file does not state a possible time of signing.')
-  if (at < listed.listedAt)
+  // The file states whole seconds.
+  if (at.getTime() < Math.floor(listed.listedAt.getTime() / 1000) * 1000)
     return judge('unknown', `Signed before this certificate was listed on ${day(listed.listedAt)}.`)
   if (at < certificate.notBefore || at > certificate.notAfter) {
     return judge(

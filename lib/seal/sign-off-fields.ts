@@ -18,3 +18,6 @@ export const archiveFieldName = 'ArchiveTimestamp'
 
 /** The name of the study document attached to each report. */
 export const studyAttachmentName = 'study.json'
+
+/** The name of the results attached beside it: the summary of the study's result, without curves. */
+export const resultsAttachmentName = 'results.json'

@@ -1,6 +1,7 @@
 'use client'
 
 import { type FormEvent, useState } from 'react'
+import { answered, type Outcome } from '@/app/_action/outcome'
 import { DomainError } from '@/lib/errors'
 import { Button } from '@/lib/ui/button'
 import { Labelled } from '@/lib/ui/labelled'
@@ -8,7 +9,6 @@ import { Notice } from '@/lib/ui/notice'
 import { fromBase64, toBase64 } from './base64'
 import type { KeyFile } from './key-file'
 import { forgetKeyFile, keepKeyFile } from './key-store'
-import type { Outcome } from './outcome'
 import { passphraseHint } from './passphrase-hint'
 import { plainWords } from './plain-words'
 import { makeSigningKey } from './signing-key'
@@ -25,7 +25,7 @@ interface NewKeyFormProps {
   challenge: string
   /** Words that must not be in the passphrase: the person's own. */
   ownWords: readonly string[]
-  register: (answer: KeyAnswer) => Promise<Outcome>
+  register: (answer: KeyAnswer) => Promise<Outcome<unknown>>
   onMade: (file: KeyFile) => void
 }
 
@@ -101,13 +101,8 @@ async function makeAndRegister(
   if (!octets) throw new Error('the challenge is not base64')
   const { file, spki, proof } = await makeSigningKey(passphrase, octets)
   await keepKeyFile(file)
-  const outcome = await register({ spki: toBase64(spki), challenge, proof: toBase64(proof) }).catch(() => {
-    throw new DomainError(
-      'unavailable',
-      'The service did not answer: load the page again and look whether the key is there.',
-    )
-  })
+  const outcome = await answered(() => register({ spki: toBase64(spki), challenge, proof: toBase64(proof) }))
   if (outcome.ok) return file
-  await forgetKeyFile(file.spki)
-  throw new DomainError('invalid', outcome.message)
+  if (outcome.code !== 'unavailable') await forgetKeyFile(file.spki)
+  throw new DomainError(outcome.code, outcome.message, outcome.issues)
 }

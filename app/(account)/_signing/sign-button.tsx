@@ -1,6 +1,7 @@
 'use client'
 
 import { type FormEvent, useState } from 'react'
+import { answered, type Outcome } from '@/app/_action/outcome'
 import { DomainError } from '@/lib/errors'
 import { Button } from '@/lib/ui/button'
 import { Labelled } from '@/lib/ui/labelled'
@@ -8,23 +9,22 @@ import { Notice } from '@/lib/ui/notice'
 import { fromBase64, toBase64 } from './base64'
 import type { KeyFile } from './key-file'
 import { KeyFileChooser } from './key-file-chooser'
-import type { Outcome } from './outcome'
 import { plainWords } from './plain-words'
 import { openSigningKey, signAttributes } from './signing-key'
 import { notHere } from './signing-key-panel'
 import { useCanSign } from './use-can-sign'
 import { useKeptKey } from './use-kept-key'
 
-/** The octets to sign, base64, and whatever the service wants to see again with the signature. */
+/** The octets to sign, base64, and the token that the service wants to see again with the signature. */
 export interface PreparedAttributes {
   readonly attributes: string
-  readonly ticket?: string
+  readonly token: string
 }
 
 export interface SignatureAnswer {
   /** r then s, 64 octets, base64. */
   readonly value: string
-  readonly ticket: string
+  readonly token: string
 }
 
 interface SignButtonProps {
@@ -33,7 +33,7 @@ interface SignButtonProps {
   /** The public key of the person's listed certificate, base64. */
   spki: string
   prepare: () => Promise<Outcome<PreparedAttributes>>
-  complete: (answer: SignatureAnswer) => Promise<Outcome>
+  complete: (answer: SignatureAnswer) => Promise<Outcome<unknown>>
   onSigned?: () => void
 }
 
@@ -118,14 +118,14 @@ async function signWith(
   complete: SignButtonProps['complete'],
 ): Promise<void> {
   const key = await openSigningKey(file, passphrase)
-  const prepared = orRefuse(await prepare())
+  const prepared = orRefuse(await answered(prepare))
   const attributes = fromBase64(prepared.attributes)
   if (!attributes) throw new Error('the octets to sign are not base64')
   const value = toBase64(await signAttributes(key, attributes))
-  orRefuse(await complete({ value, ticket: prepared.ticket ?? '' }))
+  orRefuse(await answered(() => complete({ value, token: prepared.token })))
 }
 
 function orRefuse<T>(outcome: Outcome<T>): T {
-  if (outcome.ok) return outcome
-  throw new DomainError('invalid', outcome.message)
+  if (outcome.ok) return outcome.value
+  throw new DomainError(outcome.code, outcome.message)
 }

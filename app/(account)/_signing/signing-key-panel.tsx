@@ -1,12 +1,12 @@
 'use client'
 
 import { useState } from 'react'
+import type { Outcome } from '@/app/_action/outcome'
 import { Button } from '@/lib/ui/button'
 import { Notice } from '@/lib/ui/notice'
 import { type KeyFile, keyFileName } from './key-file'
 import { KeyFileChooser } from './key-file-chooser'
 import { type KeyAnswer, NewKeyForm } from './new-key-form'
-import type { Outcome } from './outcome'
 import { saveFile } from './save-file'
 import { useCanSign } from './use-can-sign'
 import { useKeptKey } from './use-kept-key'
@@ -26,7 +26,7 @@ interface SigningKeyPanelProps {
   certificate: OwnCertificate | null
   /** The server's challenge for a new key, base64. */
   challenge: string
-  register: (answer: KeyAnswer) => Promise<Outcome>
+  register: (answer: KeyAnswer) => Promise<Outcome<unknown>>
 }
 
 /** The person's signing key: makes it, says whether this browser holds it, and gives its file out or takes it in. */
@@ -43,10 +43,7 @@ export function SigningKeyPanel({ person, certificate, challenge, register }: Si
 
   if (!canSign) return <Notice tone="bad">{notHere}</Notice>
   return (
-    <section aria-labelledby="signing-key" className="grid max-w-2xl gap-3">
-      <h2 id="signing-key" className="m-0 text-title font-semibold">
-        Signing key
-      </h2>
+    <section aria-label="Signing key" className="grid max-w-2xl gap-3">
       <p className="m-0 text-soft">
         Your sign-offs are made with a key of your own. It is made in this browser and kept under your passphrase; the
         service never sees either, and nobody can restore them for you. A sign-off shows who stands behind the report
