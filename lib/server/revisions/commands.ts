@@ -3,10 +3,11 @@ import * as z from 'zod'
 import { can } from '@/lib/policy/can'
 import { idInput } from '../identity'
 import { command } from '../perform'
+import { requestReportAgain } from '../reports/request-report'
 import { loadStudy } from '../studies/study-of'
 import { closeReviewOf } from './close-review'
 import { freeze } from './freeze'
-import { issue } from './issue'
+import { issue, withdraw } from './issue'
 import { moveRevision } from './move'
 import { note, ofRevision, purpose, reason } from './schema'
 import { loadRevision } from './subject'
@@ -69,6 +70,15 @@ export const closeReview = command({
   run: (context, input, { row }) => closeReviewOf(context, row, input.purpose, input.note),
 })
 
+/** Asks for the report once more after its rendering failed. */
+export const renderAgain = command({
+  input: ofRevision,
+  scope: revisionScope,
+  load,
+  may: (actor) => can(actor, 'read-study'),
+  run: (context, _input, { row }) => requestReportAgain(context, row),
+})
+
 /** Takes a revision back, with a reason; a signing round that has begun is over with it. */
 export const backToDraft = command({
   input: ofRevision.extend({ reason }),
@@ -93,5 +103,5 @@ export const withdrawRevision = command({
   scope: revisionScope,
   load,
   may: (actor, { subject }) => can(actor, 'withdraw', subject),
-  run: (context, input, { row }) => moveRevision(context, row, 'withdraw', input.reason),
+  run: (context, input, { row }) => withdraw(context, row, input.reason),
 })

@@ -9,7 +9,7 @@ import { idInput } from '../identity'
 import { query } from '../read'
 import { revisionState } from '../revisions/subject'
 import { unpackSeries } from '../series'
-import { inputHashOf } from './input-hash-of'
+import { inputHashIfAny } from './input-hash-of'
 import { loadLiveStudy } from './live-study'
 import { lastDone, loadProgress, loadRunState, loadSummary } from './run-state'
 import type { RunProgress, StudyView } from './view'
@@ -33,6 +33,7 @@ export const studyView = query({
       orderBy: [{ number: 'desc' }, { attempt: 'desc' }],
     })
     const newest = revisions[0]
+    const input = document ? await inputHashIfAny(document) : null
     return {
       studyId,
       projectId: study.projectId,
@@ -48,7 +49,7 @@ export const studyView = query({
       rows: records,
       plant,
       document,
-      problems: [...problems],
+      problems: [...problems, ...(input?.refusal?.issues ?? [])],
       state: newest ? revisionState(newest.state) : null,
       revisions: revisions.map((row) => ({
         revisionId: row.id,
@@ -65,7 +66,7 @@ export const studyView = query({
         compute: can(policy, 'compute').allowed,
         freeze: can(policy, 'freeze').allowed,
       },
-      run: await loadRunState(tx, studyId, document ? await inputHashOf(document) : null),
+      run: await loadRunState(tx, studyId, input?.hash ?? null),
     }
   },
 })

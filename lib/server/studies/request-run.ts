@@ -4,6 +4,7 @@ import { DomainError } from '@/lib/errors'
 import type { WriteContext } from '../context'
 import { newId } from '../identity'
 import { enqueue } from '../jobs/enqueue'
+import { lostAfter } from '../jobs/job'
 import type { Done } from '../perform'
 import { inputHashOf } from './input-hash-of'
 import { loadLiveStudy } from './live-study'
@@ -18,6 +19,7 @@ export async function requestRun(
 ): Promise<Done<{ runId: string }>> {
   const { tx, place, actor, at } = context
   const { organisationId } = place
+  await giveUpLost(context, studyId)
   const running = await tx.studyRun.findFirst({ where: { studyId, ...open } })
   if (running) return { answer: { runId: running.id }, events: [] }
   const { document, problems } = await loadLiveStudy(tx, studyId)
@@ -45,6 +47,15 @@ export async function requestRun(
     answer: { runId },
     events: [{ action: 'computing-asked', subject: { kind: 'study', id: studyId }, payload: { runId, inputHash } }],
   }
+}
+
+/** A run whose every try was killed says nothing any more and would stand in the way of the next for ever. */
+async function giveUpLost({ tx, at }: WriteContext, studyId: string): Promise<void> {
+  const before = new Date(at.getTime() - lostAfter)
+  await tx.studyRun.updateMany({
+    where: { studyId, ...open, queuedAt: { lt: before }, OR: [{ startedAt: null }, { startedAt: { lt: before } }] },
+    data: { state: 'failed', failure: 'The computation broke off and did not come back.', finishedAt: at },
+  })
 }
 
 /** Ends the running computation; its worker notices at its next report of progress. */

@@ -49,7 +49,7 @@ export interface StudyView {
   version: number
   rows: StudyRows
   plant: PlantRows
-  /** The whole document when it is complete, else null with the reasons in `problems`. */
+  /** The whole document when it is complete, else null with the reasons in `problems`; those of a nameplate that no motor can have come beside it. */
   document: StudyDocument | null
   problems: FieldIssue[]
   /** State of the newest revision; null before the first freeze. */
