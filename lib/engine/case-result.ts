@@ -75,7 +75,7 @@ export interface MotorState {
 }
 
 export interface HeatUsed {
-  /** ∫I²dt of the motor current over I_LR²·t_permissible; null when not declared. */
+  /** ∫I²dt of the winding's current (three times the terminal figure while in star) over I_LR²·t_permissible; null when not declared. */
   byCurrent: PerUnit | null
   /** Rotor slip energy over T_LR·ω_s·t_permissible; null when not declared. */
   byRotor: PerUnit | null

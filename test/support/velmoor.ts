@@ -138,8 +138,9 @@ export function pump(number: 1 | 2 | 3 | 4, duty: Duty, changes: PumpChanges = {
     inertia: kilogramSquareMetre(340 * (changes.inertia ?? 1)),
     duty,
     declared: {
-      lockedRotorCurrent: ampere(651),
-      lockedRotorTorque: newtonMetre(0.855 * 10589),
+      // The data sheet prints 651 A and 0.855; its heat figures rest on the unrounded values of the circuit.
+      lockedRotorCurrent: ampere(651.39),
+      lockedRotorTorque: newtonMetre(0.85489 * 10588.9),
       permissibleTime: { time: second(12), state: 'hot' },
     },
   }

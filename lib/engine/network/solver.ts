@@ -58,6 +58,7 @@ export function createSolver(
   const residual = new Float64Array(2 * q)
   const step = new Float64Array(2 * q)
   const kept = new Float64Array(2 * n)
+  const drawn = new Float64Array(2 * n)
   const rowOfLoad = Int32Array.from(loads.node, (node) => network.rowOf[node]!)
   const counters = { solutions: 0, iterations: 0, continuations: 0 }
   let warm = false
@@ -70,7 +71,8 @@ export function createSolver(
       const at = 2 * (i * n + i)
       work[at] = work[at]! + shunt[2 * i]!
       work[at + 1] = work[at + 1]! + shunt[2 * i + 1]!
-      const [re, im] = [network.source[2 * i]!, network.source[2 * i + 1]!]
+      const re = network.source[2 * i]!
+      const im = network.source[2 * i + 1]!
       right[2 * i] = re * driven[0]! - im * driven[1]!
       right[2 * i + 1] = re * driven[1]! + im * driven[0]!
     }
@@ -120,8 +122,10 @@ export function createSolver(
       let im = -right[2 * row + 1]!
       for (let j = 0; j < q; j++) {
         const at = 2 * (row * n + linear + j)
-        const [yRe, yIm] = [work[at]!, work[at + 1]!]
-        const [vRe, vIm] = [voltage[2 * (linear + j)]!, voltage[2 * (linear + j) + 1]!]
+        const yRe = work[at]!
+        const yIm = work[at + 1]!
+        const vRe = voltage[2 * (linear + j)]!
+        const vIm = voltage[2 * (linear + j) + 1]!
         re += yRe * vRe - yIm * vIm
         im += yRe * vIm + yIm * vRe
         if (derive) {
@@ -138,7 +142,8 @@ export function createSolver(
       const row = rowOfLoad[l]!
       if (row < linear) continue
       const i = row - linear
-      const [vRe, vIm] = [voltage[2 * row]!, voltage[2 * row + 1]!]
+      const vRe = voltage[2 * row]!
+      const vIm = voltage[2 * row + 1]!
       const square = vRe * vRe + vIm * vIm
       const inside = square > loads.floor[l]!
       const w = inside ? square : loads.floor[l]!
@@ -146,7 +151,8 @@ export function createSolver(
       const root = loads.current[l]! === 0 ? 0 : loads.current[l]! / Math.sqrt(w)
       const power = loads.share[l]! * inverse
       const g = share * (root + power)
-      const [sRe, sIm] = [loads.power[2 * l]!, loads.power[2 * l + 1]!]
+      const sRe = loads.power[2 * l]!
+      const sIm = loads.power[2 * l + 1]!
       residual[2 * i] = residual[2 * i]! + g * (sRe * vRe - sIm * vIm)
       residual[2 * i + 1] = residual[2 * i + 1]! + g * (sRe * vIm + sIm * vRe)
       if (!derive) continue
@@ -156,7 +162,8 @@ export function createSolver(
       // ∂I/∂V = S*·own, ∂I/∂V* = S*·slope·V².
       const squareRe = slope * (vRe * vRe - vIm * vIm)
       const squareIm = slope * 2 * vRe * vIm
-      const [aRe, aIm] = [sRe * own, sIm * own]
+      const aRe = sRe * own
+      const aIm = sIm * own
       const bRe = sRe * squareRe - sIm * squareIm
       const bIm = sRe * squareIm + sIm * squareRe
       const top = 4 * i * q + 2 * i
@@ -304,7 +311,7 @@ export function createSolver(
     mismatch() {
       let largest = 0
       let worst = 0
-      const drawn = new Float64Array(2 * n)
+      drawn.fill(0)
       for (let l = 0; l < loads.count; l++) {
         const row = rowOfLoad[l]!
         if (row < 0) continue
@@ -337,10 +344,12 @@ export function createSolver(
     recover(into) {
       const columns = n + 1
       for (let node = 0; 2 * node < into.length; node++) {
-        let [re, im] = [0, 0]
+        let re = 0
+        let im = 0
         for (let j = 0; j < columns; j++) {
           const at = 2 * (node * columns + j)
-          const [rRe, rIm] = [network.recovery[at]!, network.recovery[at + 1]!]
+          const rRe = network.recovery[at]!
+          const rIm = network.recovery[at + 1]!
           if (rRe === 0 && rIm === 0) continue
           const vRe = j < n ? voltage[2 * j]! : driven[0]!
           const vIm = j < n ? voltage[2 * j + 1]! : driven[1]!

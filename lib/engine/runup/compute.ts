@@ -80,7 +80,8 @@ function withoutStart(input: CaseInput, { outcome, motor }: NoStart): CaseResult
   if (!motor) return result
   const { system, index, speeds } = motor
   const observation = new Float64Array(observationLength(system))
-  if (!createObserver(system)(speeds, observation)) return result
+  if (!system.solveAt(speeds)) return result
+  createObserver(system)(speeds, observation)
   const state = motorState(system, observation, index)
   return {
     ...result,
@@ -123,6 +124,7 @@ function prepareCourses(system: System, before: Float64Array): Courses {
           atCriterion: null,
           i2t: null,
           slipEnergy: null,
+          i2tInStar: 0,
           standstill: null,
           outcome: null,
           speed95: 0.95 * motor.ratedSpeed,

@@ -19,6 +19,8 @@ export interface StartCourse {
   /** Integrals when the criterion was reached. */
   i2t: number | null
   slipEnergy: number | null
+  /** ∫I²dt of the line current when the motor left star; 0 for other starting devices. */
+  i2tInStar: number
   standstill: MotorState | null
   outcome: StartOutcome | null
   /** Speed in rad/s of 95 % of rated, of the criterion and of the change-over (null without one by speed). */

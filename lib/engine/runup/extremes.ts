@@ -21,6 +21,9 @@ export const watch = (place: number, sign: 1 | -1, active: boolean): Watch => ({
   at: Number.NaN,
 })
 
+/** Differences smaller than this part of a value are taken for noise of the solution. */
+const roundOff = 1e-10
+
 export interface ExtremeSearch {
   /** Takes the next point of a smooth stretch; between it and the two before, extremes are searched for. */
   add(t: number, observation: Float64Array): void
@@ -51,12 +54,16 @@ export function createExtremeSearch(
     }
   }
 
-  /** Least value of the parabola through three points, or infinity where the middle one is not the lowest. */
+  /** Least value of the parabola through three points, or infinity where the middle one is not clearly the lowest. */
   function vertex(each: Watch): number {
-    const [a, b, c] = [each.sign * older[each.place]!, each.sign * old[each.place]!, each.sign * fresh[each.place]!]
-    if (!(b <= a && b <= c) || (b === a && b === c)) return Number.POSITIVE_INFINITY
-    const [left, right] = [oldTime - olderTime, freshTime - oldTime]
-    const [slopeLeft, slopeRight] = [(b - a) / left, (c - b) / right]
+    const a = each.sign * older[each.place]!
+    const b = each.sign * old[each.place]!
+    const c = each.sign * fresh[each.place]!
+    if (!(b <= a && b <= c) || a - b + (c - b) < roundOff * Math.abs(b)) return Number.POSITIVE_INFINITY
+    const left = oldTime - olderTime
+    const right = freshTime - oldTime
+    const slopeLeft = (b - a) / left
+    const slopeRight = (c - b) / right
     const bend = (slopeRight - slopeLeft) / (left + right)
     const slope = (slopeLeft * right + slopeRight * left) / (left + right)
     return b - (slope * slope) / (4 * bend)
@@ -64,8 +71,7 @@ export function createExtremeSearch(
 
   function refine(each: Watch): void {
     const best = vertex(each)
-    const better = Number.isNaN(each.value) || best < each.sign * each.value - 1e-9 * Math.abs(best)
-    if (!Number.isFinite(best) || !better) return
+    if (!Number.isFinite(best) || !(each.at === oldTime || best < each.sign * each.value)) return
     const inside = { at: oldTime, value: each.sign * old[each.place]! }
     const found = findMinimum(
       (t) => (observeAt(t, probe) ? each.sign * probe[each.place]! : Number.POSITIVE_INFINITY),

@@ -1,8 +1,10 @@
 import { perUnit, second } from '../../units/si'
+import type { BusInput, StaticLoadInput } from '../case-input'
 import type { Notice } from '../case-result'
 import { gapOf } from '../starters/position'
 import type { BeforeStart } from './before-start'
 import type { Courses } from './course'
+import type { SampleStore } from './sampler'
 import type { RunRecord } from './simulate'
 
 /** Below this part of rated voltage at the winding, torque falls faster than with the square of the voltage. */
@@ -27,14 +29,19 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
     }
     if (gapOf(start.starter) > 0) found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
   }
-  const { buses, loads } = plant.input
-  for (const load of loads) {
-    const b = buses.findIndex((bus) => bus.id === load.busId)
-    const constant = load.mix.current === 0 && load.mix.power === 0
-    const under = constant
-      ? undefined
-      : record.samples.find((sample) => sample.observation[b]! < load.floor * load.ratedVoltage)
-    if (under) found.push({ kind: 'load-below-floor', loadId: load.id, at: second(under.t) })
+  for (const load of plant.input.loads) {
+    const at = firstBelowFloor(load, plant.input.buses, record.samples)
+    if (at !== null) found.push({ kind: 'load-below-floor', loadId: load.id, at: second(at) })
   }
   return found
+}
+
+/** First sample at which a load that is not all impedance is below its floor. */
+function firstBelowFloor(load: StaticLoadInput, buses: readonly BusInput[], samples: SampleStore): number | null {
+  if (load.mix.current === 0 && load.mix.power === 0) return null
+  const b = buses.findIndex((bus) => bus.id === load.busId)
+  for (let i = 0; i < samples.count; i++) {
+    if (samples.data[i * samples.width + b]! < load.floor * load.ratedVoltage) return samples.time[i]!
+  }
+  return null
 }

@@ -28,14 +28,13 @@ export const observationLength = (system: System): number =>
 export const placeOf = (system: System, motor: number, which: keyof typeof channel): number =>
   system.plant.input.buses.length + perMotor * motor + channel[which]
 
-/** Solves the network at the speeds of a state and writes down what it is like; false where there is no solution. */
-export function createObserver(system: System): (state: Float64Array, into: Float64Array) => boolean {
+/** Writes down what the last solution of the network is like; `state` holds the speeds it was solved at. */
+export function createObserver(system: System): (state: Float64Array, into: Float64Array) => void {
   const { plant, connection } = system
   const buses = plant.input.buses.length
   const nodes = new Float64Array(2 * (plant.network.order + 1))
   const { nodeOfBus } = plant.topology
   return (state, into) => {
-    if (!system.solveAt(state)) return false
     system.solver.recover(nodes)
     for (let b = 0; b < buses; b++) into[b] = Math.hypot(nodes[2 * nodeOfBus[b]!]!, nodes[2 * nodeOfBus[b]! + 1]!)
     for (let i = 0; i < plant.motors.length; i++) {
@@ -53,7 +52,6 @@ export function createObserver(system: System): (state: Float64Array, into: Floa
       into[at + 7] = square * connection.admittance[2 * i]!
       into[at + 8] = -square * connection.admittance[2 * i + 1]!
     }
-    return true
   }
 }
 

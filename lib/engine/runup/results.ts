@@ -9,13 +9,22 @@ import {
   second,
   volt,
 } from '../../units/si'
-import type { CaseSeries, HeatUsed, MotorResult, PlaceResult, RunningResult, StartResult } from '../case-result'
+import type {
+  CaseSeries,
+  HeatUsed,
+  MotorResult,
+  MotorSeries,
+  PlaceResult,
+  RunningResult,
+  StartResult,
+} from '../case-result'
 import type { Courses, RunningCourse, StartCourse } from './course'
 import type { Watch } from './extremes'
-import { channel, perMotor, placeOf } from './observation'
-import { channelRange, type Sample, thinSamples } from './sampler'
+import { placeOf } from './observation'
+import { plotScales } from './recorder'
+import { type SampleStore, sampleAt, thinSamples } from './sampler'
 import type { SettledStates } from './settled'
-import { plotScales, type RunRecord } from './simulate'
+import type { RunRecord } from './simulate'
 import type { System } from './system'
 
 const voltageAt = (watch: Watch) => ({ voltage: volt(watch.value), at: second(watch.at) })
@@ -29,7 +38,7 @@ export function placeResults(
   settled: SettledStates,
 ): PlaceResult[] {
   const { buses } = system.plant.input
-  const before = record.samples[0]!.observation
+  const before = sampleAt(record.samples, 0)
   const first = record.first ?? (courses.starts.length === 0 ? before : null)
   if (first === null) return []
   const none = courses.starts.length === 0
@@ -80,6 +89,8 @@ function startResult(
   const at = system.integral[i]!
   const i2t = start.i2t ?? record.state[at]!
   const slipEnergy = start.slipEnergy ?? record.state[at + 1]!
+  // In star the winding carries the whole line current, in delta only 1/√3 of it: each A²s in star heats it three times.
+  const i2tInStar = start.position === 'star' ? i2t : Math.min(start.i2tInStar, i2t)
   const since = (instant: number | null) => (instant === null ? null : second(instant - start.at))
   const { accelerating } = start.watches
   const hangs = start.outcome !== null && start.outcome.kind !== 'started'
@@ -101,12 +112,12 @@ function startResult(
     i2t: ampereSquaredSecond(i2t),
     slipEnergy: joule(slipEnergy),
     kineticEnergy: joule((motor.inertia * reached ** 2) / 2),
-    heatUsed: heatUsed(system, i, i2t, slipEnergy),
+    heatUsed: heatUsed(system, i, i2t + 2 * i2tInStar, slipEnergy),
     settledSpeed: hangs && record.end.kind === 'settled' ? speedAtEnd : settledSpeed,
   }
 }
 
-/** ∫I²dt and slip energy in parts of what the permissible locked-rotor time allows, both at rated voltage and as declared. */
+/** ∫I²dt (referred to the winding) and slip energy in parts of what the permissible locked-rotor time allows, both at rated voltage and as declared. */
 function heatUsed(system: System, i: number, i2t: number, slipEnergy: number): HeatUsed {
   const { lockedRotorCurrent, lockedRotorTorque, permissibleTime } = system.plant.motors[i]!.declared
   if (permissibleTime === null) return { byCurrent: null, byRotor: null, figure: null, state: null }
@@ -134,48 +145,52 @@ function runningResult(running: RunningCourse, record: RunRecord, settledSpeed: 
 }
 
 /** Speed of a motor at an instant of the run, by a straight line between samples. */
-function speedAt(system: System, record: RunRecord, motor: number, t: number): RadianPerSecond {
+function speedAt(system: System, { samples }: RunRecord, motor: number, t: number): RadianPerSecond {
   const place = placeOf(system, motor, 'speed')
-  const { samples } = record
-  let [low, high] = [0, samples.length - 1]
+  const { time, data, width } = samples
+  let [low, high] = [0, samples.count - 1]
   while (high - low > 1) {
     const middle = (low + high) >> 1
-    if (samples[middle]!.t <= t) low = middle
+    if (time[middle]! <= t) low = middle
     else high = middle
   }
-  const [from, to] = [samples[low]!, samples[high] ?? samples[low]!]
-  const part = to.t > from.t ? Math.min(1, Math.max(0, (t - from.t) / (to.t - from.t))) : 0
-  return radianPerSecond(from.observation[place]! + part * (to.observation[place]! - from.observation[place]!))
+  const span = time[high]! - time[low]!
+  const part = span > 0 ? Math.min(1, Math.max(0, (t - time[low]!) / span)) : 0
+  const from = data[low * width + place]!
+  return radianPerSecond(from + part * (data[high * width + place]! - from))
 }
 
+const plotted = [
+  'speed',
+  'torque',
+  'loadTorque',
+  'lineCurrent',
+  'motorCurrent',
+  'motorVoltage',
+  'active',
+  'reactive',
+] as const
+
 /** The run as lines to draw: as few samples as show it truly. */
-export function caseSeries(system: System, samples: readonly Sample[]): CaseSeries {
-  const scales = plotScales(system)
+export function caseSeries(system: System, samples: SampleStore): CaseSeries {
   const { buses } = system.plant.input
-  const kept = thinSamples(
-    samples,
-    channelRange(samples, (c) => scales[c]!),
-  )
-  const column = (place: number): number[] => kept.map((sample) => sample.observation[place]!)
-  const motors = system.plant.motors.map((motor, i) => {
-    const at = buses.length + perMotor * i
-    return [
-      motor.id,
-      {
-        speed: column(at + channel.speed),
-        torque: column(at + channel.torque),
-        loadTorque: column(at + channel.loadTorque),
-        lineCurrent: column(at + channel.lineCurrent),
-        motorCurrent: column(at + channel.motorCurrent),
-        motorVoltage: column(at + channel.motorVoltage),
-        activePower: column(at + channel.active),
-        reactivePower: column(at + channel.reactive),
-      },
-    ] as const
+  const { motors } = system.plant
+  const places = motors.flatMap((_, i) => plotted.map((which) => placeOf(system, i, which)))
+  const kept = thinSamples(samples, [...buses.keys(), ...places], plotScales(system))
+  const column = (place: number): number[] => kept.map((index) => samples.data[index * samples.width + place]!)
+  const motorSeries = (i: number): MotorSeries => ({
+    speed: column(placeOf(system, i, 'speed')),
+    torque: column(placeOf(system, i, 'torque')),
+    loadTorque: column(placeOf(system, i, 'loadTorque')),
+    lineCurrent: column(placeOf(system, i, 'lineCurrent')),
+    motorCurrent: column(placeOf(system, i, 'motorCurrent')),
+    motorVoltage: column(placeOf(system, i, 'motorVoltage')),
+    activePower: column(placeOf(system, i, 'active')),
+    reactivePower: column(placeOf(system, i, 'reactive')),
   })
   return {
-    time: kept.map((sample) => sample.t),
+    time: kept.map((index) => samples.time[index]!),
     busVoltage: Object.fromEntries(buses.map((bus, b) => [bus.id, column(b)])),
-    motors: Object.fromEntries(motors),
+    motors: Object.fromEntries(motors.map((motor, i) => [motor.id, motorSeries(i)])),
   }
 }

@@ -1,80 +1,106 @@
-/** Instants kept for the plots: time and a copy of the observation. */
-export interface Sample {
-  t: number
-  observation: Float64Array
+/** Observations kept for the plots, one row a sample, in one growing block. */
+export interface SampleStore {
+  readonly width: number
+  count: number
+  time: Float64Array
+  /** Rows of `width` numbers. */
+  data: Float64Array
 }
 
-/**
- * Largest departure from the straight line between samples, in parts of each channel's range, when the run is thinned.
- */
+export const sampleStore = (width: number): SampleStore => ({
+  width,
+  count: 0,
+  time: new Float64Array(256),
+  data: new Float64Array(256 * width),
+})
+
+export function addSample(store: SampleStore, t: number, observation: Float64Array): void {
+  if (store.count === store.time.length) {
+    const time = new Float64Array(2 * store.time.length)
+    const data = new Float64Array(2 * store.data.length)
+    time.set(store.time)
+    data.set(store.data)
+    store.time = time
+    store.data = data
+  }
+  store.time[store.count] = t
+  store.data.set(observation, store.count * store.width)
+  store.count++
+}
+
+/** One sample's observation, as a view. */
+export const sampleAt = (store: SampleStore, index: number): Float64Array =>
+  store.data.subarray(index * store.width, (index + 1) * store.width)
+
+/** Largest departure from the straight line between samples, in parts of each channel's range, when a run is thinned. */
 const roughness = 5e-4
 
 /**
- * Leaves out samples that the straight lines between the others show anyway (Ramer, Douglas, Peucker on all channels
- * at once). The first and last sample, both samples of every switching and the given instants stay.
+ * Samples that are needed so that straight lines between them show the rest (Ramer, Douglas, Peucker on all given
+ * channels at once). The first and last one and both samples of every switching stay.
+ *
+ * @param scale what counts as one whole in each channel, at least; a larger range of the run takes its place
  */
-export function thinSamples(samples: readonly Sample[], range: Float64Array): Sample[] {
-  if (samples.length < 3) return [...samples]
-  const keep = new Uint8Array(samples.length)
-  keep[0] = 1
-  keep[samples.length - 1] = 1
-  const stack: [number, number][] = []
+export function thinSamples(store: SampleStore, channels: readonly number[], scale: Float64Array): number[] {
+  const { count, time } = store
+  const range = Float64Array.from(channels, (c) => Math.max(scale[c]!, rangeOf(store, c)))
+  const keep = new Uint8Array(count)
+  if (count > 0) keep[0] = keep[count - 1] = 1
+  const open: number[] = []
   let from = 0
-  for (let i = 1; i < samples.length; i++) {
-    if (samples[i]!.t === samples[i - 1]!.t) {
-      keep[i] = 1
-      keep[i - 1] = 1
-      if (i - 1 > from) stack.push([from, i - 1])
-      from = i
-    }
+  for (let i = 1; i < count; i++) {
+    if (time[i] !== time[i - 1]) continue
+    keep[i] = keep[i - 1] = 1
+    if (i - 1 > from) open.push(from, i - 1)
+    from = i
   }
-  stack.push([from, samples.length - 1])
-  for (let pair = stack.pop(); pair !== undefined; pair = stack.pop()) {
-    const [a, b] = pair
-    const worst = farthest(samples, a, b, range)
-    if (worst.distance <= roughness) continue
-    keep[worst.index] = 1
-    stack.push([a, worst.index], [worst.index, b])
+  open.push(from, count - 1)
+  while (open.length > 0) {
+    const last = open.pop()!
+    const first = open.pop()!
+    const worst = farthest(store, first, last, channels, range)
+    if (worst < 0) continue
+    keep[worst] = 1
+    open.push(first, worst, worst, last)
   }
-  return samples.filter((_, i) => keep[i] === 1)
+  return Array.from({ length: count }, (_, i) => i).filter((i) => keep[i] === 1)
 }
 
+/** The sample farthest from the lines between two others, or −1 where all are within the roughness. */
 function farthest(
-  samples: readonly Sample[],
-  a: number,
-  b: number,
+  store: SampleStore,
+  first: number,
+  last: number,
+  channels: readonly number[],
   range: Float64Array,
-): { index: number; distance: number } {
-  const [first, last] = [samples[a]!, samples[b]!]
-  const width = last.t - first.t
-  const worst = { index: a, distance: 0 }
-  for (let i = a + 1; i < b; i++) {
-    const { t, observation } = samples[i]!
-    const part = width > 0 ? (t - first.t) / width : 0
-    let distance = 0
-    for (let c = 0; c < range.length; c++) {
-      if (range[c] === 0) continue
-      const line = first.observation[c]! + part * (last.observation[c]! - first.observation[c]!)
-      const off = Math.abs(observation[c]! - line) / range[c]!
-      if (off > distance) distance = off
-    }
-    if (distance > worst.distance) {
-      worst.index = i
-      worst.distance = distance
+): number {
+  const { time, data, width } = store
+  const span = time[last]! - time[first]!
+  let index = -1
+  let most = roughness
+  for (let k = 0; k < channels.length; k++) {
+    const c = channels[k]!
+    const begin = data[first * width + c]!
+    const slope = span > 0 ? (data[last * width + c]! - begin) / span : 0
+    const inverse = 1 / range[k]!
+    for (let i = first + 1; i < last; i++) {
+      const off = Math.abs(data[i * width + c]! - begin - slope * (time[i]! - time[first]!)) * inverse
+      if (off > most) {
+        most = off
+        index = i
+      }
     }
   }
-  return worst
+  return index
 }
 
-/** Range of every channel over the samples; channels that hardly move in parts of `floor` count as still (0). */
-export function channelRange(samples: readonly Sample[], floor: (channel: number) => number): Float64Array {
-  const length = samples[0]?.observation.length ?? 0
-  const [low, high] = [new Float64Array(length).fill(Infinity), new Float64Array(length).fill(-Infinity)]
-  for (const { observation } of samples) {
-    for (let c = 0; c < length; c++) {
-      if (observation[c]! < low[c]!) low[c] = observation[c]!
-      if (observation[c]! > high[c]!) high[c] = observation[c]!
-    }
+function rangeOf(store: SampleStore, c: number): number {
+  let low = Number.POSITIVE_INFINITY
+  let high = Number.NEGATIVE_INFINITY
+  for (let i = 0; i < store.count; i++) {
+    const value = store.data[i * store.width + c]!
+    if (value < low) low = value
+    if (value > high) high = value
   }
-  return low.map((least, c) => Math.max(high[c]! - least, floor(c)))
+  return high - low
 }

@@ -24,8 +24,10 @@ export function settledStates(system: System, courses: Courses, record: RunRecor
   if (record.end.kind === 'collapsed') return { afterStart: null, afterProcess: null, speeds }
   const observe = createObserver(system)
   const observation = (): Float64Array | null => {
+    if (!system.solveAt(speeds)) return null
     const into = new Float64Array(observationLength(system))
-    return observe(speeds, into) ? into : null
+    observe(speeds, into)
+    return into
   }
   const moving = turningMotors(system)
   if (!settle(system, moving, speeds)) {

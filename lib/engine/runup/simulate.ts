@@ -3,14 +3,15 @@ import { pieceAt } from '../driven/load-segments'
 import { evaluateMachine } from '../machines/machine-table'
 import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
-import { changeOverOf, firstPosition, gapOf, type Position } from '../starters/position'
+import { changeOverOf } from '../starters/position'
 import { type BeforeStart, supplyPower, weakestBus } from './before-start'
 import type { Courses, StartCourse } from './course'
 import { type Crossing, firstCrossings } from './crossing'
-import { createExtremeSearch, type Watch } from './extremes'
-import { findHang, hangOutcome, turningMotors } from './hang'
-import { busVoltages, createObserver, motorState, observationLength, placeOf } from './observation'
-import type { Sample } from './sampler'
+import { findHang, hangOutcome } from './hang'
+import { busVoltages, motorState, placeOf } from './observation'
+import { createRecorder } from './recorder'
+import type { SampleStore } from './sampler'
+import { changeOver, nextInstant, sameInstant, switchDue } from './schedule'
 import type { System } from './system'
 
 /** How a run ended. */
@@ -23,10 +24,9 @@ export type RunEnd =
 
 export interface RunRecord {
   end: RunEnd
-  samples: Sample[]
+  samples: SampleStore
   /** Just after the first switching-on; null when the network had no solution there or nothing was started. */
   first: Float64Array | null
-  firstAt: number
   /** From the source into the supply's bus at that instant, W and var. */
   firstPower: Complex | null
   state: Float64Array
@@ -35,12 +35,10 @@ export interface RunRecord {
 
 /** Longest step, s. */
 const longest = 1
-/** Torque left, in parts of rated, below which a shaft counts as settled after its start, and as worth a look for a hang. */
+/** Torque left, in parts of rated, below which a shaft counts as settled after its start, as worth a look for a hang, as still. */
 const settledTorque = 1e-4
 const hangingTorque = 4e-3
-/** Departure of a plotted quantity from the straight line, in parts of its scale, above which more samples are taken. */
-const coarse = 2e-3
-const sameInstant = 1e-12
+const stillTorque = 1e-9
 
 /**
  * Runs a plant up from its state before the start.
@@ -51,106 +49,34 @@ const sameInstant = 1e-12
 export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const { system } = before
   const { plant } = system
+  const { starts } = courses
   const { timeLimit, tolerance } = plant.input.settings
-  const observe = createObserver(system)
-  const length = observationLength(system)
   const state = Float64Array.from(before.speeds)
   const integrator = createIntegrator(state, system.derivative, stepScale(system, tolerance), longest)
+  const recorder = createRecorder(system, courses, integrator)
+  const { now } = recorder
   const scratch = new Float64Array(system.stateLength)
-  const end = new Float64Array(length)
-  const plotScale = plotScales(system)
-  const samples: Sample[] = []
-  let largestMismatch = 0
   let first: Float64Array | null = null
   let firstPower: Complex | null = null
   let lastHangTorque = Number.POSITIVE_INFINITY
 
-  const observeAt = (t: number, into: Float64Array): boolean => {
-    integrator.interpolate(t, scratch)
-    return observe(scratch, into)
-  }
-  const search = createExtremeSearch(allWatches(courses), length, observeAt)
-
-  function keep(t: number, observation: Float64Array): void {
-    samples.push({ t, observation: Float64Array.from(observation) })
-    search.add(t, observation)
-  }
-
-  function result(outcome: RunEnd): RunRecord {
-    const { steps, rejected, evaluations, largestErrorRatio } = integrator.counters
-    return {
-      end: outcome,
-      samples,
-      first,
-      firstAt,
-      firstPower,
-      state,
-      counters: { steps, rejected, evaluations, largestErrorRatio, largestMismatch },
-    }
+  function result(end: RunEnd): RunRecord {
+    const { largestMismatch, samples } = recorder
+    return { end, samples, first, firstPower, state, counters: { ...integrator.counters, largestMismatch } }
   }
 
   const collapsed = (t: number): RunRecord => result({ kind: 'collapsed', at: t, busId: weakestBus(system) })
 
-  function moveTo(start: StartCourse, position: Position, t: number): void {
-    start.position = position
-    system.move(start.motor, position)
-    if (position === 'running') start.runningAt = t
-    if (position === 'open') start.openedAt = t
-    const connected = position !== 'open'
-    start.watches.line.active = true
-    start.watches.motor.active = true
-    start.watches.voltage.active = connected
-    start.watches.accelerating.active = connected && start.at95 === null
-  }
-
-  /** Switchings due at t. Returns the starts that moved. */
-  function switchDue(t: number): StartCourse[] {
-    const moved: StartCourse[] = []
-    for (const start of courses.starts) {
-      const change = changeOverOf(start.starter)
-      const onFirst = start.position === 'tap' || start.position === 'star'
-      if (!start.switchedOn && t >= start.at - sameInstant) {
-        start.switchedOn = true
-        moveTo(start, firstPosition(start.starter), t)
-        moved.push(start)
-      } else if (onFirst && change?.kind === 'time' && t >= start.at + change.at - sameInstant) {
-        moveTo(start, gapOf(start.starter) > 0 ? 'open' : 'running', t)
-        moved.push(start)
-      } else if (start.position === 'open' && t >= start.openedAt! + gapOf(start.starter) - sameInstant) {
-        moveTo(start, 'running', t)
-        moved.push(start)
-      }
-    }
-    return moved
-  }
-
-  /** Earliest switching or time limit after t. */
-  function nextInstant(t: number): number {
-    let next = horizon
-    for (const start of courses.starts) {
-      const change = changeOverOf(start.starter)
-      const onFirst = start.position === 'tap' || start.position === 'star'
-      const due = [
-        start.switchedOn ? null : start.at,
-        onFirst && change?.kind === 'time' ? start.at + change.at : null,
-        start.position === 'open' ? start.openedAt! + gapOf(start.starter) : null,
-        start.outcome === null ? start.at + timeLimit : null,
-      ]
-      for (const each of due) if (each !== null && each > t + sameInstant && each < next) next = each
-    }
-    return next
-  }
+  const held = (i: number): boolean => system.resting[i] === 1 && system.connection.code[i] !== 0
 
   /** Lets go every resting shaft whose torque exceeds what holds it; after `solveAt`. */
   function release(): void {
     for (let i = 0; i < plant.motors.length; i++) {
-      if (!system.resting[i] || system.connection.code[i] === 0) continue
-      if (system.balance(i, 0) > 0) {
-        system.resting[i] = 0
-        system.piece[i] = 0
-        const start = courses.starts.find((each) => each.motor === i)
-        if (start) start.turned = true
-      }
+      if (!held(i) || system.balance(i, 0) <= 0) continue
+      system.resting[i] = 0
+      system.piece[i] = 0
+      const start = starts.find((each) => each.motor === i)
+      if (start) start.turned = true
     }
   }
 
@@ -159,50 +85,54 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     lastHangTorque = Number.POSITIVE_INFINITY
     if (!system.solveAt(state)) return false
     release()
-    if (!observe(state, end)) return false
-    largestMismatch = Math.max(largestMismatch, system.solver.mismatch())
-    search.breakHere()
-    keep(t, end)
+    if (!recorder.begin(t)) return false
     if (first === null) {
-      first = Float64Array.from(end)
+      first = Float64Array.from(now)
       firstPower = supplyPower(system, before.source)
     }
     for (const start of moved) {
-      const now = motorState(system, end, start.motor)
-      if (start.standstill === null) {
-        start.standstill = now
-        continue
-      }
-      const { position, motor } = start
-      if (position !== 'open' && position !== 'running') continue
-      courses.changeOvers.push({
-        motorId: plant.motors[motor]!.id,
-        at: second(t),
-        to: position,
-        speed: radianPerSecond(state[motor]!),
-        state: now,
-        busVoltages: busVoltages(system, end),
-        tooEarly: position === 'running' && state[motor]! < plant.breakdownSpeed[motor]!,
-      })
+      if (start.standstill === null) start.standstill = motorState(system, now, start.motor)
+      else noteChangeOver(start, t)
     }
     return integrator.restart(t, 0)
   }
 
+  function noteChangeOver({ motor, position }: StartCourse, t: number): void {
+    if (position !== 'open' && position !== 'running') return
+    courses.changeOvers.push({
+      motorId: plant.motors[motor]!.id,
+      at: second(t),
+      to: position,
+      speed: radianPerSecond(state[motor]!),
+      state: motorState(system, now, motor),
+      busVoltages: busVoltages(system, now),
+      tooEarly: position === 'running' && state[motor]! < plant.breakdownSpeed[motor]!,
+    })
+  }
+
   function judgeStarted(): void {
-    for (const start of courses.starts) {
+    for (const start of starts) {
       if (start.outcome !== null || start.runningAt === null || start.atCriterion === null) continue
       start.outcome = { kind: 'started', at: second(Math.max(start.runningAt, start.atCriterion) - start.at) }
     }
   }
 
-  /** Acts on crossings at the present instant. Returns the starts that changed over. */
+  function giveUp(t: number): void {
+    for (const start of starts) {
+      if (start.outcome !== null || t < start.at + timeLimit - sameInstant) continue
+      const neverTurned = system.resting[start.motor] === 1 && !start.turned
+      start.outcome = neverTurned
+        ? hangOutcome(system, start, state)
+        : { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
+    }
+  }
+
+  /** Acts on crossings at the present instant: the starts that changed over, and whether the motion begins anew. */
   function act(crossings: readonly Crossing[], t: number): { moved: StartCourse[]; anew: boolean } {
     const moved: StartCourse[] = []
     let anew = false
     for (const { motor, kind, speed } of crossings) {
       state[motor] = speed
-      const start = courses.starts.find((each) => each.motor === motor)
-      const running = courses.running.find((each) => each.motor === motor)
       if (kind === 'corner-up') system.piece[motor] = system.piece[motor]! + 1
       if (kind === 'corner-down') system.piece[motor] = system.piece[motor]! - 1
       if (kind === 'halt') {
@@ -210,97 +140,64 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
         system.piece[motor] = 0
         anew = true
       }
+      const running = courses.running.find((each) => each.motor === motor)
       if (running && kind === 'pull-out') running.pulledOutAt = t
       if (running && kind === 'recovery') running.pulledOutAt = null
-      if (!start) continue
-      if (kind === 'at-95') {
+      const start = starts.find((each) => each.motor === motor)
+      if (start && kind === 'at-95') {
         start.at95 = t
         start.watches.accelerating.active = false
       }
-      if (kind === 'criterion') {
-        start.atCriterion = t
+      if (start && kind === 'criterion') {
         const at = system.integral[motor]!
+        start.atCriterion = t
         start.i2t = state[at]!
         start.slipEnergy = state[at + 1]!
       }
-      if (kind === 'change-over') {
-        moveTo(start, gapOf(start.starter) > 0 ? 'open' : 'running', t)
+      if (start && kind === 'change-over') {
+        changeOver(system, start, t)
         moved.push(start)
       }
     }
     return { moved, anew }
   }
 
-  /** Samples between two instants of the last step, closer where a plotted line bends. */
-  function sampleBetween(from: Sample, to: Sample, depth: number): boolean {
-    const middle = new Float64Array(length)
-    const t = (from.t + to.t) / 2
-    if (!observeAt(t, middle)) return false
-    const bends =
-      depth > 0 &&
-      plotScale.some((scale, c) => {
-        const line = (from.observation[c]! + to.observation[c]!) / 2
-        return Math.abs(middle[c]! - line) > coarse * scale
-      })
-    const sample = { t, observation: middle }
-    if (bends && !sampleBetween(from, sample, depth - 1)) return false
-    samples.push(sample)
-    search.add(t, middle)
-    return !bends || sampleBetween(sample, to, depth - 1)
-  }
-
-  /** Observes the last step up to its end; false where the network has no solution there. */
-  function look(): boolean {
-    const t = integrator.time
-    if (!observe(state, end)) return false
-    const last = samples.at(-1)!
-    const now = { t, observation: Float64Array.from(end) }
-    if (t > last.t && !sampleBetween(last, now, 4)) return false
-    if (!observe(state, end)) return false
-    largestMismatch = Math.max(largestMismatch, system.solver.mismatch())
-    samples.push(now)
-    search.add(t, end)
-    return true
-  }
-
   /** Instant in the last step at which a resting shaft is let go, or null. */
   function releaseInstant(): number | null {
-    const held = plant.motors.flatMap((_, i) => (system.resting[i] && system.connection.code[i] !== 0 ? [i] : []))
-    if (held.length === 0 || !system.solveAt(state)) return null
     let earliest: number | null = null
-    for (const i of held) {
+    for (let i = 0; i < plant.motors.length; i++) {
+      if (!held(i) || !system.solveAt(state) || system.balance(i, 0) <= 0) continue
       const surplus = (t: number): number => {
         integrator.interpolate(t, scratch)
         return system.solveAt(scratch) ? system.balance(i, 0) : -1
       }
-      if (!system.solveAt(state) || system.balance(i, 0) <= 0) continue
       const { from, time } = integrator
       const atFrom = surplus(from)
-      const t = atFrom >= 0 ? Math.min(time, from + 1e-9) : findRoot(surplus, from, time, 1e-9)
+      const t = atFrom >= 0 ? Math.min(time, from + 1e-9) : findRoot(surplus, from, time, 1e-9, atFrom)
       if (earliest === null || t < earliest) earliest = t
     }
     return earliest
   }
 
-  const restless = (i: number): number =>
-    system.resting[i] ? 0 : Math.abs(end[placeOf(system, i, 'accelerating')]!) / plant.ratedTorque[i]!
+  /** Largest torque left on a shaft at the last instant observed, in parts of rated; shafts given up do not count. */
+  function restlessness(): number {
+    let most = 0
+    for (let i = 0; i < plant.motors.length; i++) {
+      if (system.resting[i] || starts.some((start) => start.motor === i && start.outcome?.kind === 'timed-out'))
+        continue
+      most = Math.max(most, Math.abs(now[placeOf(system, i, 'accelerating')]!) / plant.ratedTorque[i]!)
+    }
+    return most
+  }
 
   /** Whether the run is over: starts resolved and shafts settled, or every open start hanging. */
   function isOver(): boolean {
-    const open = courses.starts.filter((start) => start.outcome === null)
-    if (courses.starts.some((start) => start.position === 'open' || !start.switchedOn)) return false
-    const gaveUp = new Set(
-      courses.starts.flatMap((start) => (start.outcome?.kind === 'timed-out' ? [start.motor] : [])),
-    )
-    const torque = Math.max(
-      0,
-      ...turningMotors(system)
-        .filter((i) => !gaveUp.has(i))
-        .map(restless),
-    )
+    if (starts.some((start) => start.position === 'open' || !start.switchedOn)) return false
+    const torque = restlessness()
+    const open = starts.filter((start) => start.outcome === null)
     if (open.length === 0) return torque < settledTorque
-    const pending = open.some((start) => start.position !== 'running' && changeOverOf(start.starter)?.kind === 'time')
-    if (pending || torque > hangingTorque || torque > lastHangTorque / 2) return false
+    const waits = open.some((start) => start.position !== 'running' && changeOverOf(start.starter)?.kind === 'time')
+    if (waits || torque > hangingTorque || torque > lastHangTorque / 2) return false
     lastHangTorque = torque
     const speeds = findHang(system, open, state)
     if (speeds === null) return false
@@ -309,62 +206,63 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     return true
   }
 
-  function giveUp(t: number): void {
-    for (const start of courses.starts) {
-      if (start.outcome !== null || t < start.at + timeLimit - sameInstant) continue
-      start.outcome =
-        system.resting[start.motor] && !start.turned
-          ? hangOutcome(system, start, state)
-          : { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
+  /** Passes over time in which nothing moves, up to the next instant; false where something does move. */
+  function skipStillness(t: number, until: number): boolean {
+    if (until - t <= longest || restlessness() > stillTorque || starts.some((start) => start.position === 'open')) {
+      return false
     }
+    if (!system.derivative(t, state, scratch)) return false
+    for (const at of system.integral) {
+      if (at < 0) continue
+      state[at] = state[at]! + scratch[at]! * (until - t)
+      state[at + 1] = state[at + 1]! + scratch[at + 1]! * (until - t)
+    }
+    return integrator.restart(until, 0) && recorder.begin(until)
   }
-
-  const firstAt = Math.min(...courses.starts.map((start) => start.at))
-  const horizon = Math.max(...courses.starts.map((start) => start.at)) + 2 * timeLimit
 
   system.piece.set(plant.driven.map((load, i) => pieceAt(load, state[i]!)))
-  if (!observe(state, end)) return collapsed(0)
-  keep(0, end)
-  if (courses.starts.length === 0) return result({ kind: 'settled', at: 0 })
-  if (firstAt > 0) keep(firstAt, end)
+  if (!recorder.begin(0)) return collapsed(0)
+  if (starts.length === 0) return result({ kind: 'settled', at: 0 })
+  const firstAt = Math.min(...starts.map((start) => start.at))
+  const horizon = Math.max(...starts.map((start) => start.at)) + 2 * timeLimit
+  if (firstAt > 0 && !recorder.begin(firstAt)) return collapsed(firstAt)
   for (const bus of courses.buses) bus.deepest.active = true
-  if (!afterSwitching(firstAt, switchDue(firstAt))) return collapsed(firstAt)
+  if (!afterSwitching(firstAt, switchDue(system, starts, firstAt))) return collapsed(firstAt)
 
   for (;;) {
+    const from = integrator.time
+    if (from >= horizon) return result({ kind: 'horizon', at: from })
+    const until = nextInstant(starts, from, timeLimit, horizon)
+    let crossings: Crossing[] = []
+    let letGo = false
+    let stride = 0
+    if (!skipStillness(from, until)) {
+      if (integrator.advance(until) === 'blocked') return collapsed(integrator.time)
+      stride = integrator.nextStep
+      const released = releaseInstant()
+      crossings = firstCrossings(system, courses, integrator)
+      const crossed = crossings[0]?.at ?? Number.POSITIVE_INFINITY
+      letGo = released !== null && released < crossed
+      if (letGo) crossings = []
+      if (released !== null && letGo) integrator.cutAt(released)
+      else if (crossings.length > 0) integrator.cutAt(crossed)
+      if (!recorder.follow(!letGo && crossings.length === 0)) return collapsed(integrator.time)
+    }
     const t = integrator.time
-    if (t >= horizon) return result({ kind: 'horizon', at: t })
-    if (integrator.advance(nextInstant(t)) === 'blocked') return collapsed(integrator.time)
-    const released = releaseInstant()
-    let crossings = firstCrossings(system, courses, integrator)
-    const crossed = crossings[0]?.at ?? Number.POSITIVE_INFINITY
-    const letGo = released !== null && released < crossed
-    if (letGo) crossings = []
-    const stride = integrator.nextStep
-    if (letGo) integrator.cutAt(released)
-    else if (crossings.length > 0) integrator.cutAt(crossed)
-    if (!look()) return collapsed(integrator.time)
-    const now = integrator.time
-    const { moved, anew } = act(crossings, now)
-    moved.push(...switchDue(now))
+    for (const start of starts) if (start.position === 'star') start.i2tInStar = state[system.integral[start.motor]!]!
+    const { moved, anew } = act(crossings, t)
+    moved.push(...switchDue(system, starts, t))
     judgeStarted()
-    giveUp(now)
+    giveUp(t)
     if (moved.length > 0 || anew || letGo) {
-      if (!afterSwitching(now, moved)) return collapsed(now)
-    } else if (crossings.length > 0 && !integrator.restart(now, stride)) return collapsed(now)
-    judgeStarted()
-    if (isOver()) return result({ kind: 'settled', at: now })
+      if (!afterSwitching(t, moved)) return collapsed(t)
+      judgeStarted()
+    } else if (crossings.length > 0 && !integrator.restart(t, stride)) return collapsed(t)
+    if (isOver()) return result({ kind: 'settled', at: t })
   }
 }
 
-function allWatches(courses: Courses): Watch[] {
-  return [
-    ...courses.buses.flatMap((bus) => [bus.deepest, bus.highest]),
-    ...courses.starts.flatMap((start) => Object.values<Watch>(start.watches)),
-    ...courses.running.flatMap((running) => Object.values<Watch>(running.watches)),
-  ]
-}
-
-/** Error allowed in a step: speeds in parts of synchronous speed, integrals in parts of one second of locked rotor at rated voltage. */
+/** Error allowed in a step: speeds in parts of synchronous speed, integrals in parts of ten seconds of locked rotor at rated voltage. */
 function stepScale(system: System, tolerance: number): Float64Array {
   const { plant } = system
   const scale = new Float64Array(system.stateLength)
@@ -376,27 +274,6 @@ function stepScale(system: System, tolerance: number): Float64Array {
     const [re, im] = [plant.machines.admittance[2 * i]!, plant.machines.admittance[2 * i + 1]!]
     scale[at] = (10 * tolerance * motor.ratedVoltage ** 2 * (re * re + im * im)) / 3
     scale[at + 1] = 10 * tolerance * motor.ratedVoltage ** 2 * plant.machines.airgap[i]!
-  })
-  return scale
-}
-
-/** What counts as one whole on a plot of each channel. */
-export function plotScales(system: System): Float64Array {
-  const scale = new Float64Array(observationLength(system))
-  system.plant.input.buses.forEach((bus, b) => {
-    scale[b] = 0.1 * bus.nominal
-  })
-  system.plant.motors.forEach((motor, i) => {
-    const current = motor.ratedPower / motor.ratedVoltage
-    scale[placeOf(system, i, 'speed')] = motor.ratedSpeed
-    scale[placeOf(system, i, 'torque')] = motor.ratedTorque
-    scale[placeOf(system, i, 'loadTorque')] = motor.ratedTorque
-    scale[placeOf(system, i, 'accelerating')] = motor.ratedTorque
-    scale[placeOf(system, i, 'lineCurrent')] = 2 * current
-    scale[placeOf(system, i, 'motorCurrent')] = 2 * current
-    scale[placeOf(system, i, 'motorVoltage')] = motor.ratedVoltage
-    scale[placeOf(system, i, 'active')] = 2 * motor.ratedPower
-    scale[placeOf(system, i, 'reactive')] = 2 * motor.ratedPower
   })
   return scale
 }
