@@ -13,6 +13,7 @@ export function computeStudyInBrowser(
   { onProgress, signal }: { onProgress?: ProgressListener; signal?: AbortSignal } = {},
 ): Promise<StudyResult> {
   return new Promise((resolve, reject) => {
+    if (signal?.aborted) return reject(signal.reason)
     const thread = new Worker(new URL('./browser.worker.ts', import.meta.url), { type: 'module' })
     const end = (settle: () => void) => {
       thread.terminate()

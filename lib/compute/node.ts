@@ -28,6 +28,7 @@ export async function computeStudy(document: StudyDocument, options: ComputeOpti
       { document, port: port2 },
       {
         entry: options.entry,
+        name: 'compute',
         milliseconds: options.milliseconds ?? 240_000,
         heapMegabytes: 1024,
         signal: options.signal,

@@ -8,7 +8,7 @@ export interface ThreadTask extends ComputeTask {
 }
 
 /** The task of a computing thread of a server or of the command line. */
-export default function compute({ document, port }: ThreadTask): ComputeOutcome {
+export function compute({ document, port }: ThreadTask): ComputeOutcome {
   const tell = (done: number, of: number) => {
     const progress: ComputeProgress = { done, of }
     port.postMessage(progress)

@@ -11,8 +11,10 @@ export interface RenderOptions {
 
 /** Renders a report in a thread of this process, so that neither a request nor a page waits for it. */
 export const renderReport = (input: ReportInput, options: RenderOptions): Promise<Uint8Array> =>
-  runInThread<Uint8Array>(
-    input,
-    { entry: options.entry, milliseconds: options.milliseconds ?? 240_000, heapMegabytes: 900, signal: options.signal },
-    [],
-  )
+  runInThread<Uint8Array>(input, {
+    entry: options.entry,
+    name: 'render',
+    milliseconds: options.milliseconds ?? 240_000,
+    heapMegabytes: 900,
+    signal: options.signal,
+  })

@@ -17,6 +17,6 @@ function handCheckOf(document: StudyDocument): HandCheckResult | null {
 }
 
 /** The task of a rendering thread: the PDF of a report as bytes. */
-export default async function render(input: ReportInput): Promise<Uint8Array> {
+export async function render(input: ReportInput): Promise<Uint8Array> {
   return renderReport({ ...input, handCheck: handCheckOf(input.document) })
 }

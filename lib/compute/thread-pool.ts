@@ -1,3 +1,4 @@
+import type { MessagePort } from 'node:worker_threads'
 import { Piscina } from 'piscina'
 import { DomainError } from '../errors'
 
@@ -5,6 +6,8 @@ import { DomainError } from '../errors'
 export interface ThreadBudget {
   /** Path of the bundled thread entry. */
   entry: string
+  /** The function of that entry which carries the task out. */
+  name: string
   milliseconds: number
   heapMegabytes: number
   signal?: AbortSignal
@@ -38,12 +41,12 @@ const stopped = 'Stopped before the end.'
 export async function runInThread<Outcome>(
   task: object,
   budget: ThreadBudget,
-  transferList: Parameters<Piscina['run']>[1] extends { transferList?: infer T } | undefined ? T : never,
+  transferList: MessagePort[] = [],
 ): Promise<Outcome> {
   const deadline = AbortSignal.timeout(budget.milliseconds)
   const signal = budget.signal ? AbortSignal.any([budget.signal, deadline]) : deadline
   try {
-    return await poolOf(budget.entry, budget.heapMegabytes).run(task, { signal, transferList })
+    return await poolOf(budget.entry, budget.heapMegabytes).run(task, { name: budget.name, signal, transferList })
   } catch (error) {
     if (budget.signal?.aborted) throw new DomainError('wrong-state', stopped)
     if (deadline.aborted) throw new DomainError('too-large', tooLong)
