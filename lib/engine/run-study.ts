@@ -30,5 +30,10 @@ export function judgeStudy(input: StudyRunInput, results: readonly CaseResult[])
       return verdict === null ? [] : [verdict]
     }),
   )
-  return { engineVersion: ENGINE_VERSION, cases: results, verdicts, overall: overallVerdict(verdicts) }
+  return {
+    engineVersion: ENGINE_VERSION,
+    cases: results,
+    verdicts,
+    overall: overallVerdict(verdicts, input.rules, input.margins),
+  }
 }

@@ -17,7 +17,7 @@ export interface StudyResult {
   overall: StudyVerdict
 }
 
-/** The whole meets only if every applicable limit was assessed. `governing` is the row with the least margin in parts of its limit. */
+/** The whole meets only if every applicable limit was assessed. `governing` is the row with the least margin, counted in bands of `close`. */
 export interface StudyVerdict {
   word: VerdictWord
   governing: Verdict | null

@@ -121,8 +121,9 @@ describe('the Velmoor cases', () => {
       // the breakaway line does: C1 has 50.16 % at standstill and 49.97 % at 3 r/min. The sheet, sampled in time, lies between.
       expect(least).toBeLessThanOrEqual(atStandstill + 1e-9)
       expect(atStandstill - least).toBeLessThan(0.2)
-      expect(Number(printed)).toBeGreaterThan(least - 0.0501)
-      expect(Number(printed)).toBeLessThan(atStandstill + 0.0501)
+      const half = printed.includes('.') ? 0.055 : 0.55
+      expect(Number(printed)).toBeGreaterThan(least - half)
+      expect(Number(printed)).toBeLessThan(atStandstill + half)
     })
   }
 

@@ -77,6 +77,11 @@ function figures(rule: RuleInput, input: CaseInput, result: CaseResult): (Measur
 
 function wordFor(rule: RuleInput, margin: number, limit: number, margins: CloseMargins): VerdictWord {
   if (margin < 0) return 'fails'
+  return margin < closeBand(rule, limit, margins) ? 'close' : 'meets'
+}
+
+/** Margin below which a limit that holds is close: per unit for voltages, a part of the limit for all else. */
+export function closeBand(rule: RuleInput, limit: number, margins: CloseMargins): number {
   const absolute = rule.quantity === 'remaining-voltage' || rule.quantity === 'highest-voltage'
-  return margin < (absolute ? margins.voltage : margins.ofLimit * Math.abs(limit)) ? 'close' : 'meets'
+  return absolute ? margins.voltage : margins.ofLimit * Math.abs(limit)
 }
