@@ -1,35 +1,18 @@
-import { type PDFDocument, PDFName, PDFNumber, type PDFRef } from '@cantoo/pdf-lib'
-import * as fontkit from 'fontkit'
+import { PDFName, PDFNumber, PDFRef } from '@cantoo/pdf-lib'
 import { inflateStream } from './inflate-stream'
 import { entry, type PdfView } from './pdf-view'
 
 /** A font that lies in the file for the blocks of later signatures: for each character its code and its width in thousandths of an em. */
 export type SealFont = ReadonlyMap<string, { readonly code: string; readonly width: number }>
 
-/** Latin with all European and Vietnamese letters, Greek, Cyrillic, dashes, quotes: what names and dates are written in. */
-const ranges = [
-  [0x20, 0x7e],
-  [0xa1, 0x24f],
-  [0x370, 0x3ff],
-  [0x400, 0x45f],
-  [0x1e80, 0x1ef9],
-  [0x2010, 0x2026],
-] as const
+/** Where the font is kept: in the form's default resources, under this name. */
+export const sealFontName = 'SignOff'
 
-/**
- * Embeds a subset of a TrueType font once, before any signature, so that signing later needs no font file and each signature adds only
- * a few hundred octets. Ligatures are left out: each character is looked up alone.
- */
-export async function embedSealFont(document: PDFDocument, trueType: Uint8Array): Promise<PDFRef> {
-  document.registerFontkit(fontkit)
-  const font = await document.embedFont(trueType, { subset: true, customName: 'SIGNOF+SourceSans3-Regular' })
-  const known = new Set(font.getCharacterSet())
-  // Characters can share a glyph, which then stands for the one named first: plain letters come first.
-  for (const [first, last] of ranges) {
-    for (let point = first; point <= last; point += 1)
-      if (known.has(point)) font.encodeText(String.fromCodePoint(point))
-  }
-  return font.ref
+/** The reference to the font of signature blocks; undefined if the file was not made ready for signing. */
+export function sealFontOf(view: PdfView): PDFRef | undefined {
+  const resources = view.dict(entry(view.dict(entry(view.catalog, 'AcroForm')), 'DR'))
+  const reference = view.dict(entry(resources, 'Font'))?.get(PDFName.of(sealFontName))
+  return reference instanceof PDFRef && view.dict(reference) ? reference : undefined
 }
 
 /** Reads the font back from its own character map and widths. Source: ISO 32000-1, sections 9.7.4.3 and 9.10.3. */
@@ -59,14 +42,4 @@ function readWidths(view: PdfView, value: ReturnType<typeof entry>): Map<number,
     })
   }
   return widths
-}
-
-/** Where the font is kept: in the form's default resources, under this name. */
-export const sealFontName = 'SignOff'
-
-/** The reference to the font of signature blocks; undefined if the file was not made ready for signing. */
-export function sealFontOf(view: PdfView): PDFRef | undefined {
-  const resources = view.dict(entry(view.dict(entry(view.catalog, 'AcroForm')), 'DR'))
-  const reference = view.dict(entry(resources, 'Font'))?.get(PDFName.of(sealFontName))
-  return reference && view.dict(reference) ? (reference as PDFRef) : undefined
 }

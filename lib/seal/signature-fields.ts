@@ -1,5 +1,6 @@
 import { PDFDocument, PDFHexString, PDFName } from '@cantoo/pdf-lib'
-import { embedSealFont, sealFontName } from './seal-font'
+import { embedSealFont } from './embed-seal-font'
+import { sealFontName } from './seal-font'
 
 /** Where one person signs: the field, the words of its block, the page (counted from 0) and the rectangle on it. */
 export interface SignaturePlace {

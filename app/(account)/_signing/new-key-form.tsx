@@ -9,6 +9,7 @@ import { Notice } from '@/lib/ui/notice'
 import { fromBase64, toBase64 } from './base64'
 import type { KeyFile } from './key-file'
 import { forgetKeyFile, keepKeyFile } from './key-store'
+import { KeyUserName } from './key-user-name'
 import { passphraseHint } from './passphrase-hint'
 import { plainWords } from './plain-words'
 import { makeSigningKey } from './signing-key'
@@ -54,6 +55,7 @@ export function NewKeyForm({ challenge, ownWords, register, onMade }: NewKeyForm
 
   return (
     <form onSubmit={submit} className="grid max-w-md gap-3">
+      <KeyUserName />
       <Labelled label="Passphrase" hint={passphrase ? hint.sentence : 'Four or more unrelated words.'}>
         {(control) => (
           <input

@@ -9,6 +9,7 @@ import { Notice } from '@/lib/ui/notice'
 import { fromBase64, toBase64 } from './base64'
 import type { KeyFile } from './key-file'
 import { KeyFileChooser } from './key-file-chooser'
+import { KeyUserName } from './key-user-name'
 import { plainWords } from './plain-words'
 import { openSigningKey, signAttributes } from './signing-key'
 import { notHere } from './signing-key-panel'
@@ -86,6 +87,7 @@ function PassphraseForm({ label, sign, cancel }: PassphraseFormProps) {
   }
   return (
     <form onSubmit={submit} className="grid max-w-sm gap-2">
+      <KeyUserName />
       <Labelled label="Passphrase of your signing key" error={problem || undefined}>
         {(control) => (
           <input
