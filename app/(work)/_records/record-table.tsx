@@ -19,6 +19,8 @@ interface RecordTableProps {
   style: NumberStyle
   editable: boolean
   chosen: string | undefined
+  /** A sentence for each record, by identity. */
+  inWords?: Readonly<Record<string, string>> | undefined
   onOpen: (id: string) => void
   onCell: (row: RecordRow, draft: GroupDraft) => Promise<string | null>
 }
@@ -33,7 +35,17 @@ const isNumeric = (field: Field | undefined): boolean =>
   field?.kind === 'quantity' || field?.kind === 'whole' || field?.kind === 'decimal'
 
 /** All records of a kind, one a row; the tag opens the record's sheet beside the table. */
-export function RecordTable({ description, rows, tags, style, editable, chosen, onOpen, onCell }: RecordTableProps) {
+export function RecordTable({
+  description,
+  rows,
+  tags,
+  style,
+  editable,
+  chosen,
+  inWords,
+  onOpen,
+  onCell,
+}: RecordTableProps) {
   const { fields, columns, many } = description
   const lines = useMemo<Line[]>(
     () =>
@@ -88,6 +100,7 @@ export function RecordTable({ description, rows, tags, style, editable, chosen, 
           numeric: lines.some((line) => isNumeric(fieldAt(fields, line.draft, path)?.field)),
           cell: (line: Line) => cell(line, path),
         })),
+        ...(inWords ? [{ id: 'in-words', label: 'In words', cell: ({ row }: Line) => inWords[row.id] ?? '' }] : []),
       ]}
     />
   )

@@ -26,6 +26,8 @@ interface RecordWorkspaceProps {
   editable: boolean
   /** Keeps the unsaved text of different people and plants apart. */
   scope: string
+  /** A sentence for each record, by identity. */
+  inWords?: Readonly<Record<string, string>> | undefined
   actions: RecordActions
 }
 
@@ -97,6 +99,7 @@ export function RecordWorkspace(props: RecordWorkspaceProps) {
               chosen={row?.id}
               onOpen={(id) => show(id === open ? null : id)}
               onCell={onCell}
+              inWords={props.inWords}
             />
           )}
           {description.sourced && rows.length > 0 ? <ProvenanceLegend /> : null}

@@ -1,0 +1,24 @@
+import { PlaceList } from '../../_frame/place-list'
+import { studyPlaces } from '../../_frame/places'
+import { studyTitleCells } from '../../_frame/study-title-cells'
+import { WorkFrame } from '../../_frame/work-frame'
+import { studyOf } from './study'
+
+export default async function StudyLayout({ params, children }: LayoutProps<'/studies/[studyId]'>) {
+  const { studyId } = await params
+  const study = await studyOf(studyId)
+  const { projectId, project, head } = study
+  return (
+    <WorkFrame
+      path={[
+        { label: 'Projects', href: '/projects' },
+        { label: project.name, href: `/projects#${projectId}` },
+        { label: head.title },
+      ]}
+      places={<PlaceList label="Places of the study" places={studyPlaces(projectId, studyId)} />}
+      cells={studyTitleCells(study)}
+    >
+      {children}
+    </WorkFrame>
+  )
+}

@@ -1,0 +1,24 @@
+import 'server-only'
+import { notFound } from 'next/navigation'
+import type * as z from 'zod'
+import { DomainError } from '@/lib/errors'
+import { type OwnQuery, type Query, read } from '@/lib/server/read'
+import { requireActor } from '@/lib/server/session'
+
+/**
+ * What a page shows: the answer for the signed-in person. Whatever is not there, or not theirs to see, is one and the same page,
+ * so that an address tells nobody what exists.
+ */
+export const ask = async <Shape extends z.ZodType, Subject, Answer>(
+  asked: Query<Shape, Subject, Answer> | OwnQuery<Shape, Answer>,
+  input: z.input<Shape>,
+): Promise<Answer> => {
+  const actor = await requireActor()
+  try {
+    return await read(asked, actor, input)
+  } catch (error) {
+    const hidden = error instanceof DomainError && ['not-found', 'forbidden', 'invalid'].includes(error.code)
+    if (hidden) notFound()
+    throw error
+  }
+}

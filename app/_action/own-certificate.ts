@@ -1,0 +1,24 @@
+import 'server-only'
+import { X509Certificate } from 'node:crypto'
+import { myCertificate } from '@/lib/server/people/queries'
+import { listedCertificates } from '@/lib/server/signoff/queries'
+import { ask } from './ask'
+
+/** The signing certificate of the signed-in person at an organisation. */
+export interface CertificateInForce {
+  fingerprint: string
+  notAfter: string
+  /** Public key, DER, base64: the browser finds the key that belongs to it. */
+  spki: string
+}
+
+/** Null when the person has none there, or it has run out or was revoked. */
+export const ownCertificate = async (organisationId: string): Promise<CertificateInForce | null> => {
+  const own = await ask(myCertificate, { organisationId })
+  if (!own) return null
+  const listed = (await ask(listedCertificates, { organisationId })).find((one) => one.fingerprint === own.fingerprint)
+  if (!listed) return null
+  const { publicKey } = new X509Certificate(Buffer.from(listed.certificate, 'base64'))
+  const { fingerprint, notAfter } = own
+  return { fingerprint, notAfter, spki: publicKey.export({ type: 'spki', format: 'der' }).toString('base64') }
+}
