@@ -62,6 +62,7 @@ export interface HandCheckResult {
 
 export interface ReportInput {
   document: StudyDocument
+  /** As `runDocument` computes it: its overall verdict is that of the design cases. */
   result: StudyResult
   revision: ReportRevision
   /** A draft carries a watermark and no signature fields. */

@@ -49,3 +49,7 @@ export const stack = (
     },
     ...children,
   )
+
+/** Elements side by side. */
+export const row = (children: readonly ReactElement[], gap: number): ReactElement =>
+  createElement(View, { style: { flexDirection: 'row', gap } }, ...children)

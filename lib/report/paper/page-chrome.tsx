@@ -49,8 +49,8 @@ export const pageChrome =
     pageNumber,
     totalPages,
   }: {
-    children: ReactNode
-    pageNumber: number
+    children?: ReactNode
+    pageNumber?: number
     totalPages?: number
   }): ReactElement => {
     const width = contentWidth(format)
@@ -83,7 +83,7 @@ export const pageChrome =
         <View style={{ flex: 1 }}>{children}</View>
         {canvas(format.height - format.bottom + 14, format.left, width, 20, (pdf) => {
           pdf.lineWidth(0.5).strokeColor(colour('rule')).moveTo(0, 1).lineTo(width, 1).stroke()
-          between(pdf, words.footLeft, words.page(pageNumber, totalPages ?? 999), 11, width)
+          between(pdf, words.footLeft, words.page(pageNumber ?? 0, totalPages ?? 999), 11, width)
         })}
       </View>
     )

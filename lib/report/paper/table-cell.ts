@@ -3,7 +3,7 @@ import type { VerdictWord } from '@/lib/engine/criteria/rule'
 import { colour } from '../theme'
 import type { Weight } from '../type/faces'
 import { type Pdf, paintLine } from '../type/paint-text'
-import { type Line, plain, rich, wrapRuns } from '../type/rich-text'
+import { type Line, plain, type Run, rich, wrapRuns } from '../type/rich-text'
 import { markWidth, paintVerdictMark, verdictInk } from './marks'
 
 export interface Cell {
@@ -14,6 +14,8 @@ export interface Cell {
   ink?: Ink
   /** Puts the verdict's mark before the text. */
   verdict?: VerdictWord
+  /** Raised behind the text, for example the number of a source. */
+  raised?: string
   /** Destination within the report. */
   link?: string
 }
@@ -22,11 +24,14 @@ export interface PreparedCell extends Cell {
   lines: readonly Line[]
 }
 
+const raisedRun = (text: string): Run => ({ text, weight: 'regular', scale: 0.7, rise: 0.36 })
+
 /** A cell broken into lines for its column. */
 export const preparedCell = (cell: Cell | string, width: number, size: number): PreparedCell => {
   const content: Cell = typeof cell === 'string' ? { text: cell } : cell
   const mark = content.verdict ? markWidth * size : 0
-  const runs = content.markup ? rich(content.text, content.weight) : plain(content.text, content.weight)
+  const text = content.markup ? rich(content.text, content.weight) : plain(content.text, content.weight)
+  const runs = content.raised ? [...text, raisedRun(content.raised)] : text
   return { ...content, lines: wrapRuns(runs, Math.max(width - mark, 4 * size), size) }
 }
 

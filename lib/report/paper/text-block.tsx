@@ -81,3 +81,7 @@ export const list = (paper: Paper, sentences: readonly string[], options: TextOp
     })
   })
 }
+
+/** A line in strong type over a table or under a figure; typed tags in it are never read as markup. */
+export const caption = (paper: Paper, text: string, options: TextOptions): readonly ReactElement[] =>
+  ofRuns(paper, plain(text, 'semibold'), { size: 8.3, leading: 11, below: 3, ...options })

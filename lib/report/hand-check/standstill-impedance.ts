@@ -1,0 +1,14 @@
+import type { InductionCircuit } from '@/lib/engine/case-input'
+import type { Complex } from '@/lib/units/si'
+import { add, inverse } from './complex'
+
+/** Impedance of a motor with locked rotor, slip 1: stator, then magnetising branch, core and cages side by side; in the circuit's ohm. */
+export const standstillImpedance = ({ stator, magnetising, core, cages }: InductionCircuit): Complex => {
+  const branches: Complex[] = [
+    { re: 0, im: magnetising },
+    ...(core === null ? [] : [{ re: core, im: 0 }]),
+    ...cages.map(({ resistance, reactance }) => ({ re: resistance, im: reactance })),
+  ]
+  const admittance = branches.map(inverse).reduce(add)
+  return add(stator, inverse(admittance))
+}

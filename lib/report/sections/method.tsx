@@ -1,0 +1,26 @@
+import { formulaBlock } from '../formula/formula-block'
+import { list, paragraph } from '../paper/text-block'
+import { chapter, subsection } from '../report-context'
+import type { Section } from './section'
+
+/** The method in words and formulas. */
+export const method: Section = (context) => {
+  const { paper, input, words, width } = context
+  const { method: say } = words
+  const { settings } = input.document
+  return [
+    chapter(context, 'method', say.title),
+    ...paragraph(paper, say.intro, { width }),
+    ...say.parts.flatMap(({ id, title, content }) => [
+      subsection(context, id, title),
+      ...content.flatMap((part) =>
+        typeof part === 'string' ? paragraph(paper, part, { width }) : [formulaBlock(paper, part.tex, width)],
+      ),
+    ]),
+    subsection(context, say.control.id, say.control.title),
+    ...paragraph(paper, say.control.criterion(settings.speedCriterion.text, settings.timeLimit.text), { width }),
+    ...paragraph(paper, say.control.accuracy, { width }),
+    subsection(context, say.excluded.id, say.excluded.title),
+    ...list(paper, say.excluded.items, { width }),
+  ]
+}

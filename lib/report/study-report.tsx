@@ -1,0 +1,99 @@
+import { Document, type DocumentProps, Page } from '@react-pdf/renderer'
+import type { ReactElement } from 'react'
+import { stack } from './paper/block'
+import { heading } from './paper/heading'
+import { type ChromeWords, pageChrome } from './paper/page-chrome'
+import type { Paper } from './paper/paper'
+import { Numbering, type ReportContext } from './report-context'
+import type { ReportInput } from './report-input'
+import { assumptions } from './sections/assumptions'
+import { calculationRecord } from './sections/calculation-record'
+import { cases } from './sections/cases'
+import { cautions, glossary } from './sections/cautions'
+import { conclusions } from './sections/conclusions'
+import { contents } from './sections/contents'
+import { cover } from './sections/cover'
+import { criteria } from './sections/criteria'
+import { decisions } from './sections/decisions'
+import { handCheck } from './sections/hand-check'
+import { inputData } from './sections/input-data'
+import { matrix } from './sections/matrix'
+import { method } from './sections/method'
+import { plots } from './sections/plots'
+import { fullTables, results } from './sections/results/results'
+import { scope } from './sections/scope'
+import type { Section } from './sections/section'
+import { diagramPage, system } from './sections/system'
+import { verdictPage } from './sections/verdict-page'
+import { contentWidth, type PageFormat, portrait } from './theme'
+import { SourceList } from './values/source-list'
+import type { Wording } from './wording/en'
+
+/** Sections behind the diagram; each starts where the one before ends, those named in `fresh` on a page of their own. */
+const middle: readonly Section[] = [
+  inputData,
+  assumptions,
+  method,
+  cases,
+  results,
+  matrix,
+  plots,
+  conclusions,
+  cautions,
+]
+const appendices: readonly Section[] = [handCheck, fullTables, calculationRecord, decisions, glossary]
+const fresh: ReadonlySet<Section> = new Set([inputData, method, cases, results, matrix, plots, handCheck, fullTables])
+
+const chromeWords = ({ document, revision, draft }: ReportInput, { frame }: Wording): ChromeWords => ({
+  headLeft: `${document.head.documentNumber}  ${document.head.title}`,
+  headRight: `${frame.revision} ${revision.number}, ${frame.states[revision.state]}`,
+  footLeft: `${document.head.organisation}${revision.purpose === '' ? '' : ` · ${revision.purpose}`}`,
+  page: frame.page,
+  watermark: draft ? frame.watermark : null,
+})
+
+/**
+ * The whole report as elements. Contents stand in front but are written last, because the sections number the headings;
+ * page numbers are looked up when the laid-out pages are painted.
+ */
+export const studyReport = (input: ReportInput, words: Wording, paper: Paper): ReactElement<DocumentProps> => {
+  const context: ReportContext = {
+    paper,
+    input,
+    words,
+    width: contentWidth(portrait),
+    whole: input.result.overall,
+    sources: new SourceList(words.records.input.noSourceMark),
+    numbers: new Numbering(),
+  }
+  const front = cover(context)
+  const verdict = verdictPage(context)
+  const written = (sections: readonly Section[]) =>
+    sections.map((section, i) => stack(section(context), { breakBefore: i > 0 && fresh.has(section) }))
+  const opening = written([scope, criteria, system])
+  const diagram = diagramPage(context)
+  const rest = written([...middle, ...appendices])
+  const listing = contents(context, paper.headings)
+  const contentsHead = heading(paper, context.width, {
+    id: 'contents',
+    level: 1,
+    number: '',
+    title: words.frame.contents,
+  })
+  const chrome = chromeWords(input, words)
+  const page = (format: PageFormat, children: readonly ReactElement[]) => (
+    <Page size={[format.width, format.height]} layout={pageChrome(paper, format, chrome)}>
+      {stack(children)}
+    </Page>
+  )
+  return (
+    <Document>
+      {page(portrait, front)}
+      {page(portrait, verdict)}
+      {page(portrait, [contentsHead, ...listing])}
+      {page(portrait, opening)}
+      {page(diagram.format, diagram.content)}
+      {page(portrait, rest)}
+    </Document>
+  )
+}

@@ -1,0 +1,105 @@
+import { formatNumber } from '@/lib/quantity/format-number'
+import type { DrivenLoadRecord, LoadCurveRecord, MotorRecord } from '@/lib/study/document/machine-records'
+import type { StudyDocument } from '@/lib/study/document/study-document'
+import { busTag, motorTag } from '@/lib/study/words/tags'
+import type { Wording } from '../wording/en'
+import { type FieldValue, ofEntered, ofWords, type RecordField } from './record-field'
+
+type Words = Wording['fields']
+
+const count = (value: number | null): FieldValue | null => (value === null ? null : { text: String(value) })
+
+export const motorFields = (words: Words, document: StudyDocument): readonly RecordField<MotorRecord>[] => [
+  { label: words.bus, own: true, of: (one) => ofWords(busTag(document, one.bus)) },
+  { label: words.maker, of: (one) => ofWords(one.maker) },
+  { label: words.ratedPower, of: (one) => ofEntered(one.ratedPower) },
+  { label: words.ratedVoltage, of: (one) => ofEntered(one.ratedVoltage) },
+  { label: words.poles, of: (one) => count(one.poles) },
+  { label: words.ratedSpeed, of: (one) => ofEntered(one.ratedSpeed) },
+  { label: words.efficiency, of: (one) => ofEntered(one.efficiency) },
+  { label: words.powerFactor, of: (one) => ofEntered(one.powerFactor) },
+  { label: words.ratedCurrent, of: (one) => ofEntered(one.ratedCurrent) },
+  { label: words.lockedRotorCurrent, of: (one) => ofEntered(one.lockedRotorCurrent) },
+  { label: words.lockedRotorPowerFactor, of: (one) => ofEntered(one.lockedRotorPowerFactor) },
+  { label: words.lockedRotorTorque, of: (one) => ofEntered(one.lockedRotorTorque) },
+  { label: words.pullUpTorque, of: (one) => ofEntered(one.pullUpTorque) },
+  { label: words.breakdownTorque, of: (one) => ofEntered(one.breakdownTorque) },
+  { label: words.motorInertia, of: (one) => ofEntered(one.inertia) },
+  { label: words.permissibleCold, of: (one) => ofEntered(one.permissibleCold) },
+  { label: words.permissibleHot, of: (one) => ofEntered(one.permissibleHot) },
+  { label: words.startsCold, of: (one) => count(one.startsCold) },
+  { label: words.startsHot, of: (one) => count(one.startsHot) },
+  { label: words.startsHourly, of: (one) => count(one.startsPerHour) },
+  { label: words.note, of: (one) => ofWords(one.note) },
+]
+
+const number = (value: number) =>
+  formatNumber(value, { digits: 4 })
+    .replace(/(\.\d*?)0+$/, '$1')
+    .replace(/\.$/, '')
+const pair = ({ r, x }: { r: number; x: number }) => `${number(r)}, ${number(x)}`
+
+/** The typed circuit has one source for all its numbers. */
+const ofCircuit =
+  (text: (circuit: Exclude<MotorRecord['circuit'], { kind: 'estimated' }>) => string | null) =>
+  ({ circuit }: MotorRecord): FieldValue | null => {
+    if (circuit.kind === 'estimated') return null
+    const words = text(circuit)
+    return words === null ? null : { text: words, provenance: circuit.provenance }
+  }
+
+export const circuitFields = (words: Words): readonly RecordField<MotorRecord>[] => [
+  { label: words.circuitKind, of: ({ circuit }) => ofWords(words.values[circuit.kind]) },
+  {
+    label: words.circuitScale,
+    of: ({ circuit, ratedVoltage }) => {
+      if (circuit.kind === 'estimated') return null
+      const { scale } = circuit
+      return ofWords(scale.unit === 'ohm' ? words.values.ohm : words.values.perUnit(scale.base.text, ratedVoltage.text))
+    },
+  },
+  { label: words.stator, of: ofCircuit(({ stator }) => pair(stator)) },
+  { label: words.magnetising, of: ofCircuit(({ magnetising }) => number(magnetising)) },
+  { label: words.core, of: ofCircuit(({ core }) => (core === null ? null : number(core))) },
+  { label: words.cage, of: ofCircuit((circuit) => (circuit.kind === 'single-cage' ? pair(circuit.cage) : null)) },
+  { label: words.innerCage, of: ofCircuit((circuit) => (circuit.kind === 'double-cage' ? pair(circuit.inner) : null)) },
+  { label: words.outerCage, of: ofCircuit((circuit) => (circuit.kind === 'double-cage' ? pair(circuit.outer) : null)) },
+]
+
+/** A load curve in words, as typed. */
+const curveText = (curve: LoadCurveRecord, words: Words): FieldValue => {
+  if (curve.kind === 'points') {
+    const points = curve.points.map(({ speed, torque }) => words.values.point(speed.text, torque.text)).join('; ')
+    return { text: words.values.points(points), provenance: curve.points[0]?.torque.provenance ?? null }
+  }
+  const { constant, atRated, ratedSpeed, exponent, breakaway } = curve
+  const rise = words.values.powerCurve(constant.text, atRated.text, ratedSpeed.text, exponent.text)
+  const start = breakaway ? words.values.breakaway(breakaway.torque.text, breakaway.until.text) : ''
+  return { text: rise + start, provenance: atRated.provenance }
+}
+
+/** Driven loads differ in their parts and curves, so that each has a list of its own. */
+export const drivenLoadFields = (
+  record: DrivenLoadRecord,
+  words: Words,
+  document: StudyDocument,
+): readonly RecordField<DrivenLoadRecord>[] => [
+  { label: words.motor, own: true, of: (one) => ofWords(motorTag(document, one.motor)) },
+  { label: words.machine, of: (one) => ofWords(words.values.machines[one.machine]) },
+  ...record.inertias.map(
+    ({ part, speedRatio }, i): RecordField<DrivenLoadRecord> => ({
+      label: words.part(part, speedRatio.si === 1 ? null : speedRatio.text),
+      of: (one) => ofEntered(one.inertias[i]?.inertia ?? null),
+    }),
+  ),
+  ...record.curves.map(
+    ({ name }, i): RecordField<DrivenLoadRecord> => ({
+      label: words.curve(name),
+      of: (one) => {
+        const curve = one.curves[i]
+        return curve ? curveText(curve, words) : null
+      },
+    }),
+  ),
+  { label: words.note, of: (one) => ofWords(one.note) },
+]

@@ -1,0 +1,116 @@
+/** A formula with the words that say it to a reader who cannot see it. */
+export interface FormulaWords {
+  tex: string
+  spoken: string
+}
+
+const formula = (tex: string, spoken: string): FormulaWords => ({ tex, spoken })
+
+/** The method in words and formulas, in the order in which a case is computed. Strings are paragraphs. */
+export const method = {
+  title: 'Method',
+  intro:
+    'Each case is computed quasi-statically: the network is solved in balanced RMS values at every instant of the run-up, and the speeds of all machines are integrated through these solutions. Nothing is taken from rated voltage that depends on the actual one.',
+  parts: [
+    {
+      id: 'method-network',
+      title: 'Supply and network',
+      content: [
+        'The supply is a Thevenin equivalent. Its impedance follows from the stated level, with the voltage factor c that the level already contains and the voltage that it was stated at:',
+        formula(
+          String.raw`\left|\underline{Z}_\mathrm{s}\right| = \frac{c\,U^2}{S_\mathrm{k}},\qquad X_\mathrm{s} = R_\mathrm{s}\cdot(X/R)`,
+          'The magnitude of the source impedance is c times U squared over the short-circuit level; its parts follow from X over R.',
+        ),
+        'The voltage of the source is solved so that the supply bus has the stated voltage before the start, with the running load on and the starting devices off, unless the open-circuit voltage is given. It is then held, and tap changers and line regulators are taken as frozen during the run.',
+        'Transformers have their impedance on the to side, unchanged by the tap; a positive tap on the from side lowers the to side. Lines and cables are a series impedance with half of their susceptance at either end. Every rating converts with its own rated voltage.',
+        'A static load follows its voltage u, in parts of its rated voltage, by its shares of constant impedance z, current i and power p; below the floor it turns to constant impedance:',
+        formula(
+          String.raw`\underline{S}(u) = \underline{S}_0\left(z\,u^2 + i\,u + p\right),\qquad \underline{S}(u) = \underline{S}(u_\mathrm{f})\left(\frac{u}{u_\mathrm{f}}\right)^2\ \text{for}\ u<u_\mathrm{f}`,
+          'S of u is S zero times z u squared plus i u plus p; below the floor it falls with the square of the voltage.',
+        ),
+        'The bus voltages are the solution of the current balance by Newton’s method with both derivatives of every current. Where there is none, the outcome is a voltage collapse with its instant and bus, never a number:',
+        formula(
+          String.raw`\underline{\mathbf{Y}}\,\underline{\mathbf{V}} + \left(\frac{\underline{\mathbf{S}}(\mathbf{V})}{\underline{\mathbf{V}}}\right)^{*} = \underline{\mathbf{J}}`,
+          'The admittance matrix times the voltages plus the conjugate of load power over voltage equals the source currents.',
+        ),
+      ],
+    },
+    {
+      id: 'method-motor',
+      title: 'Motors',
+      content: [
+        'A motor is its star-equivalent circuit with one or two cages at slip s, stator impedance Z_{s}, magnetising reactance X_{m} and core loss R_{c}:',
+        formula(
+          String.raw`\underline{Y}_\mathrm{r} = \sum_{k}\frac{s}{R_k + \mathrm{j}sX_k},\qquad \underline{Y}_\mathrm{e} = \underline{Y}_\mathrm{r} + \frac{1}{\mathrm{j}X_\mathrm{m}} + \frac{1}{R_\mathrm{c}},\qquad \underline{y} = \frac{\underline{Y}_\mathrm{e}}{1+\underline{Z}_\mathrm{s}\underline{Y}_\mathrm{e}}`,
+          'Rotor admittance as the sum over the cages, then with magnetising branch and core, then behind the stator impedance.',
+        ),
+        formula(
+          String.raw`T = \frac{U^2}{\omega_\mathrm{s}}\left|\frac{1}{1+\underline{Z}_\mathrm{s}\underline{Y}_\mathrm{e}}\right|^2 \operatorname{Re}\underline{Y}_\mathrm{r}`,
+          'Torque is the airgap power over synchronous speed.',
+        ),
+        'The torque is that of the airgap power; friction, windage and stray losses are not taken off it, and the losses that are not in a winding lie in R_{c}. Torque is proportional to the square of the voltage and current to the voltage. Saturation of the leakage paths makes the square optimistic at low voltage; where a motor starts below 0.85 of its rated voltage this is noted with the case.',
+        'Motors that run before the start are the same circuits, with their own speed, not constant loads: they slow down in the dip, draw more and deepen it. “Per cent speed” is of rated speed unless synchronous speed is named.',
+      ],
+    },
+    {
+      id: 'method-starters',
+      title: 'Starting devices',
+      content: [
+        'An autotransformer with tap k and own impedance z on the line side shows the line the admittance below; the line current is k times the motor current, and both are reported. Star connection shows a third of the admittance and gives a third of the torque:',
+        formula(
+          String.raw`\underline{y}_\mathrm{line} = \frac{1}{\underline{z} + \dfrac{1}{k^2\,\underline{y}}},\qquad I_\mathrm{line} = k\,I_\mathrm{motor},\qquad \underline{y}_\mathrm{star} = \frac{\underline{y}}{3}`,
+          'Line admittance of an autotransformer, its line current, and the admittance in star.',
+        ),
+        'A change-over follows its speed or time. A gap is without current and torque; the transient on reclosing is not in this model. The state just after each change-over is a result of its own, and a change-over at a slip above breakdown is called too early.',
+      ],
+    },
+    {
+      id: 'method-run-up',
+      title: 'Run-up',
+      content: [
+        'Speed follows from the torque that is left, with all inertias referred to the motor shaft. The load opposes motion only; a motor that cannot break away stays at standstill and draws its current:',
+        formula(
+          String.raw`J\,\frac{\mathrm{d}\omega}{\mathrm{d}t} = T(U,\omega) - T_\mathrm{L}(\omega),\qquad J = J_\mathrm{M} + \sum_i J_i\left(\frac{n_i}{n}\right)^2`,
+          'J times the derivative of speed is motor torque less load torque; J is the motor’s plus all others by the square of their speed ratio.',
+        ),
+        'A load curve is T_{0} + (T_{r} − T_{0})(n/n_{r})^{e} with a straight line from breakaway, or straight lines between typed points; no curve is extrapolated.',
+      ],
+    },
+    {
+      id: 'method-results',
+      title: 'What is taken from a run',
+      content: [
+        'Each place has its voltage before, at the first instant, at the deepest point of the whole run, settled after the start, and settled after the process loads. From these follow three figures that are never given without their reference:',
+        formula(
+          String.raw`\frac{U_\mathrm{before}-U}{U_\mathrm{before}},\qquad d = \frac{U_\mathrm{before}-U}{U_\mathrm{n}},\qquad \frac{U}{U_\mathrm{n}}`,
+          'Change of the voltage before, change of nominal, remaining of nominal.',
+        ),
+        'Heat used up to the speed criterion is the larger of two figures, both against what the maker declares at rated voltage; neither is scaled with the actual voltage again:',
+        formula(
+          String.raw`\frac{\int I^2\,\mathrm{d}t}{I_\mathrm{LR}^2\,t_\mathrm{perm}},\qquad \frac{\int s\,P_\mathrm{ag}\,\mathrm{d}t}{T_\mathrm{LR}\,\omega_\mathrm{s}\,t_\mathrm{perm}}`,
+          'The integral of current squared over locked-rotor current squared times permissible time; the slip energy over locked-rotor torque, synchronous speed and permissible time.',
+        ),
+        'The least accelerating torque is the least of motor torque less load torque from standstill to 95 % of rated speed, at the voltage that the motor really had.',
+      ],
+    },
+  ] as readonly { id: string; title: string; content: readonly (string | FormulaWords)[] }[],
+  control: {
+    id: 'method-control',
+    title: 'Error control and end of a run',
+    criterion: (criterion: string, limit: string) =>
+      `A motor has started when it reaches ${criterion} of its rated speed and its starting device is in the running position. The settled speed is approached without end, so a start time is never given without this criterion. A start is given up ${limit} after switching-on.`,
+    accuracy:
+      'The step of the integration is controlled by its local error, with a relative tolerance of 10^{−8} on speeds; switchings are located and the integration starts anew at each. The lowest voltage is searched over the whole run, not read at standstill. Steps, mismatches and error ratios of each case are in the calculation record.',
+  },
+  excluded: {
+    id: 'method-excluded',
+    title: 'What the model does not cover',
+    items: [
+      'Direct-current components and the first cycles of the current: peaks of current and torque are higher than the RMS figures.',
+      'Transients on switching, on transfer and on reclosing; energising of transformers.',
+      'Unbalance, harmonics, flicker severity, frequency excursions.',
+      'Torsional vibration, water hammer and everything else on the process side.',
+      'Warming of windings during the run: resistances are those of the records.',
+    ],
+  },
+}
