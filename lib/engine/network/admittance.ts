@@ -1,7 +1,7 @@
 import type { Complex } from '../../units/si'
 import type { CapacitorInput, LineInput, TransformerInput } from '../case-input'
-import { isZero, reciprocal, scale } from '../numeric/complex'
-import type { Topology } from './topology'
+import { reciprocal, scale } from '../numeric/complex'
+import { isJoint, type Topology } from './topology'
 
 /**
  * Nodal admittance matrix in siemens per phase (star), line-to-line voltages on line-to-line current √3·I.
@@ -37,13 +37,10 @@ export function branchMatrix(
 ): AdmittanceMatrix {
   const matrix = emptyMatrix(topology.count)
   for (const line of lines) {
-    if (isZero(line.impedance)) continue
-    addBranch(
-      matrix,
-      topology.nodeOf.get(line.fromBusId)!,
-      topology.nodeOf.get(line.toBusId)!,
-      reciprocal(line.impedance),
-    )
+    const from = topology.nodeOf.get(line.fromBusId)!
+    const to = topology.nodeOf.get(line.toBusId)!
+    if (from === to && isJoint(line, topology.busOfNode[from]!.nominal)) continue
+    addBranch(matrix, from, to, reciprocal(line.impedance))
   }
   for (const transformer of transformers) {
     const y = reciprocal(transformer.impedance)

@@ -1,5 +1,5 @@
 import type { BusInput, LineInput, TransformerInput } from '../case-input'
-import { isZero } from '../numeric/complex'
+import { magnitude } from '../numeric/complex'
 import { refuse, type Setup } from './refusal'
 
 /** Electrical nodes: buses joined by lines without impedance are one node. */
@@ -24,7 +24,8 @@ export function findTopology(
   transformers: readonly TransformerInput[],
   supplyBusId: string,
 ): Setup<Topology> {
-  const joints = lines.filter((line) => isZero(line.impedance))
+  const nominalOf = new Map(buses.map((bus) => [bus.id, bus.nominal]))
+  const joints = lines.filter((line) => isJoint(line, nominalOf.get(line.fromBusId)!))
   const joined = new Map<string, string>(buses.map((bus) => [bus.id, bus.id]))
   const rootOf = (id: string): string => {
     const parent = joined.get(id)!
@@ -56,6 +57,13 @@ export function findTopology(
   if (island.length > 0) return refuse('island', island, 'No line or transformer leads from these buses to the supply.')
   return { ok: true, value: { count: busOfNode.length, nodeOfBus, nodeOf, busOfNode } }
 }
+
+/**
+ * Whether a line joins its buses: no impedance, or so little that 1 MVA drops less than 1e-9 of the voltage along it
+ * and the rest of the network would drown in the round-off of its admittance.
+ */
+export const isJoint = (line: LineInput, nominal: number): boolean =>
+  magnitude(line.impedance) < (1e-9 * nominal * nominal) / 1e6
 
 /** Buses on the way between two ends of a tree of lines, both ends included. */
 function pathBetween(from: string, to: string, tree: readonly LineInput[]): string[] {

@@ -36,7 +36,7 @@ export interface RunRecord {
 /** Longest step, s. */
 const longest = 1
 /** Torque left, in parts of rated, below which a shaft counts as settled after its start, as worth a look for a hang, as still. */
-const settledTorque = 1e-4
+const settledTorque = 1e-5
 const hangingTorque = 4e-3
 const stillTorque = 1e-9
 
@@ -118,13 +118,9 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   function giveUp(t: number): void {
-    for (const start of starts) {
-      if (start.outcome !== null || t < start.at + timeLimit - sameInstant) continue
-      const neverTurned = system.resting[start.motor] === 1 && !start.turned
-      start.outcome = neverTurned
-        ? hangOutcome(system, start, state)
-        : { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
-    }
+    const late = starts.filter((start) => start.outcome === null && t >= start.at + timeLimit - sameInstant)
+    if (late.length > 0) judgeHanging(late)
+    for (const start of late) start.outcome ??= { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
   }
 
   /** Acts on crossings at the present instant: the starts that changed over, and whether the motion begins anew. */
@@ -199,11 +195,15 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     const waits = open.some((start) => start.position !== 'running' && changeOverOf(start.starter)?.kind === 'time')
     if (waits || torque > hangingTorque || torque > lastHangTorque / 2) return false
     lastHangTorque = torque
+    judgeHanging(open)
+    return open.every((start) => start.outcome !== null) && torque < settledTorque
+  }
+
+  /** Resolves starts that have come to where they stay short of their goal. */
+  function judgeHanging(open: readonly StartCourse[]): void {
     const speeds = findHang(system, open, state)
-    if (speeds === null) return false
+    if (speeds === null) return
     for (const start of open) start.outcome = hangOutcome(system, start, speeds)
-    state.set(speeds)
-    return true
   }
 
   /** Passes over time in which nothing moves, up to the next instant; false where something does move. */
