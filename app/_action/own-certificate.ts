@@ -2,7 +2,7 @@ import 'server-only'
 import { X509Certificate } from 'node:crypto'
 import { myCertificate } from '@/lib/server/people/queries'
 import { listedCertificates } from '@/lib/server/signoff/queries'
-import { ask } from './ask'
+import { ask, seek } from './ask'
 
 /** The signing certificate of the signed-in person at an organisation. */
 export interface CertificateInForce {
@@ -14,7 +14,7 @@ export interface CertificateInForce {
 
 /** Null when the person has none there, or it has run out or was revoked. */
 export const ownCertificate = async (organisationId: string): Promise<CertificateInForce | null> => {
-  const own = await ask(myCertificate, { organisationId })
+  const own = await seek(myCertificate, { organisationId })
   if (!own) return null
   const listed = (await ask(listedCertificates, { organisationId })).find((one) => one.fingerprint === own.fingerprint)
   if (!listed) return null

@@ -1,0 +1,11 @@
+import Link from 'next/link'
+import type { ReactNode } from 'react'
+
+/** Opens the case below on the same page. */
+export function CaseLink({ caseId, children, title }: { caseId: string; children: ReactNode; title?: string }) {
+  return (
+    <Link href={`?case=${caseId}#case`} className="link" title={title}>
+      {children}
+    </Link>
+  )
+}

@@ -1,0 +1,95 @@
+import type { CaseFigure } from '@/lib/drawing/case-figure'
+import { currentPlot } from '@/lib/drawing/current-plot'
+import { speedPlot } from '@/lib/drawing/speed-plot'
+import { torqueSpeedPlot } from '@/lib/drawing/torque-speed-plot'
+import { voltagePlot } from '@/lib/drawing/voltage-plot'
+import { busTag, motorTag } from '@/lib/study/words/tags'
+import { radianPerSecond } from '@/lib/units/si'
+import { toRpm } from '@/lib/units/speed'
+import { Figure } from './figure'
+import { sampledTable, type TableCurve } from './sampled-table'
+
+const size = { width: 170, height: 80 }
+
+const timeAxis = ({ result }: CaseFigure): TableCurve => ({
+  head: 'Time from the first switching-on, s',
+  values: result.series.time,
+  decimals: 3,
+})
+
+const rpm = (values: readonly number[] = []): number[] => values.map((value) => toRpm(radianPerSecond(value)))
+
+/** Buses that limits are set for, and the terminals of what starts: the places that a reader looks at first. */
+export const placesToDraw = ({ document, result, verdicts }: CaseFigure): readonly string[] => {
+  const limited = document.limits.flatMap(({ place }) => (place.kind === 'bus' ? [place.bus] : []))
+  const terminals = result.motors
+    .filter(({ start }) => start)
+    .map(({ motorId }) => document.plant.motors.find(({ id }) => id === motorId)?.bus ?? '')
+  const judged = verdicts.flatMap(({ caseId, busId }) => (caseId === result.caseId && busId ? [busId] : []))
+  const present = new Set(result.places.map(({ busId }) => busId))
+  return [...new Set([...limited, ...terminals, ...judged])].filter((id) => present.has(id))
+}
+
+export function VoltageFigure({ figure, busId }: { figure: CaseFigure; busId: string }) {
+  const nominal = figure.document.plant.buses.find(({ id }) => id === busId)?.nominal.si ?? Number.NaN
+  const values = (figure.result.series.busVoltage[busId] ?? []).map((value) => (100 * value) / nominal)
+  const curve = { head: `${busTag(figure.document, busId)}, % of nominal`, values, decimals: 2 }
+  return (
+    <Figure scene={voltagePlot(figure, { ...size, busIds: [busId] })} table={sampledTable(timeAxis(figure), [curve])} />
+  )
+}
+
+const startedIds = ({ result }: CaseFigure): readonly string[] =>
+  result.motors.filter(({ start }) => start).map(({ motorId }) => motorId)
+
+export function SpeedFigure({ figure }: { figure: CaseFigure }) {
+  const curves = startedIds(figure).map((id) => ({
+    head: `${motorTag(figure.document, id)}, r/min`,
+    values: rpm(figure.result.series.motors[id]?.speed),
+    decimals: 1,
+  }))
+  return <Figure scene={speedPlot(figure, size)} table={sampledTable(timeAxis(figure), curves)} />
+}
+
+export function CurrentFigure({ figure }: { figure: CaseFigure }) {
+  const curves = startedIds(figure).flatMap((id) => {
+    const series = figure.result.series.motors[id]
+    const tag = motorTag(figure.document, id)
+    return [
+      { head: `${tag} line current, A`, values: series?.lineCurrent ?? [], decimals: 1 },
+      { head: `${tag} motor current, A`, values: series?.motorCurrent ?? [], decimals: 1 },
+    ]
+  })
+  return <Figure scene={currentPlot(figure, size)} table={sampledTable(timeAxis(figure), curves)} />
+}
+
+export function TorqueFigure({ figure, motorId }: { figure: CaseFigure; motorId: string }) {
+  const series = figure.result.series.motors[motorId]
+  const axis = { head: 'Speed, r/min', values: rpm(series?.speed), decimals: 1 }
+  const kilo = (values: readonly number[] = []) => values.map((value) => value / 1000)
+  const curves = [
+    { head: 'Motor torque at its actual voltage, kN·m', values: kilo(series?.torque), decimals: 3 },
+    { head: 'Load torque, kN·m', values: kilo(series?.loadTorque), decimals: 3 },
+  ]
+  return <Figure scene={torqueSpeedPlot(figure, { ...size, motorId })} table={sampledTable(axis, curves)} />
+}
+
+/** All figures of a case. */
+export function CasePlots({ figure }: { figure: CaseFigure }) {
+  return (
+    <div className="grid grid-cols-1 gap-3 2xl:grid-cols-2">
+      {placesToDraw(figure).map((busId) => (
+        <VoltageFigure key={busId} figure={figure} busId={busId} />
+      ))}
+      {startedIds(figure).length > 0 ? (
+        <>
+          <SpeedFigure figure={figure} />
+          <CurrentFigure figure={figure} />
+        </>
+      ) : null}
+      {startedIds(figure).map((motorId) => (
+        <TorqueFigure key={motorId} figure={figure} motorId={motorId} />
+      ))}
+    </div>
+  )
+}

@@ -1,0 +1,50 @@
+import { ScrollRegion } from '@/lib/ui/scroll-region'
+
+export interface FigureRow<Item> {
+  label: string
+  print: (item: Item) => string
+}
+
+interface FigureTableProps<Item> {
+  caption: string
+  items: readonly Item[]
+  itemId: (item: Item) => string
+  name: (item: Item) => string
+  rows: readonly FigureRow<Item>[]
+}
+
+/** Figures down the side, one column an item: each label says what its number refers to. */
+export function FigureTable<Item>({ caption, items, itemId, name, rows }: FigureTableProps<Item>) {
+  if (items.length === 0) return null
+  return (
+    <ScrollRegion label={caption} className="border border-hair bg-sheet">
+      <table className="dense">
+        <caption className="px-2.5 pt-1.5 text-left font-semibold">{caption}</caption>
+        <thead>
+          <tr>
+            <td />
+            {items.map((item) => (
+              <th key={itemId(item)} scope="col" className="number">
+                {name(item)}
+              </th>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {rows.map(({ label, print }) => (
+            <tr key={label}>
+              <th scope="row" className="font-normal">
+                {label}
+              </th>
+              {items.map((item) => (
+                <td key={itemId(item)} className="number">
+                  {print(item)}
+                </td>
+              ))}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </ScrollRegion>
+  )
+}

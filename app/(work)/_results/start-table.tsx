@@ -1,0 +1,97 @@
+import type { StartResult } from '@/lib/engine/case-result'
+import { formatNumber } from '@/lib/quantity/format-number'
+import type { StudyDocument } from '@/lib/study/document/study-document'
+import type { CaseSummary } from '@/lib/study/summary'
+import { startOutcomeWords } from '@/lib/study/words/outcome-words'
+import { motorTag } from '@/lib/study/words/tags'
+import { type FigureRow, FigureTable } from './figure-table'
+import * as print from './print'
+
+interface Item {
+  motorId: string
+  start: StartResult
+  ratedVoltage: number
+}
+
+const { current, energy, orDash, percent, seconds, speed, torque, voltage } = print
+
+const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
+  { label: 'Outcome', print: ({ start }) => startOutcomeWords[start.outcome.kind] },
+  { label: 'Switched on, from the beginning of the schedule', print: ({ start }) => seconds(start.switchedOnAt) },
+  {
+    label: 'Terminal voltage at standstill',
+    print: ({ start, ratedVoltage }) =>
+      `${voltage(start.standstill.motorVoltage)}, ${print.perUnit(start.standstill.motorVoltage / ratedVoltage)} of rated`,
+  },
+  { label: 'Line current at standstill', print: ({ start }) => current(start.standstill.lineCurrent) },
+  { label: 'Motor current at standstill', print: ({ start }) => current(start.standstill.motorCurrent) },
+  {
+    label: 'Power at standstill, line side',
+    print: ({ start }) =>
+      `${print.activePower(start.standstill.power.re)}, ${print.reactivePower(start.standstill.power.im)}`,
+  },
+  {
+    label: 'Power factor at standstill',
+    print: ({ start }) => formatNumber(start.standstill.powerFactor, { decimals: 3 }),
+  },
+  { label: 'Torque at standstill', print: ({ start }) => torque(start.standstill.torque) },
+  {
+    label: 'Largest line current',
+    print: ({ start }) => `${current(start.peakLineCurrent.current)} at ${seconds(start.peakLineCurrent.at)}`,
+  },
+  {
+    label: 'Largest motor current',
+    print: ({ start }) => `${current(start.peakMotorCurrent.current)} at ${seconds(start.peakMotorCurrent.at)}`,
+  },
+  {
+    label: 'Lowest terminal voltage',
+    print: ({ start, ratedVoltage }) =>
+      `${voltage(start.lowestMotorVoltage.voltage)}, ${print.perUnit(start.lowestMotorVoltage.voltage / ratedVoltage)} of rated, at ${seconds(start.lowestMotorVoltage.at)}`,
+  },
+  {
+    label: 'Least accelerating torque to 95 % of rated speed',
+    print: ({ start }) =>
+      `${torque(start.leastAccelerating.torque)}, ${percent(start.leastAccelerating.ofRated, 1)} of rated, at ${speed(start.leastAccelerating.speed)}`,
+  },
+  { label: 'Time to 95 % of rated speed, from switching on', print: ({ start }) => orDash(start.timeTo95, seconds) },
+  {
+    label: `Time to ${document.settings.speedCriterion.text} of rated speed, from switching on`,
+    print: ({ start }) => orDash(start.timeToCriterion, seconds),
+  },
+  { label: 'Settled speed', print: ({ start }) => orDash(start.settledSpeed, speed) },
+  {
+    label: 'I²t of the motor current to the speed criterion',
+    print: ({ start }) => print.currentSquaredTime(start.i2t),
+  },
+  { label: 'Rotor slip energy', print: ({ start }) => energy(start.slipEnergy) },
+  { label: 'Kinetic energy gained', print: ({ start }) => energy(start.kineticEnergy) },
+  {
+    label: 'Heat used by current, of I²t over the permissible time',
+    print: ({ start }) => orDash(start.heatUsed.byCurrent, (value) => percent(value, 1)),
+  },
+  {
+    label: 'Heat used by the rotor, of locked-rotor power over the permissible time',
+    print: ({ start }) => orDash(start.heatUsed.byRotor, (value) => percent(value, 1)),
+  },
+  {
+    label: `Heat used, the larger, ${document.settings.thermalState}`,
+    print: ({ start }) => orDash(start.heatUsed.figure, (value) => percent(value, 1)),
+  },
+]
+
+/** Everything about the motors that are started in the case. */
+export function StartTable({ document, result }: { document: StudyDocument; result: CaseSummary }) {
+  const items = result.motors.flatMap(({ motorId, start }): Item[] => {
+    const ratedVoltage = document.plant.motors.find(({ id }) => id === motorId)?.ratedVoltage.si ?? Number.NaN
+    return start ? [{ motorId, start, ratedVoltage }] : []
+  })
+  return (
+    <FigureTable
+      caption="Starting motors"
+      items={items}
+      itemId={({ motorId }) => motorId}
+      name={({ motorId }) => motorTag(document, motorId)}
+      rows={rowsFor(document)}
+    />
+  )
+}
