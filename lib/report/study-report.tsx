@@ -1,5 +1,5 @@
 import { Document, type DocumentProps, Page } from '@react-pdf/renderer'
-import type { ReactElement } from 'react'
+import { createElement, type ReactElement } from 'react'
 import { stack } from './paper/block'
 import { heading } from './paper/heading'
 import { type ChromeWords, pageChrome } from './paper/page-chrome'
@@ -81,11 +81,9 @@ export const studyReport = (input: ReportInput, words: Wording, paper: Paper): R
     title: words.frame.contents,
   })
   const chrome = chromeWords(input, words)
-  const page = (format: PageFormat, children: readonly ReactElement[]) => (
-    <Page size={[format.width, format.height]} layout={pageChrome(paper, format, chrome)}>
-      {stack(children)}
-    </Page>
-  )
+  // A break is honoured on the direct children of a page only.
+  const page = (format: PageFormat, children: readonly ReactElement[]) =>
+    createElement(Page, { size: [format.width, format.height], layout: pageChrome(paper, format, chrome) }, ...children)
   return (
     <Document>
       {page(portrait, front)}

@@ -6,7 +6,7 @@ import { block } from './block'
 import type { Heading, Paper } from './paper'
 
 const sizes = {
-  1: { size: 15, leading: 19, above: 0, below: 7 },
+  1: { size: 15, leading: 19, above: 12, below: 7 },
   2: { size: 11, leading: 14.5, above: 9, below: 4 },
 } as const
 

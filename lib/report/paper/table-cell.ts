@@ -50,7 +50,7 @@ export const paintCell = (pdf: Pdf, cell: PreparedCell, place: CellPlace): void 
   const mark = cell.verdict ? markWidth * size : 0
   const widest = Math.max(0, ...cell.lines.map((line) => line.width))
   const left = align === 'left' ? place.x : align === 'right' ? place.x - widest - mark : place.x - (widest + mark) / 2
-  if (cell.verdict) paintVerdictMark(pdf, cell.verdict, left, place.y, size)
+  if (cell.verdict) paintVerdictMark(pdf, cell.verdict, left, place.y, size, cell.ink)
   const ink = cell.ink ?? (cell.verdict ? verdictInk[cell.verdict] : cell.link ? 'accent' : 'ink')
   const x = align === 'left' ? place.x + mark : align === 'right' ? place.x : place.x + mark / 2
   for (const [i, line] of cell.lines.entries())

@@ -36,7 +36,7 @@ export const assumptions: Section = (context) => {
           dataTable(paper, {
             width,
             columns: [
-              { head: say.heads.record, width: 1 },
+              { head: say.heads.record, width: 1.6 },
               { head: say.heads.field, width: 1.3 },
               { head: say.heads.value, width: 1.7 },
               { head: say.heads.kind, width: 62, fixed: true },

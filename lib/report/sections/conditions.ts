@@ -26,16 +26,17 @@ export const conditions = (context: ReportContext): readonly string[] => {
   const unsourced = values.filter(({ provenance }) => provenance === null).length
   const { startsPerDay, startsPerHour } = document.settings
   const methods = listed(designStarters(document).map((starter) => `${starter.tag} (${starterPhrase(starter)})`))
-  const successive = designMotors(document).flatMap((motor) => {
+  const successive = new Map<string, string[]>()
+  for (const motor of designMotors(document)) {
     const starts = verdict.startsWords(motor.startsCold, motor.startsHot, motor.startsPerHour)
-    return starts === '' ? [] : [verdict.makerStarts(motor.tag, starts)]
-  })
+    if (starts !== '') successive.set(starts, [...(successive.get(starts) ?? []), motor.tag])
+  }
   const open = openItems(document, words).length
   return [
     verdict.startsClass(startsPerDay.text, startsPerHour.text),
     ...(methods === '' ? [] : [verdict.methodsHeld(methods)]),
     verdict.onlyComputed,
-    ...successive,
+    ...[...successive].map(([starts, tags]) => verdict.makerStarts(listedTags(tags), starts)),
     ...(departures === '' ? [] : [verdict.mustExclude(departures)]),
     ...(hanging === '' ? [] : [verdict.hangs(hanging)]),
     ...(early === '' ? [] : [verdict.tooEarly(early)]),

@@ -1,5 +1,5 @@
 import type { ReactElement } from 'react'
-import { block } from '../paper/block'
+import { block, row, stack } from '../paper/block'
 import type { Heading, Paper } from '../paper/paper'
 import { paragraph } from '../paper/text-block'
 import type { ReportContext } from '../report-context'
@@ -40,11 +40,25 @@ const entry = (paper: Paper, { id, level, number, title }: Heading, width: numbe
   })
 }
 
+/** Headings in two columns of about equal height; a chapter's sub-headings stay behind it. */
+const columnsOf = (headings: readonly Heading[]): readonly (readonly Heading[])[] => {
+  const height = ({ level }: Heading) => lookOf[level].leading + lookOf[level].above
+  const half = headings.reduce((sum, one) => sum + height(one), 0) / 2
+  let used = 0
+  const at = headings.findIndex((one) => {
+    used += height(one)
+    return used > half && one.level === 1
+  })
+  return at <= 0 ? [headings] : [headings.slice(0, at), headings.slice(at)]
+}
+
 /** The contents: every heading with its page, as links. Written after all sections, because these number the headings. */
 export const contents = (
   { paper, words, width }: ReportContext,
   headings: readonly Heading[],
-): readonly ReactElement[] => [
-  ...paragraph(paper, words.frame.contentsNote, { width, ...small, ink: 'soft', below: 8 }),
-  ...headings.map((one) => entry(paper, one, width)),
-]
+): readonly ReactElement[] => {
+  const gap = 22
+  const columnWidth = (width - gap) / 2
+  const columns = columnsOf(headings).map((column) => stack(column.map((one) => entry(paper, one, columnWidth))))
+  return [...paragraph(paper, words.frame.contentsNote, { width, ...small, ink: 'soft', below: 8 }), row(columns, gap)]
+}

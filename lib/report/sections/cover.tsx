@@ -17,6 +17,9 @@ export const signatureBoxes = {
   seal: 'sign-seal',
 }
 
+/** Height of the printed words at the top of a box, above the field. */
+export const labelHeights = { person: 34, seal: 17 }
+
 const title = ({ paper, input, words, width }: ReportContext): ReactElement => {
   const { head } = input.document
   const lines = wrapRuns(plain(head.title, 'semibold'), width, 25)
@@ -110,8 +113,7 @@ const signOff = (context: ReportContext): ReactElement => {
         .moveTo(5, 31)
         .lineTo(boxWidth - 5, 31)
         .stroke(colour('rule'))
-      const words = input.draft ? cover.unsigned : cover.sign
-      paintText(pdf, words, 5, height - 6, { size: 6.5, colour: colour('soft') })
+      if (input.draft) paintText(pdf, cover.unsigned, 5, height - 6, { size: 6.5, colour: colour('soft') })
     })
   const boxes = signOffRoles.map((role) =>
     box(signatureBoxes[role], cover.roles[role], input.revision.people[role] ?? cover.nobody),

@@ -1,4 +1,3 @@
-import { caseSentence } from '@/lib/study/words/case-sentence'
 import { limitedQuantity, placePhrase } from '@/lib/study/words/limit-sentence'
 import { listed, listedTags } from '@/lib/study/words/list-words'
 import type { ReportContext } from '../report-context'
@@ -29,12 +28,10 @@ export const findings = ({ input, words, whole }: ReportContext): readonly strin
     return `**${limit.tag}** ${placePhrase(limit, document)}, ${limitedQuantity(limit, document)}: ${listed(parts)}.`
   })
   const compared = failingCases(rows, 'comparison')
-  const comparedWords = compared.map(({ case: one, limits }) =>
-    words.verdict.failingCase(one.tag, caseSentence(one, document), listedTags(limits)),
-  )
+  const comparedWords = compared.map(({ case: one, limits }) => words.verdict.failingCase(one.tag, listedTags(limits)))
   return [
     `${words.verdict.counted(cases, design.length)} ${words.verdict.tally(counts.meets, counts.close, counts.fails, counts['not-assessed'])}`,
     ...(sentences.length > 0 ? sentences : design.length > 0 ? [words.verdict.allMeet] : []),
-    ...(comparedWords.length > 0 ? [`${words.verdict.comparedFailing} ${comparedWords.join(' ')}`] : []),
+    ...(comparedWords.length > 0 ? [`${words.verdict.comparedFailing} ${listed(comparedWords)}.`] : []),
   ]
 }

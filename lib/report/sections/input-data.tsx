@@ -62,9 +62,9 @@ export const inputData: Section = (context) => {
     chapter(context, 'input', say.title),
     ...paragraph(paper, say.intro, { width }),
     ...legend(context),
-    ...part('settings', true, () => [
-      recordRows(context, settingsFields(fields, document), [{ ...settings, tag: document.head.documentNumber }]),
-    ]),
+    ...part('settings', true, () =>
+      recordSheets(context, settingsFields(fields, document), [{ ...settings, tag: say.study }]),
+    ),
     ...part('buses', plant.buses.length > 0, () => [recordRows(context, busFields(fields), plant.buses, wide)]),
     ...part('supplies', plant.supplies.length > 0, () =>
       recordSheets(context, supplyFields(fields, document), plant.supplies),

@@ -33,19 +33,23 @@ const unitOf = (limit: LimitRecord, { input }: ReportContext): string =>
   formatVerdict({ value: null, limit: 1, word: 'meets' }, limit.quantity, closeMargins(input.document)).unit
 
 const legend = ({ paper, words, width }: ReportContext): ReactElement => {
-  const size = small.size
+  const { size } = small
+  const { matrix: say } = words.verdict
   const kinds = ['meets', 'close', 'fails', 'not-assessed'] as const
-  return block(paper, { width, height: kinds.length * 11.5, below: 5 }, (pdf) => {
-    for (const [i, kind] of kinds.entries()) {
-      const y = 8.5 + i * 11.5
-      paintVerdictMark(pdf, kind, 0, y, size)
-      paintText(pdf, verdictWords[kind], 12, y, { size, weight: 'semibold', colour: colour('ink') })
-      const after = 12 + measure('not assessed', size, 'semibold') + 8
-      paintText(pdf, verdictMeanings[kind], after, y, { size, colour: colour('soft') })
+  const leading = 11.5
+  const after = 12 + measure(verdictWords['not-assessed'], size, 'semibold') + 8
+  const lines = [
+    ...kinds.map((kind) => ({ mark: kind, term: verdictWords[kind], meaning: verdictMeanings[kind] })),
+    { mark: null, term: say.notApplicable, meaning: say.notApplicableMeaning },
+    { mark: null, term: say.grey, meaning: say.greyMeaning },
+  ]
+  return block(paper, { width, height: lines.length * leading, below: 5 }, (pdf) => {
+    for (const [i, { mark, term, meaning }] of lines.entries()) {
+      const y = 8.5 + i * leading
+      if (mark) paintVerdictMark(pdf, mark, 0, y, size)
+      paintText(pdf, term, 12, y, { size, weight: 'semibold', colour: colour(mark ? 'ink' : 'soft') })
+      paintText(pdf, meaning, after, y, { size, colour: colour('soft') })
     }
-    paintText(pdf, words.verdict.matrix.notApplicable, 330, 8.5, { size, colour: colour('soft') })
-    paintText(pdf, words.verdict.matrix.notApplicableMeaning, 346, 8.5, { size, colour: colour('soft') })
-    paintText(pdf, words.verdict.matrix.greyMeaning, 330, 20, { size, colour: colour('soft') })
   })
 }
 

@@ -3,6 +3,8 @@ import { listedTags } from '@/lib/study/words/list-words'
 import { dataTable } from '../paper/data-table'
 import { paragraph } from '../paper/text-block'
 import type { ReportContext } from '../report-context'
+import { dense } from '../theme'
+import { measure } from '../type/measure'
 import type { RecordField } from '../values/record-field'
 
 interface Tagged {
@@ -12,6 +14,10 @@ interface Tagged {
 /** Fields that no record of the table fills are left out of its head. */
 const filled = <R extends Tagged>(fields: readonly RecordField<R>[], records: readonly R[]) =>
   fields.filter((field) => records.some((record) => field.of(record) !== null))
+
+/** Wide enough for the longest tag within reason. */
+const tagColumn = (records: readonly Tagged[]): number =>
+  Math.min(110, Math.max(40, ...records.map(({ tag }) => measure(tag, dense.size, 'semibold') + 8)))
 
 /** One row a record, one column a value; for records with few values. */
 export const recordRows = <R extends Tagged>(
@@ -24,7 +30,7 @@ export const recordRows = <R extends Tagged>(
   return dataTable(paper, {
     width,
     columns: [
-      { head: words.records.input.record, width: 0.9 },
+      { head: words.records.input.record, width: tagColumn(records), fixed: true },
       ...used.map((field) => ({ head: field.label, width: weights[field.label] ?? 1 })),
     ],
     rows: records.map((record) => [

@@ -1,21 +1,29 @@
+import type { Font } from 'fontkit'
 import { faces, fontFor, type Weight } from './faces'
 
 const known: Record<Weight, Map<string, number>> = { regular: new Map(), semibold: new Map() }
 
-/** Advance of one character in parts of the size, from the font that prints it. */
-const advance = (character: string, weight: Weight): number => {
-  const found = known[weight].get(character)
+/** Width of a word with the space behind it, in parts of the size, kerned as it will be painted. */
+const wordWidth = (word: string, weight: Weight): number => {
+  const found = known[weight].get(word)
   if (found !== undefined) return found
-  const codePoint = character.codePointAt(0) ?? 0
-  const font = fontFor(faces()[weight], codePoint)
-  const width = font ? font.glyphForCodePoint(codePoint).advanceWidth / font.unitsPerEm : 0
-  known[weight].set(character, width)
+  const face = faces()[weight]
+  const parts: { text: string; font: Font }[] = []
+  for (const character of word) {
+    const font = fontFor(face, character.codePointAt(0) ?? 0) ?? face.own
+    const last = parts.at(-1)
+    if (last?.font === font) last.text += character
+    else parts.push({ text: character, font })
+  }
+  const width = parts.reduce((sum, { text, font }) => sum + font.layout(text).advanceWidth / font.unitsPerEm, 0)
+  known[weight].set(word, width)
   return width
 }
 
-/** Width in points of a text set in the report's family, without kerning. */
+/** Width in points of a text set in the report's family, kerned as it will be painted. */
 export const measure = (text: string, size: number, weight: Weight = 'regular'): number => {
   let sum = 0
-  for (const character of text) sum += advance(character, weight)
+  // The file's own text layout goes word by word, each with its space, so that kerning never crosses a space.
+  for (const word of text.match(/[^ ]* |[^ ]+$/g) ?? []) sum += wordWidth(word, weight)
   return sum * size
 }

@@ -51,6 +51,9 @@ const table = ({ paper, input, words, width }: ReportContext, places: readonly P
   })
 }
 
+/** Tables of up to this many places stay on one page. */
+const mostTogether = 14
+
 /** The voltages of one case at every place, under its sentence. */
 export const voltageTable = (
   context: ReportContext,
@@ -62,5 +65,5 @@ export const voltageTable = (
   const head = caption(paper, `${record.tag}: ${caseSentence(record, document)}.`, { width, keep: 70 })
   if (result.places.length === 0)
     return stack([...head, ...paragraph(paper, caseOutcomeSentence(result.outcome, name), { width, ...dense })])
-  return stack([...head, table(context, result.places)])
+  return stack([...head, table(context, result.places)], { together: result.places.length <= mostTogether })
 }

@@ -45,8 +45,8 @@ export const frame = {
     roles: { prepared: 'Prepared', checked: 'Checked', approved: 'Approved' },
     nobody: 'not named',
     unsigned: 'A draft is not signed.',
-    sign: 'signature',
     seal: 'Seal of a licensed engineer',
+    archive: 'Archive time stamp',
     sealNote:
       'Empty field for a licensee who seals this report with a certificate of his or her own. The signatures above are sign-offs by name within the organisation; they are neither a professional seal nor a qualified signature.',
   },

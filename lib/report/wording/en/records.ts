@@ -62,6 +62,7 @@ export const records = {
     empty: 'No record of this kind.',
     record: 'Record',
     field: 'Value',
+    study: 'This study',
   },
   assumptions: {
     title: 'Assumptions and open data',

@@ -97,6 +97,9 @@ export const results = {
   notices: {
     title: 'What the calculation noticed',
     none: 'Nothing out of the ordinary.',
+    range: (low: string, high: string) => `${low} to ${high}`,
+    reducedVoltage: (motor: string, range: string) =>
+      `${motor} starts at ${range}\u2009% of its rated voltage. Torque taken as the square of voltage is optimistic there; hold the sensitivity with the exponent 2.25 against it.`,
     heads: { case: 'Case', notice: 'Notice' },
   },
   plots: {

@@ -41,9 +41,8 @@ export const verdict = {
     `${meets} meet, ${close} close, ${fails} fail, ${open} not assessed.`,
   row: (rule: string, what: string, figure: string, cases: string) => `**${rule}** ${what}: ${figure} in ${cases}`,
   allMeet: 'No limit in use is failed or closely met by a design case.',
-  comparedFailing: 'Compared with the proposal and failing a limit in use:',
-  sensitivityFailing: 'Departures from the records (sensitivities) that fail a limit in use:',
-  failingCase: (tag: string, sentence: string, rules: string) => `**${tag}** ${sentence}: fails ${rules}.`,
+  comparedFailing: 'Compared with the proposal, these cases fail a limit in use:',
+  failingCase: (tag: string, rules: string) => `**${tag}** (${rules})`,
   conditions: 'Conditions',
   conditionsNote: 'What the verdict rests on, written by the program from records and results.',
   startsClass: (perDay: string, perHour: string) =>
@@ -51,7 +50,7 @@ export const verdict = {
   methodsHeld: (methods: string) => `Starting methods as recorded: ${methods}.`,
   onlyComputed:
     'Only the combinations of supply, running plant, starting method and load that were computed are covered.',
-  makerStarts: (motor: string, words: string) => `Maker's starts in succession for ${motor}: ${words}.`,
+  makerStarts: (motor: string, words: string) => `Maker's starts in succession, ${motor}: ${words}.`,
   startsWords: (cold: number | null, hot: number | null, hour: number | null) =>
     [
       ...(cold === null ? [] : [`${cold} from cold`]),
@@ -83,7 +82,8 @@ export const verdict = {
     case: 'Case',
     notApplicable: 'n/a',
     notApplicableMeaning: 'the limit is not written for this case',
-    greyMeaning: 'grey figure: class of starts not in use, does not count',
+    grey: 'grey',
+    greyMeaning: 'the limit is for a class of starts that is not in use; the figure does not count',
     allAssessed: 'Every limit was assessed wherever it applies.',
     notAssessed: 'Not assessed, and why',
     notReached: 'beyond',
