@@ -12,8 +12,11 @@ export function ProjectSheet({ project, userId }: { project: ProjectLine; userId
   const { projectId, name, client, organisation, roles, studies } = project
   const actor = { userId, roles }
   const team = can(actor, 'read-study').allowed
-  const href = ({ studyId, revision }: StudyLine): string =>
-    team ? `/studies/${studyId}/cases` : `/reports/${revision?.revisionId ?? ''}`
+  const reviews = roles.includes('commenter')
+  const href = ({ studyId, revision }: StudyLine): string => {
+    if (team || !revision) return `/studies/${studyId}/cases`
+    return reviews ? `/studies/${studyId}/revisions/${revision.revisionId}` : `/reports/${revision.revisionId}`
+  }
   return (
     <section id={projectId} aria-labelledby={`name-${projectId}`} className="border border-hair bg-sheet p-4">
       <div className="mb-2 flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">

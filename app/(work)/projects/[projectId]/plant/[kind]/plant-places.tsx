@@ -1,8 +1,8 @@
+import { PlaceList } from '@/app/(work)/_frame/place-list'
+import { studyPlaces } from '@/app/(work)/_frame/places'
+import { describeKind } from '@/app/(work)/_records/describe-kind'
 import { plantKinds } from '@/lib/server/plants/schema'
 import type { PlantRows } from '@/lib/server/row'
-import { PlaceList } from '../../../../_frame/place-list'
-import { studyPlaces } from '../../../../_frame/places'
-import { describeKind } from '../../../../_records/describe-kind'
 
 interface PlantPlacesProps {
   projectId: string

@@ -1,14 +1,14 @@
 'use client'
 
 import { type FormEvent, useMemo } from 'react'
+import { compareDrafts } from '@/app/(work)/_records/compare-drafts'
+import { ConflictPanel } from '@/app/(work)/_records/conflict-panel'
+import { SheetState } from '@/app/(work)/_records/sheet-state'
+import { useRecordSheet } from '@/app/(work)/_records/use-record-sheet'
 import type { NumberStyle } from '@/lib/quantity/quantity-name'
 import { Button } from '@/lib/ui/button'
 import { FormView } from '@/lib/ui/form/form-view'
 import { recordDraft } from '@/lib/ui/form/to-draft'
-import { compareDrafts } from '../../../../_records/compare-drafts'
-import { ConflictPanel } from '../../../../_records/conflict-panel'
-import { SheetState } from '../../../../_records/sheet-state'
-import { useRecordSheet } from '../../../../_records/use-record-sheet'
 import { saveStudy } from './actions'
 import { studyFields } from './study-fields'
 

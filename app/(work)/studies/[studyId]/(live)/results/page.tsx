@@ -1,11 +1,11 @@
 import type { Metadata } from 'next'
 import Link from 'next/link'
 import { seek } from '@/app/_action/ask'
+import { caseResult } from '@/app/(work)/_results/results'
+import { caseToOpen, ResultsView } from '@/app/(work)/_results/results-view'
 import { caseSeries } from '@/lib/server/studies/queries'
 import { EmptyState } from '@/lib/ui/empty-state'
 import { Notice } from '@/lib/ui/notice'
-import { caseResult } from '../../../_results/results'
-import { caseToOpen, ResultsView } from '../../../_results/results-view'
 import { StudyComputation } from '../_computing/study-computation'
 import { studyOf } from '../study'
 

@@ -1,4 +1,4 @@
-import { TabLinks } from '../../../_frame/tab-links'
+import { TabLinks } from '@/app/(work)/_frame/tab-links'
 
 export default async function CasesLayout({ params, children }: LayoutProps<'/studies/[studyId]/cases'>) {
   const { studyId } = await params

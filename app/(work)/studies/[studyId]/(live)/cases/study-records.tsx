@@ -1,9 +1,9 @@
 import { Suspense } from 'react'
+import { recordOptions, recordTags } from '@/app/(work)/_records/record-options'
+import { RecordWorkspace } from '@/app/(work)/_records/record-workspace'
 import { requireActor } from '@/lib/server/session'
 import type { StudyView } from '@/lib/server/studies/view'
 import type { StudyRecordKind } from '@/lib/study/document/record-kinds'
-import { recordOptions, recordTags } from '../../../_records/record-options'
-import { RecordWorkspace } from '../../../_records/record-workspace'
 import { removeStudyRecordAction, saveStudyRecord } from './record-actions'
 
 interface StudyRecordsProps {

@@ -1,7 +1,7 @@
-import { PlaceList } from '../../_frame/place-list'
-import { studyPlaces } from '../../_frame/places'
-import { studyTitleCells } from '../../_frame/study-title-cells'
-import { WorkFrame } from '../../_frame/work-frame'
+import { PlaceList } from '@/app/(work)/_frame/place-list'
+import { studyPlaces } from '@/app/(work)/_frame/places'
+import { studyTitleCells } from '@/app/(work)/_frame/study-title-cells'
+import { WorkFrame } from '@/app/(work)/_frame/work-frame'
 import { studyOf } from './study'
 
 export default async function StudyLayout({ params, children }: LayoutProps<'/studies/[studyId]'>) {

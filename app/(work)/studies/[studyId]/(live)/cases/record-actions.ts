@@ -1,10 +1,10 @@
 'use server'
 
 import { attempt } from '@/app/_action/attempt'
+import type { SavedRecord } from '@/app/(work)/_records/record-row'
 import { perform } from '@/lib/server/perform'
 import { addStudyRecord, changeStudyRecord, removeStudyRecord } from '@/lib/server/studies/commands'
 import type { StudyRecordKind } from '@/lib/study/document/record-kinds'
-import type { SavedRecord } from '../../../_records/record-row'
 
 interface Place {
   studyId: string

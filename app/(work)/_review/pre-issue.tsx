@@ -1,0 +1,65 @@
+import { Verdict } from '@/lib/ui/verdict'
+
+interface Check {
+  id: string
+  sentence: string
+  passed: boolean
+  issues: readonly { message: string }[]
+}
+
+const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === 'object' && value !== null
+
+/** The checks as they were kept with the revision; what has another form is left out. */
+const readChecks = (kept: unknown): readonly Check[] => {
+  const list = isRecord(kept) && Array.isArray(kept.checks) ? kept.checks : []
+  return list
+    .filter(isRecord)
+    .flatMap(({ id, sentence, passed, issues }) =>
+      typeof id === 'string' && typeof sentence === 'string' && typeof passed === 'boolean'
+        ? [{ id, sentence, passed, issues: (Array.isArray(issues) ? issues : []).filter(isIssue) }]
+        : [],
+    )
+}
+
+const isIssue = (value: unknown): value is { message: string } => isRecord(value) && typeof value.message === 'string'
+
+/** What reviewers always ask, asked before they do. */
+export function PreIssueChecks({ kept }: { kept: unknown }) {
+  const checks = readChecks(kept)
+  if (checks.length === 0) return null
+  const open = checks.filter(({ passed }) => !passed)
+  const passed = checks.filter((check) => check.passed)
+  return (
+    <section aria-labelledby="checks">
+      <h2 id="checks" className="m-0 mb-1 text-title font-semibold">
+        Pre-issue checks
+      </h2>
+      <ul className="m-0 list-none border border-hair bg-sheet p-0">
+        {open.map(({ id, sentence, issues }) => (
+          <li key={id} className="border-b border-hair px-3 py-1.5 last:border-b-0">
+            <Verdict word="fails" /> {sentence}
+            {issues.length > 0 ? (
+              <ul className="m-0 list-disc pl-8 text-dense text-soft">
+                {issues.map(({ message }) => (
+                  <li key={message}>{message}</li>
+                ))}
+              </ul>
+            ) : null}
+          </li>
+        ))}
+        <li className="px-3 py-1.5">
+          <details>
+            <summary>
+              <Verdict word="meets" /> {passed.length} of {checks.length} checks have nothing to say
+            </summary>
+            <ul className="m-0 list-disc pl-8 text-dense text-soft">
+              {passed.map(({ id, sentence }) => (
+                <li key={id}>{sentence}</li>
+              ))}
+            </ul>
+          </details>
+        </li>
+      </ul>
+    </section>
+  )
+}
