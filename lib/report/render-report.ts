@@ -1,14 +1,20 @@
+import { DomainError } from '../errors'
 import { finishReport } from './finish/finish-report'
 import { renderPages } from './render-pages'
 import type { ReportInput } from './report-input'
+import { glyphIssues } from './type/printable'
 import { english } from './wording/en'
 
 /**
  * Renders the report of a frozen revision as a PDF with the study attached; a final one has empty signature fields
  * Prepared, Checked, Approved and Seal, a draft a watermark instead. The same input gives the same bytes in every process
- * of one build. Throws when a text needs a glyph that no embedded font has.
+ * of one build. A text with a letter that no embedded font has is refused with its place, before anything is rendered.
  */
 export const renderReport = async (input: ReportInput): Promise<Uint8Array> => {
+  const { document, revision } = input
+  const issues = glyphIssues({ document, revision })
+  const first = issues[0]
+  if (first) throw new DomainError('unsupported', first.message, issues)
   const pages = await renderPages(input, english)
   return finishReport(pages, input, english)
 }

@@ -4,7 +4,7 @@ import type { TextItem } from '../scene'
 type Point = readonly [number, number]
 
 const step = 0.5
-const clearance = 0.5
+const clearance = 0.7
 
 const densely = (points: readonly Point[]): Point[] =>
   points.flatMap((b, i) => {

@@ -70,27 +70,62 @@ export const noteItems = (
   return [text(area.x + area.width, 2.6, parts.join('; '), { size: labelSize, anchor: 'end', ink: 'soft' })]
 }
 
-/** The name on the line: on the allowed side where there is room, from the right to the left, else beyond the hatching. */
-export const limitName = (limit: LimitSpec, levels: readonly Level[], placer: LabelPlacer): TextItem | null => {
+const aways = [4.2, 7, 10]
+
+/** Places along a stretch for a text of this length, from the right to the left. */
+const along = ({ from, to }: Level, length: number): readonly number[] => {
+  const last = Math.max(from, to - length - 1)
+  const count = Math.max(1, Math.floor((last - from) / 4))
+  return Array.from({ length: count + 1 }, (_, k) => last - (k * (last - from)) / count + 0.6)
+}
+
+/** Places from which a leader reaches the stretch, from the right to the left. */
+const around = ({ from, to }: Level, length: number): readonly number[] =>
+  Array.from({ length: Math.floor((to - from + length) / 3) }, (_, k) => to - 1 - k * 3)
+
+/**
+ * The name on the line: on the allowed side where there is room, from the right to the left, else beyond the hatching or
+ * before the line, else away from it with a leader.
+ */
+export const limitName = (
+  limit: LimitSpec,
+  levels: readonly Level[],
+  placer: LabelPlacer,
+): readonly SceneItem[] | null => {
   const length = textWidth(limit.name, labelSize)
-  const towards = limit.forbidden === 'below' ? -1 : 1
-  const baseline = (y: number, side: number, away: number) =>
-    side < 0 ? y - away - 0.22 * labelSize : y + away + 0.66 * labelSize
-  const candidates = [
-    { side: towards, away: 0.75 },
-    { side: -towards, away: hatchDepth + 0.75 },
+  const allowed = limit.forbidden === 'below' ? -1 : 1
+  const at = (x: number, y: number, side: number, away: number) =>
+    text(x, side < 0 ? y - away - 0.22 * labelSize : y + away + 0.66 * labelSize, limit.name, { size: labelSize })
+  const backwards = [...levels].reverse()
+  const beside = [
+    { side: allowed, away: 0.75 },
+    { side: -allowed, away: hatchDepth + 0.75 },
   ].flatMap(({ side, away }) =>
-    [...levels].reverse().flatMap(({ from, to, y }) => {
-      const last = Math.max(from, to - length - 1)
-      const count = Math.max(1, Math.floor((last - from) / 4))
-      return Array.from({ length: count + 1 }, (_, k) =>
-        text(last - (k * (last - from)) / count + 0.6, baseline(y, side, away), limit.name, { size: labelSize }),
-      )
-    }),
+    backwards.flatMap((level) => along(level, length).map((x) => at(x, level.y, side, away))),
   )
-  const first = levels[0]
-  const before = first
-    ? [text(first.from - 1, first.y + 0.33 * labelSize, limit.name, { size: labelSize, anchor: 'end' })]
-    : []
-  return placer.place([...candidates, ...before])
+  const before = levels
+    .slice(0, 1)
+    .map(({ from, y }) => text(from - 1, y + 0.33 * labelSize, limit.name, { size: labelSize, anchor: 'end' }))
+  const apart = aways.flatMap((away) =>
+    [allowed, -allowed].flatMap((side) =>
+      backwards.flatMap((level) => around(level, length).map((x) => ({ name: at(x, level.y, side, away), level }))),
+    ),
+  )
+  const near = [...beside, ...before]
+  const name = placer.place([...near, ...apart.map((one) => one.name)])
+  if (!name) return null
+  const level = apart.find((one) => one.name === name)?.level
+  if (!level) return [name]
+  const foot = Math.min(Math.max(name.x + length / 2, level.from + 0.5), level.to - 0.5)
+  const edge = name.y < level.y ? name.y + 0.22 * labelSize : name.y - 0.72 * labelSize
+  return [
+    path(
+      line([
+        [foot, level.y],
+        [foot, edge],
+      ]),
+      { stroke: 'ink', width: 0.12 },
+    ),
+    name,
+  ]
 }

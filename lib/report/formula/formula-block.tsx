@@ -18,10 +18,12 @@ export const formulaBlock = (paper: Paper, tex: string, width: number): ReactEle
   const scale = (natural / vw) * shrink
   return block(paper, { width, height: formula.height * ex * shrink, above: 3, below: 8 }, (pdf) => {
     pdf.save().translate(indent, 0).scale(scale).translate(-vx, -vy)
-    for (const { d, matrix } of formula.shapes) {
+    for (const { d, matrix, clip } of formula.shapes) {
       if (d === '') continue
       const [a, b, c, e, f, g] = matrix
-      pdf.save().transform(a, b, c, e, f, g).path(d).fill(colour('ink')).restore()
+      pdf.save()
+      if (clip) pdf.rect(...clip).clip()
+      pdf.transform(a, b, c, e, f, g).path(d).fill(colour('ink')).restore()
     }
     pdf.restore()
   })

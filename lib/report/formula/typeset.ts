@@ -5,12 +5,17 @@ import { TeX } from 'mathjax-full/js/input/tex.js'
 import 'mathjax-full/js/input/tex/ams/AmsConfiguration.js'
 import { mathjax } from 'mathjax-full/js/mathjax.js'
 import { SVG } from 'mathjax-full/js/output/svg.js'
+import { plainPath } from './plain-path'
 
 /** A shape of a formula with the matrix that places it, in units of the view box. */
 export interface FormulaShape {
   d: string
   matrix: readonly [number, number, number, number, number, number]
+  /** Part of the view box that shows it: x, y, width, height; null for all. Stretched rules are longer than what shows. */
+  clip: Clip | null
 }
+
+type Clip = readonly [number, number, number, number]
 
 /** A formula as filled shapes; sizes in ex of the text around it. */
 export interface Formula {
@@ -66,26 +71,39 @@ const transformOf = (text: string): Matrix => {
 
 const attribute = (node: LiteElement, name: string): string => String(adaptor.getAttribute(node, name) ?? '')
 
+const boxOf = (node: LiteElement): readonly [number, number, number, number] => {
+  const number = (name: string) => Number(attribute(node, name) || 0)
+  return [number('x'), number('y'), number('width'), number('height')]
+}
+
 const nestedMatrix = (node: LiteElement): Matrix => {
   const [vx = 0, vy = 0, vw = 1, vh = 1] = numbers(attribute(node, 'viewBox'))
-  const [x, y] = [Number(attribute(node, 'x') || 0), Number(attribute(node, 'y') || 0)]
-  const [sx, sy] = [Number(attribute(node, 'width')) / vw, Number(attribute(node, 'height')) / vh]
-  return multiply([1, 0, 0, 1, x, y], multiply([sx, 0, 0, sy, 0, 0], [1, 0, 0, 1, -vx, -vy]))
+  const [x, y, width, height] = boxOf(node)
+  return multiply([1, 0, 0, 1, x, y], multiply([width / vw, 0, 0, height / vh, 0, 0], [1, 0, 0, 1, -vx, -vy]))
+}
+
+/** A box under a matrix that does not turn it. */
+const mapped = ([a, , , d, e, f]: Matrix, [x, y, width, height]: Clip): Clip => {
+  const [left, right] = [a * x + e, a * (x + width) + e].sort((p, q) => p - q)
+  const [top, bottom] = [d * y + f, d * (y + height) + f].sort((p, q) => p - q)
+  return [left!, top!, right! - left!, bottom! - top!]
 }
 
 const isElement = (node: unknown): node is LiteElement =>
   typeof node === 'object' && node !== null && 'attributes' in node && 'children' in node
 
-const collect = (node: LiteElement, matrix: Matrix, shapes: FormulaShape[]): void => {
+const collect = (node: LiteElement, matrix: Matrix, clip: Clip | null, shapes: FormulaShape[]): void => {
   const own = multiply(matrix, transformOf(attribute(node, 'transform')))
   const kind = adaptor.kind(node)
-  if (kind === 'path') shapes.push({ d: attribute(node, 'd'), matrix: own })
+  if (kind === 'path') shapes.push({ d: plainPath(attribute(node, 'd')), matrix: own, clip })
   if (kind === 'rect') {
-    const [x, y, w, h] = ['x', 'y', 'width', 'height'].map((name) => Number(attribute(node, name) || 0))
-    shapes.push({ d: `M${x} ${y}h${w}v${h}h${-w!}Z`, matrix: own })
+    const [x, y, width, height] = boxOf(node)
+    shapes.push({ d: `M${x} ${y}h${width}v${height}h${-width}Z`, matrix: own, clip })
   }
-  const inner = kind === 'svg' ? multiply(own, nestedMatrix(node)) : own
-  for (const child of node.children) if (isElement(child)) collect(child, inner, shapes)
+  const nested = kind === 'svg'
+  const inner = nested ? multiply(own, nestedMatrix(node)) : own
+  const shown = nested ? mapped(own, boxOf(node)) : clip
+  for (const child of node.children) if (isElement(child)) collect(child, inner, shown, shapes)
 }
 
 const known = new Map<string, Formula>()
@@ -100,7 +118,7 @@ export const typeset = (tex: string): Formula => {
   if (adaptor.outerHTML(svg).includes('data-mjx-error')) throw new Error(`A formula cannot be typeset: ${tex}`)
   const [x = 0, y = 0, w = 0, h = 0] = numbers(attribute(svg, 'viewBox'))
   const shapes: FormulaShape[] = []
-  for (const child of svg.children) if (isElement(child)) collect(child, [1, 0, 0, 1, 0, 0], shapes)
+  for (const child of svg.children) if (isElement(child)) collect(child, [1, 0, 0, 1, 0, 0], null, shapes)
   const ex = (name: string) => Number.parseFloat(attribute(svg, name))
   const formula: Formula = { shapes, viewBox: [x, y, w, h], width: ex('width'), height: ex('height') }
   known.set(tex, formula)

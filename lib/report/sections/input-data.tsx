@@ -57,7 +57,15 @@ export const inputData: Section = (context) => {
     subsection(context, `input-${key}`, say.kinds[key]),
     ...(some ? content() : noRecords(context)),
   ]
-  const wide = { [fields.name]: 2, [fields.meaning]: 2.2, [fields.bus]: 0.7, [fields.duty]: 2.2, [fields.own]: 2 }
+  const wide = {
+    [fields.name]: 2,
+    [fields.meaning]: 2.2,
+    [fields.bus]: 0.7,
+    [fields.duty]: 2.4,
+    [fields.own]: 2.2,
+    [fields.method]: 1.7,
+    [fields.changeOver]: 1.3,
+  }
   return [
     chapter(context, 'input', say.title),
     ...paragraph(paper, say.intro, { width }),

@@ -1,5 +1,6 @@
 import type { Font } from 'fontkit'
 import { faces, fontFor, type Weight } from './faces'
+import { printable } from './printable'
 
 const known: Record<Weight, Map<string, number>> = { regular: new Map(), semibold: new Map() }
 
@@ -24,6 +25,6 @@ const wordWidth = (word: string, weight: Weight): number => {
 export const measure = (text: string, size: number, weight: Weight = 'regular'): number => {
   let sum = 0
   // The file's own text layout goes word by word, each with its space, so that kerning never crosses a space.
-  for (const word of text.match(/[^ ]* |[^ ]+$/g) ?? []) sum += wordWidth(word, weight)
+  for (const word of printable(text).match(/[^ ]* |[^ ]+$/g) ?? []) sum += wordWidth(word, weight)
   return sum * size
 }

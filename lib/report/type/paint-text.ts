@@ -2,6 +2,7 @@ import type { Font } from 'fontkit'
 import type PDFDocument from 'pdfkit'
 import { type Face, faces, fontFor, type Weight } from './faces'
 import { measure } from './measure'
+import { printable } from './printable'
 import type { Line } from './rich-text'
 
 declare global {
@@ -41,7 +42,7 @@ export interface TextStyle {
 /** Paints one line of text with its baseline at y. */
 export const paintText = (pdf: Pdf, text: string, x: number, y: number, style: TextStyle): void => {
   const weight = style.weight ?? 'regular'
-  const parts = stretches(text, faces()[weight])
+  const parts = stretches(printable(text), faces()[weight])
   let at = x
   for (const part of parts) {
     pdf.font(part.font, style.size).fillColor(style.colour)

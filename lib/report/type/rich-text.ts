@@ -1,5 +1,6 @@
 import type { Weight } from './faces'
 import { measure } from './measure'
+import { printable } from './printable'
 
 /** A stretch of text in one style; `rise` in parts of the size. */
 export interface Run {
@@ -23,24 +24,27 @@ const script = 0.7
 const marks = /\*\*(.+?)\*\*|_\{(.+?)\}|\^\{(.+?)\}/gu
 
 /** Plain text as one run; what people typed is never read as markup. */
-export const plain = (text: string, weight: Weight = 'regular'): readonly Run[] => [{ text, weight, scale: 1, rise: 0 }]
+export const plain = (text: string, weight: Weight = 'regular'): readonly Run[] => [
+  { text: printable(text), weight, scale: 1, rise: 0 },
+]
 
 /** Wording with `**strong**`, `_{below}` and `^{above}` as runs. */
 export const rich = (text: string, weight: Weight = 'regular'): readonly Run[] => {
+  const clean = printable(text)
   const runs: Run[] = []
   let from = 0
   const push = (part: string, style: Partial<Run> = {}) => {
     if (part !== '') runs.push({ text: part, weight, scale: 1, rise: 0, ...style })
   }
-  for (const match of text.matchAll(marks)) {
-    push(text.slice(from, match.index))
+  for (const match of clean.matchAll(marks)) {
+    push(clean.slice(from, match.index))
     const [whole, strong, below, above] = match
     if (strong !== undefined) for (const run of rich(strong, 'semibold')) runs.push(run)
     else if (below !== undefined) push(below, { scale: script, rise: -0.16 })
     else push(above ?? '', { scale: script, rise: 0.34 })
     from = match.index + whole.length
   }
-  push(text.slice(from))
+  push(clean.slice(from))
   return runs
 }
 
