@@ -5,6 +5,13 @@ import path from 'node:path'
 import { pause } from './pause.mjs'
 import { identify, stillRuns } from './process-identity.mjs'
 
+/** @type {Set<string>} */
+const held = new Set()
+
+process.on('exit', () => {
+  for (const file of held) fs.rmSync(file, { force: true })
+})
+
 /** @param {string} file @returns {import('./process-identity.mjs').ProcessIdentity | null} */
 function holderOf(file) {
   try {
@@ -24,6 +31,7 @@ function take(file) {
   fs.writeFileSync(own, JSON.stringify(identify(process.pid)), { mode: 0o600 })
   try {
     fs.linkSync(own, file)
+    held.add(file)
     return true
   } catch (error) {
     if (/** @type {NodeJS.ErrnoException} */ (error).code === 'EEXIST') return false
@@ -82,6 +90,7 @@ export async function withLock(file, work, onWait) {
   try {
     return await work()
   } finally {
+    held.delete(file)
     fs.rmSync(file, { force: true })
   }
 }

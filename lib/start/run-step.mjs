@@ -7,6 +7,26 @@ import { root } from './root.mjs'
 /** Nothing is reported to anybody, and no step asks for news. */
 const quietTools = { NEXT_TELEMETRY_DISABLED: '1', CHECKPOINT_DISABLE: '1', PRISMA_HIDE_UPDATE_MESSAGE: '1' }
 
+/** @type {Set<import('node:child_process').ChildProcess>} */
+const running = new Set()
+
+// a command that is told to stop takes the step under way with it
+process.on('exit', () => {
+  for (const child of running) child.kill('SIGTERM')
+})
+
+/**
+ * Counts a process among those that end with this one.
+ * @template {import('node:child_process').ChildProcess} T
+ * @param {T} child
+ * @returns {T}
+ */
+export function endsWithUs(child) {
+  running.add(child)
+  child.once('close', () => running.delete(child))
+  return child
+}
+
 /**
  * Runs a program to its end and keeps what it says. Its input is empty, so that nothing can wait for an answer.
  * @param {string} program
@@ -17,11 +37,8 @@ const quietTools = { NEXT_TELEMETRY_DISABLED: '1', CHECKPOINT_DISABLE: '1', PRIS
 export function runProgram(program, args, env = {}) {
   const began = performance.now()
   return new Promise((resolve) => {
-    const child = spawn(program, args, {
-      cwd: root,
-      env: { ...process.env, ...quietTools, ...env },
-      stdio: ['ignore', 'pipe', 'pipe'],
-    })
+    const options = { cwd: root, env: { ...process.env, ...quietTools, ...env } }
+    const child = endsWithUs(spawn(program, args, { ...options, stdio: ['ignore', 'pipe', 'pipe'] }))
     let stdout = ''
     let stderr = ''
     child.stdout.setEncoding('utf8').on('data', (part) => {
@@ -49,3 +66,15 @@ export const runNode = (args, env) => runProgram(process.execPath, args, env)
 /** @param {StepOutcome} outcome @param {number} [lines] @returns {string} the end of what it said */
 export const lastLines = ({ stdout, stderr }, lines = 40) =>
   `${stdout}\n${stderr}`.trim().split('\n').slice(-lines).join('\n')
+
+/**
+ * Runs Node with output that is shown as it comes.
+ * @param {string[]} args
+ * @param {Record<string, string | undefined>} [env]
+ * @returns {Promise<number>} exit status
+ */
+export function showNode(args, env = {}) {
+  const options = { cwd: root, env: { ...process.env, ...quietTools, ...env } }
+  const child = endsWithUs(spawn(process.execPath, args, { ...options, stdio: ['ignore', 'inherit', 'inherit'] }))
+  return new Promise((resolve) => child.once('exit', (status) => resolve(status ?? 1)))
+}

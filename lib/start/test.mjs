@@ -1,28 +1,12 @@
 // @ts-check
 import './node-version.mjs'
-import { spawn } from 'node:child_process'
 import { runCommand } from './failure.mjs'
 import { prepareApplication, preparePrograms } from './prepare.mjs'
-import { root } from './root.mjs'
+import { showNode } from './run-step.mjs'
 import { runUntilStopped } from './undo-list.mjs'
 
 /** @param {string} line */
 const say = (line) => process.stdout.write(`${line}\n`)
-
-/**
- * Runs a tool whose output is shown as it comes.
- * @param {string[]} args of Node
- * @param {Record<string, string>} env
- * @returns {Promise<number>} exit status
- */
-function show(args, env) {
-  const child = spawn(process.execPath, args, {
-    cwd: root,
-    env: { ...process.env, ...env },
-    stdio: ['ignore', 'inherit', 'inherit'],
-  })
-  return new Promise((resolve) => child.once('exit', (status) => resolve(status ?? 1)))
-}
 
 /** @param {ReturnType<import('./undo-list.mjs').undoList>} undo */
 async function testEverything(undo) {
@@ -60,7 +44,7 @@ async function testEverything(undo) {
       '--reporter=json',
       `--outputFile=${report}`,
     ]
-    const status = await show([toolPath('vitest'), ...args], { TEST_CLUSTER_URL: server })
+    const status = await showNode([toolPath('vitest'), ...args], { TEST_CLUSTER_URL: server })
     return countVitest(report, status)
   })
   const built = await parts.run('build', async () => {
@@ -80,7 +64,7 @@ async function testEverything(undo) {
     try {
       const { chromium } = await import('@playwright/test')
       const browser = await findChromium(process.env, async () => chromium.executablePath())
-      const status = await show([...playwright, '--reporter=list,json'], { ...env, CHROMIUM: browser })
+      const status = await showNode([...playwright, '--reporter=list,json'], { ...env, CHROMIUM: browser })
       return countPlaywright(report, status)
     } catch (error) {
       return cannotRun(error instanceof Error ? error.message : String(error))
