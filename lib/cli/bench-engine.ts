@@ -1,0 +1,62 @@
+import { estimateCircuit } from '../engine/estimate/estimate-circuit'
+import type { Nameplate } from '../engine/estimate/nameplate'
+import { runCase } from '../engine/run-case'
+import type { StudyDocument } from '../study/document/study-document'
+import { runDocument } from '../study/run-document'
+import { ampere, hertz, newtonMetre, volt, watt } from '../units/si'
+import { fromRpm } from '../units/speed'
+import { type Figure, figure } from './figure'
+import { plainRunUp } from './plain-run-up'
+import { speedCase } from './speed-case'
+import { timeOf } from './timing'
+
+/** How long each figure is measured, ms. */
+const patience = 1500
+
+/** An invented 1100 kW pump motor of six poles. */
+const plate: Nameplate = {
+  ratedPower: watt(1.1e6),
+  ratedVoltage: volt(6600),
+  frequency: hertz(50),
+  poles: 6,
+  ratedSpeed: fromRpm(992),
+  efficiency: 0.957,
+  powerFactor: 0.85,
+  ratedCurrent: ampere(118.2),
+  lockedRotorCurrent: ampere(651),
+  lockedRotorTorque: newtonMetre(9053),
+  breakdownTorque: newtonMetre(23_300),
+  lockedRotorPowerFactor: null,
+}
+
+const runUp = (name: string, runningMotors: number): Figure[] => {
+  const input = speedCase(runningMotors)
+  const { counters, motors } = runCase(input)
+  const { microseconds } = timeOf(() => runCase(input), patience)
+  return [
+    figure(`${name}: time of one run-up`, microseconds, 'µs'),
+    figure(`${name}: steps`, counters.steps, '1'),
+    figure(`${name}: evaluations`, counters.evaluations, '1'),
+    figure(`${name}: run-up to 98 % of rated speed`, motors[0]?.start?.timeToCriterion ?? Number.NaN, 's'),
+  ]
+}
+
+/** Run-ups of the speed case, the same written by hand, one estimate and a whole study. */
+export const benchEngine = (study: StudyDocument): Figure[] => {
+  const alone = runUp('run-up, one motor', 0)
+  const input = speedCase()
+  const plain = timeOf(() => plainRunUp(input, 2000, 10), patience).microseconds
+  const estimate = timeOf(() => estimateCircuit(plate), patience).microseconds
+  const from = performance.now()
+  const { cases } = runDocument(study)
+  const whole = performance.now() - from
+  return [
+    ...alone,
+    figure('run-up, one motor: hand-written loop of 2000 fixed steps', plain, 'µs'),
+    figure('run-up, one motor: engine over hand-written loop', (alone[0]?.value ?? Number.NaN) / plain, '1'),
+    ...runUp('run-up, two more motors running', 2),
+    figure('estimate of a circuit from a nameplate', estimate, 'µs'),
+    figure('demo study: time of all cases', whole, 'ms'),
+    figure('demo study: cases', cases.length, '1'),
+  ]
+}
