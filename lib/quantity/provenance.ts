@@ -3,12 +3,6 @@ export const provenanceKinds = ['test', 'guaranteed', 'typical', 'derived', 'ass
 
 export type ProvenanceKind = (typeof provenanceKinds)[number]
 
-/** The kind, and beside it the document, the formula (derived) or the reason (assumed). */
-export interface Provenance {
-  kind: ProvenanceKind
-  source: string
-}
-
 /** The mark before a value and its words in a legend; the same on the screen and in the report. */
 export const provenanceMark: Record<ProvenanceKind, { mark: string; word: string; meaning: string; asks: string }> = {
   test: { mark: '■', word: 'test', meaning: 'from a test report', asks: 'Name the test report.' },
