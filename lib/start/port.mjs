@@ -1,6 +1,9 @@
 // @ts-check
 import net from 'node:net'
 import { Failure } from './failure.mjs'
+import { withLock } from './lock.mjs'
+import { pause } from './pause.mjs'
+import { inRoot } from './root.mjs'
 
 /**
  * @param {number} port 0 = any
@@ -46,3 +49,18 @@ export async function choosePort({ wanted, host, first = 3000, tries = 100 }) {
   }
   throw new Failure(`No free port from ${first} to ${first + tries - 1} on ${host}: set PORT to a free one.`)
 }
+
+/**
+ * Chooses a port and has it opened before any other command of this project chooses one.
+ * @param {Parameters<typeof choosePort>[0]} choice
+ * @param {(port: number) => Promise<void>} open begins to listen; it may take up to a minute
+ * @returns {Promise<number>}
+ */
+export const openPort = (choice, open) =>
+  withLock(inRoot('.data', 'port.lock'), async () => {
+    const port = await choosePort(choice)
+    await open(port)
+    const until = Date.now() + 60_000
+    while ((await tryPort(port, choice.host)) !== null && Date.now() < until) await pause(50)
+    return port
+  })

@@ -3,7 +3,7 @@ import './node-version.mjs'
 import path from 'node:path'
 import { isLoopback, readEnvironment } from './environment.mjs'
 import { runCommand } from './failure.mjs'
-import { choosePort } from './port.mjs'
+import { openPort } from './port.mjs'
 import { prepareApplication, preparePrograms } from './prepare.mjs'
 import { demoPeopleFile, ensureSecrets } from './secrets.mjs'
 import { claimRun } from './service/run-record.mjs'
@@ -51,13 +51,10 @@ async function start(undo) {
   await preparePrograms(say)
   const secrets = ensureSecrets(secretsDir)
   const databaseUrl = await openDatabase(environment, undo)
-  const port = await choosePort({ wanted: environment.port, host })
-  const address = ownAddress(host, port)
   const env = {
     ...process.env,
     ...secrets,
     DATABASE_URL: databaseUrl,
-    BASE_URL: process.env.BASE_URL || address,
     NODE_ENV: development ? 'development' : 'production',
     NEXT_TELEMETRY_DISABLED: '1',
   }
@@ -66,23 +63,29 @@ async function start(undo) {
   if (demo) await seedDemo(databaseUrl, demoPeopleFile(secretsDir), env)
   else if (environment.databaseUrl === null)
     say('No demo people are made where other machines can reach the application (HOST)')
-  const { toolPath } = await import('./tools.mjs')
-  const web = development ? [toolPath('next'), 'dev', '-p', String(port), '-H', host] : [await prepareApplication(say)]
+  const server = development ? null : await prepareApplication(say)
   const { startService } = await import('./service/service.mjs')
-  const service = await startService({
-    web,
-    address,
-    host,
-    port,
-    env,
-    logDir: path.join(dataDir, 'log'),
-    say,
-    undo,
-    onProcesses: (pids) => run.update(address, pids),
+  const { toolPath } = await import('./tools.mjs')
+  let address = ''
+  let restartWorker = async () => {}
+  await openPort({ wanted: environment.port, host }, async (port) => {
+    address = ownAddress(host, port)
+    const service = await startService({
+      web: server ? [server] : [toolPath('next'), 'dev', '-p', String(port), '-H', host],
+      address,
+      host,
+      port,
+      env: { ...env, BASE_URL: process.env.BASE_URL || address },
+      logDir: path.join(dataDir, 'log'),
+      say,
+      undo,
+      onProcesses: (pids) => run.update(address, pids),
+    })
+    restartWorker = service.restartWorker
   })
   if (development) {
     const { watchBundles } = await import('./watch-bundles.mjs')
-    undo.add(await watchBundles(say, service.restartWorker))
+    undo.add(await watchBundles(say, restartWorker))
   }
   const people = demo ? readDemoPeople(demoPeopleFile(secretsDir)) : []
   say(`\nBreakaway is ready at ${address} after ${((performance.now() - began) / 1000).toFixed(1)} s`)

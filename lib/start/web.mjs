@@ -4,7 +4,7 @@ import './node-version.mjs'
 import { pathToFileURL } from 'node:url'
 import { runCommand } from './failure.mjs'
 import { joinDatabase } from './join.mjs'
-import { choosePort } from './port.mjs'
+import { openPort } from './port.mjs'
 import { prepareApplication } from './prepare.mjs'
 
 /** @param {string} line */
@@ -13,9 +13,10 @@ const say = (line) => process.stdout.write(`${line}\n`)
 await runCommand(async () => {
   const { host, port: wanted } = await joinDatabase('npm run web', say)
   const server = await prepareApplication(say)
-  const port = await choosePort({ wanted, host })
-  Object.assign(process.env, { HOSTNAME: host, PORT: String(port) })
-  process.env.BASE_URL ||= `http://${host}:${port}`
-  say(`Web process ${process.pid} on http://${host}:${port}`)
-  await import(pathToFileURL(server).href)
+  await openPort({ wanted, host }, async (port) => {
+    Object.assign(process.env, { HOSTNAME: host, PORT: String(port) })
+    process.env.BASE_URL ||= `http://${host}:${port}`
+    say(`Web process ${process.pid} on http://${host}:${port}`)
+    await import(pathToFileURL(server).href)
+  })
 })
