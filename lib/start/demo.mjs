@@ -3,9 +3,10 @@ import fs from 'node:fs'
 import path from 'node:path'
 import { bundleOf } from './entries.mjs'
 import { Failure } from './failure.mjs'
+import { root } from './root.mjs'
 import { lastLines, runNode } from './run-step.mjs'
 
-/** @typedef {{ name: string, role?: string, email: string, password: string, passphrase?: string }} DemoPerson */
+/** @typedef {{ name: string, role?: string, email: string, password: string, passphrase?: string, keyFile?: string }} DemoPerson */
 
 /**
  * Fills an empty database with the demo plant and its people; a database that holds anything is left as it is (the seed sees to that).
@@ -37,8 +38,11 @@ export function readDemoPeople(peopleFile) {
  */
 export function peopleTable(people) {
   const rows = [
-    ['name', 'role', 'sign-in', 'password', 'signing passphrase'],
-    ...people.map(({ name, role = '', email, password, passphrase = '' }) => [name, role, email, password, passphrase]),
+    ['name', 'role', 'sign-in', 'password', 'signing passphrase', 'signing key'],
+    ...people.map(({ name, role = '', email, password, passphrase = '', keyFile }) => {
+      const key = keyFile ? path.relative(root, keyFile) : ''
+      return [name, role, email, password, passphrase, key]
+    }),
   ]
   const widths = rows[0]?.map((_, column) => Math.max(...rows.map((row) => row[column]?.length ?? 0))) ?? []
   return rows.map((row) =>
