@@ -23,6 +23,7 @@ export type StartOutcome =
   /** Came to a halt, or hangs at a speed below breakdown, with this torque missing to go on. */
   | { kind: 'stalled'; speed: RadianPerSecond; missing: NewtonMetre }
   | { kind: 'never-turned'; missing: NewtonMetre }
+  /** Still on its way at the time limit, or when the network collapsed. */
   | { kind: 'timed-out'; speed: RadianPerSecond }
 
 /** How a machine that was running before the start came through it. */

@@ -5,7 +5,20 @@ import { balanceNear, isStable } from './equilibrium'
 import type { System } from './system'
 
 /** How far from its balance, in parts of synchronous speed, a shaft counts as on its last stretch. */
-const near = 5e-3
+const lastStretch = 5e-3
+
+/**
+ * The stable balance of torques that the turning shafts are close to; null when there is none within `near`, in parts
+ * of synchronous speed. Speeds of shafts at rest, and what else the state holds, stay as they are.
+ */
+export function findBalance(system: System, state: Float64Array, near: number): Float64Array | null {
+  const speeds = Float64Array.from(state)
+  const moving = turningMotors(system)
+  if (moving.length === 0) return speeds
+  if (!balanceNear(system, moving, speeds)) return null
+  const close = moving.every((i) => Math.abs(speeds[i]! - state[i]!) <= near * system.plant.synchronous[i]!)
+  return close && isStable(system, moving, speeds) && system.solveAt(speeds) ? speeds : null
+}
 
 /**
  * Looks whether the starts that are still open have come to where they stay: every shaft at or close to a stable
@@ -14,15 +27,8 @@ const near = 5e-3
  * @returns speeds at that balance, or null when a start is still on its way
  */
 export function findHang(system: System, open: readonly StartCourse[], state: Float64Array): Float64Array | null {
-  const speeds = Float64Array.from(state)
-  const moving = turningMotors(system)
-  if (moving.length > 0) {
-    if (!balanceNear(system, moving, speeds)) return null
-    for (const i of moving) {
-      if (Math.abs(speeds[i]! - state[i]!) > near * system.plant.synchronous[i]!) return null
-    }
-    if (!isStable(system, moving, speeds) || !system.solveAt(speeds)) return null
-  }
+  const speeds = findBalance(system, state, lastStretch)
+  if (speeds === null) return null
   for (const start of open) {
     if (system.resting[start.motor]) continue
     const goal = start.position === 'running' ? start.speedCriterion : start.speedChangeOver

@@ -1,6 +1,6 @@
 import type { Courses } from './course'
-import { balanceNear, isStable, runningEquilibrium } from './equilibrium'
-import { turningMotors } from './hang'
+import { runningEquilibrium } from './equilibrium'
+import { findBalance, turningMotors } from './hang'
 import { createObserver, observationLength } from './observation'
 import type { RunRecord } from './simulate'
 import type { System } from './system'
@@ -30,9 +30,9 @@ export function settledStates(system: System, courses: Courses, record: RunRecor
     return into
   }
   const moving = turningMotors(system)
-  if (!settle(system, moving, speeds)) {
-    return { afterStart: null, afterProcess: null, speeds: Float64Array.from(record.state) }
-  }
+  const balance = findBalance(system, speeds, near)
+  if (balance === null) return { afterStart: null, afterProcess: null, speeds }
+  speeds.set(balance)
   const ended = Float64Array.from(speeds)
   const started = courses.starts.every((start) => start.outcome?.kind === 'started')
   if (!started) return { afterStart: null, afterProcess: null, speeds: ended }
@@ -43,11 +43,4 @@ export function settledStates(system: System, courses: Courses, record: RunRecor
   const afterProcess = carried ? observation() : null
   system.driven = system.plant.driven
   return { afterStart, afterProcess, speeds: ended }
-}
-
-function settle(system: System, moving: readonly number[], speeds: Float64Array): boolean {
-  const from = Float64Array.from(speeds)
-  if (!balanceNear(system, moving, speeds)) return false
-  const close = moving.every((i) => Math.abs(speeds[i]! - from[i]!) < near * system.plant.synchronous[i]!)
-  return close && isStable(system, moving, speeds)
 }

@@ -7,7 +7,7 @@ import { changeOverOf } from '../starters/position'
 import { type BeforeStart, supplyPower, weakestBus } from './before-start'
 import type { Courses, StartCourse } from './course'
 import { type Crossing, firstCrossings } from './crossing'
-import { findHang, hangOutcome } from './hang'
+import { findBalance, findHang, hangOutcome } from './hang'
 import { busVoltages, motorState, placeOf } from './observation'
 import { createRecorder } from './recorder'
 import type { SampleStore } from './sampler'
@@ -35,10 +35,9 @@ export interface RunRecord {
 
 /** Longest step, s. */
 const longest = 1
-/** Torque left, in parts of rated, below which a shaft counts as settled after its start, as worth a look for a hang, as still. */
+/** Torque left, in parts of rated, below which a shaft counts as settled, and as worth a look for a hang. */
 const settledTorque = 1e-5
 const hangingTorque = 4e-3
-const stillTorque = 1e-9
 
 /**
  * Runs a plant up from its state before the start.
@@ -119,7 +118,9 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   function giveUp(t: number): void {
     const late = starts.filter((start) => start.outcome === null && t >= start.at + timeLimit - sameInstant)
-    if (late.length > 0) judgeHanging(late)
+    if (late.length === 0) return
+    judgeHanging(late)
+    for (const start of late) if (system.resting[start.motor]) start.outcome ??= hangOutcome(system, start, state)
     for (const start of late) start.outcome ??= { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
   }
 
@@ -127,8 +128,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   function act(crossings: readonly Crossing[], t: number): { moved: StartCourse[]; anew: boolean } {
     const moved: StartCourse[] = []
     let anew = false
-    for (const { motor, kind, speed } of crossings) {
-      state[motor] = speed
+    for (const { motor, kind } of crossings) {
       if (kind === 'corner-up') system.piece[motor] = system.piece[motor]! + 1
       if (kind === 'corner-down') system.piece[motor] = system.piece[motor]! - 1
       if (kind === 'halt') {
@@ -208,9 +208,12 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   /** Passes over time in which nothing moves, up to the next instant; false where something does move. */
   function skipStillness(t: number, until: number): boolean {
-    if (until - t <= longest || restlessness() > stillTorque || starts.some((start) => start.position === 'open')) {
+    if (until - t <= longest || restlessness() > settledTorque || starts.some((start) => start.position === 'open')) {
       return false
     }
+    const speeds = findBalance(system, state, 1e-5)
+    if (speeds === null) return false
+    state.set(speeds)
     if (!system.derivative(t, state, scratch)) return false
     for (const at of system.integral) {
       if (at < 0) continue
@@ -246,6 +249,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       if (letGo) crossings = []
       if (released !== null && letGo) integrator.cutAt(released)
       else if (crossings.length > 0) integrator.cutAt(crossed)
+      // The crossed speed itself, so that a shaft that halts stands still exactly.
+      for (const { motor, speed } of crossings) state[motor] = speed
       if (!recorder.follow(!letGo && crossings.length === 0)) return collapsed(integrator.time)
     }
     const t = integrator.time
