@@ -1,5 +1,6 @@
 import { DomainError } from '../errors'
 import { finishReport } from './finish/finish-report'
+import { computeHandCheck } from './hand-check/compute-hand-check'
 import { renderPages } from './render-pages'
 import type { ReportInput } from './report-input'
 import { glyphIssues } from './type/printable'
@@ -15,6 +16,8 @@ export const renderReport = async (input: ReportInput): Promise<Uint8Array> => {
   const issues = glyphIssues({ document, revision })
   const first = issues[0]
   if (first) throw new DomainError('unsupported', first.message, issues)
-  const pages = await renderPages(input, english)
-  return finishReport(pages, input, english)
+  const handCheck = input.handCheck === undefined ? computeHandCheck(document) : input.handCheck
+  const complete = { ...input, handCheck }
+  const pages = await renderPages(complete, english)
+  return finishReport(pages, complete, english)
 }

@@ -67,6 +67,6 @@ export interface ReportInput {
   revision: ReportRevision
   /** A draft carries a watermark and no signature fields. */
   draft: boolean
-  /** Null or absent: the appendix prints the hand calculation and says that the tool's figure is missing. */
+  /** Absent: computed when the report is rendered. Null: the appendix says that the program's figures are missing. */
   handCheck?: HandCheckResult | null
 }

@@ -23,7 +23,7 @@ import { plots } from './sections/plots'
 import { fullTables, results } from './sections/results/results'
 import { scope } from './sections/scope'
 import type { Section } from './sections/section'
-import { diagramPage, system } from './sections/system'
+import { diagramPages, system } from './sections/system'
 import { verdictPage } from './sections/verdict-page'
 import { contentWidth, type PageFormat, portrait } from './theme'
 import { SourceList } from './values/source-list'
@@ -71,7 +71,7 @@ export const studyReport = (input: ReportInput, words: Wording, paper: Paper): R
   const written = (sections: readonly Section[]) =>
     sections.map((section, i) => stack(section(context), { breakBefore: i > 0 && fresh.has(section) }))
   const opening = written([scope, criteria, system])
-  const diagram = diagramPage(context)
+  const diagram = diagramPages(context)
   const rest = written([...middle, ...appendices])
   const listing = contents(context, paper.headings)
   const contentsHead = heading(paper, context.width, {
@@ -84,14 +84,14 @@ export const studyReport = (input: ReportInput, words: Wording, paper: Paper): R
   // A break is honoured on the direct children of a page only.
   const page = (format: PageFormat, children: readonly ReactElement[]) =>
     createElement(Page, { size: [format.width, format.height], layout: pageChrome(paper, format, chrome) }, ...children)
-  return (
-    <Document>
-      {page(portrait, front)}
-      {page(portrait, verdict)}
-      {page(portrait, [contentsHead, ...listing])}
-      {page(portrait, opening)}
-      {page(diagram.format, diagram.content)}
-      {page(portrait, rest)}
-    </Document>
+  return createElement(
+    Document,
+    {},
+    page(portrait, front),
+    page(portrait, verdict),
+    page(portrait, [contentsHead, ...listing]),
+    page(portrait, opening),
+    ...diagram.map((one) => page(one.format, one.content)),
+    page(portrait, rest),
   )
 }

@@ -16,12 +16,13 @@ export interface BusLabel {
   items: (x: number, y: number) => readonly SceneItem[]
 }
 
-/** Tag and nominal voltage of a bus, and its name beneath where there is room for it. */
-export const busLabel = (bus: BusRecord, detail: Detail): BusLabel => {
+/** Tag and nominal voltage of a bus, and beneath them its name, where there is room for it, and a note. */
+export const busLabel = (bus: BusRecord, detail: Detail, note = ''): BusLabel => {
   const tag = wrapText(bus.tag, widest, size, 'semibold')
   const last = tag.at(-1) ?? ''
   const offset = textWidth(last, size, 'semibold') + 1
-  const name = bus.name === '' || detail === 'brief' ? [] : wrapText(bus.name, widest, small)
+  const below = [...(bus.name === '' || detail === 'brief' ? [] : [bus.name]), ...(note === '' ? [] : [note])]
+  const name = below.flatMap((one) => wrapText(one, widest, small))
   const lines = tag.length + name.length
   return {
     width: Math.max(

@@ -3,9 +3,10 @@ import type { SupplyRecord } from '@/lib/study/document/network-records'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import { busLabel } from './bus-label'
 import type { Bar, Cell, DiagramGrid } from './diagram-cells'
-import { type Branch, type Device, networkTrees, type TreeBus } from './network-tree'
+import type { Branch, Device, Feeder, TreeBus } from './network-tree'
 import {
   capacitorSymbol,
+  comingSymbol,
   lineSymbol,
   loadSymbol,
   motorSymbol,
@@ -13,7 +14,7 @@ import {
   tieSymbol,
   transformerSymbol,
 } from './symbols'
-import { branchLines, deviceLines, supplyLines } from './value-lines'
+import { branchLines, deviceLines, supplyLines, type ValueLines } from './value-lines'
 import { type Detail, valueSheet } from './value-sheet'
 
 export interface GridContext {
@@ -35,48 +36,63 @@ const deviceSymbol =
     return motorSymbol(x, y, schedule?.starts.some((start) => start.motor === device.record.id) ?? false)
   }
 
+/** One sheet of a diagram: the trees on it, and the buses whose part stands on a sheet of its own. */
+export interface DiagramSheet {
+  trees: readonly TreeBus[]
+  apart: ReadonlySet<string>
+  /** Bus that this sheet goes on from; null on the first sheet, which begins at the source. */
+  from: string | null
+}
+
 /** Gives every feeder a row of its own, so that lines run level and cannot cross. */
-export const diagramGrid = (context: GridContext): DiagramGrid => {
+export const diagramGrid = (context: GridContext, { trees, apart, from }: DiagramSheet): DiagramGrid => {
   const { document, supply, one, detail } = context
   const cells: Cell[] = []
   const bars: Bar[] = []
+  const add = (cell: Omit<Cell, 'sheet'>, words: ValueLines) =>
+    cells.push({ ...cell, sheet: valueSheet(words, detail) })
 
-  const lay = (bus: TreeBus, row: number, incoming: number): number => {
+  /** Lays a feeder from a row on and gives the row after it. */
+  const layFeeder = (feeder: Feeder, depth: number, row: number): number => {
+    if (feeder.kind === 'device') {
+      const words = deviceLines(document, feeder.device, one)
+      add({ depth, row, symbol: deviceSymbol(context, feeder.device), through: false }, words)
+      return row + 1
+    }
+    if (feeder.kind === 'tie') {
+      const { tag, lines } = branchLines(feeder.branch)
+      const told = feeder.told ? [`see ${feeder.to.tag}`] : lines
+      add({ depth, row, symbol: tieSymbol, through: false }, { tag: `${tag} to ${feeder.to.tag}`, lines: told })
+      return row + 1
+    }
+    const { branches, child } = feeder
+    const elsewhere = apart.has(child.bus.id)
+    for (const [i, branch] of branches.entries()) {
+      const { tag, lines } = branchLines(branch)
+      const words = elsewhere
+        ? { tag: `${tag} to ${child.bus.tag}`, lines: ['on a sheet of its own', ...lines] }
+        : { tag, lines }
+      add({ depth, row: row + i, symbol: elsewhere ? tieSymbol : branchSymbol(branch), through: !elsewhere }, words)
+    }
+    const after = row + branches.length
+    return elsewhere ? after : Math.max(after, layBus(child, depth + 1, row, branches.length))
+  }
+
+  const layBus = (bus: TreeBus, depth: number, row: number, incoming: number, note = ''): number => {
     let next = row
     let lastRow = row + incoming - 1
-    const { depth } = bus
     for (const feeder of bus.feeders) {
-      const from = next
-      lastRow = Math.max(lastRow, from)
-      if (feeder.kind === 'branch') {
-        const { branches, child } = feeder
-        for (const [i, branch] of branches.entries()) {
-          const sheet = valueSheet(branchLines(branch), detail)
-          cells.push({ depth, row: from + i, symbol: branchSymbol(branch), sheet, through: true })
-        }
-        lastRow = Math.max(lastRow, from + branches.length - 1)
-        next = Math.max(from + branches.length, lay(child, from, branches.length))
-        continue
-      }
-      if (feeder.kind === 'device') {
-        const sheet = valueSheet(deviceLines(document, feeder.device, one), detail)
-        cells.push({ depth, row: from, symbol: deviceSymbol(context, feeder.device), sheet, through: false })
-      } else {
-        const { tag, lines } = branchLines(feeder.branch)
-        const sheet = valueSheet(
-          { tag: `${tag} to ${feeder.to.tag}`, lines: feeder.told ? [`see ${feeder.to.tag}`] : lines },
-          detail,
-        )
-        cells.push({ depth, row: from, symbol: tieSymbol, sheet, through: false })
-      }
-      next += 1
+      lastRow = Math.max(lastRow, next + (feeder.kind === 'branch' ? feeder.branches.length - 1 : 0))
+      next = layFeeder(feeder, depth, next)
     }
-    bars.push({ depth, firstRow: row, lastRow, label: busLabel(bus.bus, detail) })
+    bars.push({ depth, firstRow: row, lastRow, label: busLabel(bus.bus, detail, note) })
     return Math.max(next, row + incoming)
   }
 
-  cells.push({ depth: -1, row: 0, symbol: sourceSymbol, sheet: valueSheet(supplyLines(supply), detail), through: true })
+  const start = { depth: -1, row: 0, through: true }
+  if (from === null) add({ ...start, symbol: sourceSymbol }, supplyLines(supply))
+  else add({ ...start, symbol: comingSymbol }, { tag: `from ${from}`, lines: [] })
   let rows = 0
-  for (const tree of networkTrees(document.plant, supply.bus)) rows = lay(tree, rows, 1)
+  for (const [i, tree] of trees.entries()) rows = layBus(tree, 0, rows, 1, i === 0 ? '' : 'no way to the supply')
   return { cells, bars, rows }
 }

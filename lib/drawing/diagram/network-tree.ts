@@ -24,8 +24,6 @@ export type Feeder =
 
 export interface TreeBus {
   bus: BusRecord
-  /** Steps from the left. */
-  depth: number
   feeders: readonly Feeder[]
 }
 
@@ -78,7 +76,7 @@ export const networkTrees = (plant: PlantRecords, supplyBus: string): readonly T
   const reached = new Set<string>()
   const tied = new Set<Branch>()
 
-  const grow = (busId: string, depth: number, parent: ReadonlyMap<string, string | null>): TreeBus => {
+  const grow = (busId: string, parent: ReadonlyMap<string, string | null>): TreeBus => {
     reached.add(busId)
     const here = (branches.get(busId) ?? []).filter((branch) => buses.has(other(branch, busId)))
     const children = [...new Set(here.map((branch) => other(branch, busId)))].filter((id) => parent.get(id) === busId)
@@ -88,13 +86,12 @@ export const networkTrees = (plant: PlantRecords, supplyBus: string): readonly T
     })
     return {
       bus: buses.get(busId)!,
-      depth,
       feeders: [
         ...children.map(
           (id): Feeder => ({
             kind: 'branch',
             branches: here.filter((branch) => other(branch, busId) === id),
-            child: grow(id, depth + 1, parent),
+            child: grow(id, parent),
           }),
         ),
         ...devicesAt(plant, busId).map((device): Feeder => ({ kind: 'device', device })),
@@ -110,7 +107,7 @@ export const networkTrees = (plant: PlantRecords, supplyBus: string): readonly T
   const trees: TreeBus[] = []
   for (const root of [supplyBus, ...buses.keys()]) {
     if (reached.has(root) || !buses.has(root)) continue
-    trees.push(grow(root, 0, parents(root, branches)))
+    trees.push(grow(root, parents(root, branches)))
   }
   return trees
 }

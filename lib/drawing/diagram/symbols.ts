@@ -120,6 +120,24 @@ export const tieSymbol = (x: number, y: number): readonly SceneItem[] => [
   ),
 ]
 
+/** Beginning of a sheet that goes on from another bus. */
+export const comingSymbol = (x: number, y: number): readonly SceneItem[] => [
+  path(
+    line(
+      [
+        [x, y - 1.4],
+        [x + 1.8, y - 1.4],
+        [x + 3.2, y],
+        [x + 1.8, y + 1.4],
+        [x, y + 1.4],
+      ],
+      true,
+    ),
+    { ...stroke, width: 0.2, fill: 'sheet' },
+  ),
+  path(wire(x + 3.2, x + symbolWidth, y), stroke),
+]
+
 /** The supply: a source behind its impedance. */
 export const sourceSymbol = (x: number, y: number): readonly SceneItem[] => {
   const r = 3

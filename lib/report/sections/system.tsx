@@ -1,8 +1,10 @@
 import type { ReactElement } from 'react'
-import { singleLineDiagram } from '@/lib/drawing/single-line-diagram'
+import type { Scene } from '@/lib/drawing/scene'
+import { singleLineSheets } from '@/lib/drawing/single-line-diagram'
+import type { StudyDocument } from '@/lib/study/document/study-document'
 import { block } from '../paper/block'
 import { sceneBlock, sceneScale } from '../paper/scene-pdf'
-import { paragraph, typedText } from '../paper/text-block'
+import { caption, paragraph, typedText } from '../paper/text-block'
 import { chapter, type ReportContext, subsection } from '../report-context'
 import { contentHeight, contentWidth, landscape, largeLandscape, type PageFormat, small } from '../theme'
 import type { Section } from './section'
@@ -21,35 +23,53 @@ export const system: Section = (context) => {
 }
 
 const captionHeight = 46
+/** Type of the diagram on paper, in points in a millimetre of the scene, that is still read without effort. */
+const legible = 2.2
 
 export interface DiagramPage {
   format: PageFormat
   content: readonly ReactElement[]
 }
 
-/** The single-line diagram on a page of its own, as large as it can be; a plant too large for full sheets gets brief ones on a larger page. */
-export const diagramPage = (context: ReportContext): DiagramPage => {
+const room = (format: PageFormat) => ({ width: contentWidth(format), height: contentHeight(format) - captionHeight })
+
+const fits = (scenes: readonly Scene[], format: PageFormat): boolean => {
+  const { width, height } = room(format)
+  return scenes.every((scene) => sceneScale(scene, width, height) >= legible)
+}
+
+/** The plant on one page where it is legible there, else on as few as its boards can be parted into. */
+const chosen = (document: StudyDocument): { format: PageFormat; scenes: readonly Scene[] } => {
+  for (const mostRows of [Number.POSITIVE_INFINITY, 30, 24, 19, 15, 12, 10]) {
+    const full = singleLineSheets(document, { mostRows })
+    for (const format of [landscape, largeLandscape]) if (fits(full, format)) return { format, scenes: full }
+    const brief = singleLineSheets(document, { mostRows, detail: 'brief' })
+    if (fits(brief, largeLandscape)) return { format: largeLandscape, scenes: brief }
+  }
+  return { format: largeLandscape, scenes: singleLineSheets(document, { mostRows: 10, detail: 'brief' }) }
+}
+
+/** The single-line diagram, a page a sheet. */
+export const diagramPages = (context: ReportContext): readonly DiagramPage[] => {
   const { paper, input, words } = context
   const { system: say } = words.records
+  const { format, scenes } = chosen(input.document)
+  const { width, height } = room(format)
+  const title = subsection({ ...context, width }, 'diagram', say.diagram)
   const first = input.document.plant.supplies[0]
-  const tried = [
-    { format: landscape, detail: 'full' as const, least: 2.2 },
-    { format: largeLandscape, detail: 'full' as const, least: 2.2 },
-    { format: largeLandscape, detail: 'brief' as const, least: 0 },
-  ]
-  for (const { format, detail, least } of tried) {
-    const scene = singleLineDiagram(input.document, { detail })
-    const width = contentWidth(format)
-    const title = () => subsection({ ...context, width }, 'diagram', say.diagram)
-    if (!scene || !first)
-      return { format: landscape, content: [title(), ...paragraph(paper, say.noDiagram, { width })] }
-    const height = contentHeight(format) - captionHeight
+  if (!first || scenes.length === 0)
+    return [{ format: landscape, content: [title, ...paragraph(paper, say.noDiagram, { width })] }]
+  return scenes.map((scene, i) => {
     const scale = sceneScale(scene, width, height)
-    if (scale < least) continue
-    const note = paragraph(paper, say.diagramNote(first.tag), { width, ...small, ink: 'soft', below: 4 })
-    const rest = Math.max(0, (height - scene.height * scale) / 3)
-    const space = block(paper, { width, height: Math.min(rest, 30) + 1 }, () => undefined)
-    return { format, content: [title(), ...note, space, sceneBlock(paper, scene, { width, height })] }
-  }
-  throw new Error('The last attempt accepts every scale.')
+    const space = Math.min(30, Math.max(0, (height - scene.height * scale) / 3)) + 1
+    return {
+      format,
+      content: [
+        ...(i === 0 ? [title] : caption(paper, say.goesOn(i + 1, scenes.length), { width })),
+        ...(i === 0 ? paragraph(paper, say.diagramNote(first.tag), { width, ...small, ink: 'soft', below: 4 }) : []),
+        block(paper, { width, height: space }, () => undefined),
+        sceneBlock(paper, scene, { width, height }),
+      ],
+    }
+  })
 }

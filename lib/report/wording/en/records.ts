@@ -33,7 +33,7 @@ export const records = {
     diagramNote: (supply: string) =>
       `Supply condition “${supply}” is drawn at the source; all conditions are in the input data.`,
     noDiagram: 'There is no supply at a bus of the plant, so no diagram can be drawn.',
-    caption: (title: string) => title,
+    goesOn: (sheet: number, of: number) => `Single-line diagram, sheet ${sheet} of ${of}`,
   },
   input: {
     title: 'Input data',
