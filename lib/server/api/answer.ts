@@ -20,5 +20,8 @@ const problemHeaders = { 'content-type': 'application/problem+json', 'cache-cont
 /** A refusal as a problem document (RFC 9457). */
 function problem({ code, message, issues, detail }: DomainError): Response {
   const status = httpStatus[code]
-  return Response.json({ title: message, status, code, issues, detail: detail ?? null }, { status, headers: problemHeaders })
+  return Response.json(
+    { title: message, status, code, issues, detail: detail ?? null },
+    { status, headers: problemHeaders },
+  )
 }

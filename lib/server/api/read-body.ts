@@ -4,7 +4,10 @@ import { DomainError } from '@/lib/errors'
 const megabytes = (bytes: number): string => `${Math.round((bytes / 2 ** 20) * 10) / 10} MB`
 
 const tooLarge = (limit: number) =>
-  new DomainError('too-large', `This is larger than the ${megabytes(limit)} that are taken here: choose a smaller file.`)
+  new DomainError(
+    'too-large',
+    `This is larger than the ${megabytes(limit)} that are taken here: choose a smaller file.`,
+  )
 
 /**
  * Reads a request's body up to a limit. A length that is announced too large is refused at once; one that is not announced, or

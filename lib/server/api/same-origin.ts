@@ -10,8 +10,12 @@ import { trustedOrigins } from '../origins'
 export function requireSameOrigin(request: Request, origins: readonly string[] = trustedOrigins(env())): void {
   const origin = request.headers.get('origin')
   const site = request.headers.get('sec-fetch-site')
-  const foreign = (origin !== null && !origins.includes(origin)) || (site !== null && site !== 'same-origin' && site !== 'none')
+  const foreign =
+    (origin !== null && !origins.includes(origin)) || (site !== null && site !== 'same-origin' && site !== 'none')
   if (foreign || (origin === null && site === null && request.headers.has('cookie'))) {
-    throw new DomainError('forbidden', 'This request came from another site: open Breakaway itself and repeat it there.')
+    throw new DomainError(
+      'forbidden',
+      'This request came from another site: open Breakaway itself and repeat it there.',
+    )
   }
 }

@@ -17,7 +17,10 @@ export interface ClaimedReport {
 }
 
 /** Takes a report that is still to be rendered; null when it is done, or given up. */
-export function claimReport(db: Database, { organisationId, reportId }: JobIds['render']): Promise<ClaimedReport | null> {
+export function claimReport(
+  db: Database,
+  { organisationId, reportId }: JobIds['render'],
+): Promise<ClaimedReport | null> {
   return db.$transaction(async (tx) => {
     await enterAsJob(tx, organisationId)
     const taken = await tx.report.updateMany({

@@ -36,7 +36,8 @@ export function claimRun(db: Database, { organisationId, runId }: JobIds['comput
     const { projectId, studyId, attempt } = await tx.studyRun.findFirstOrThrow({ where: { id: runId } })
     try {
       const { document, problems } = await loadLiveStudy(tx, studyId)
-      if (!document) throw new DomainError('invalid', 'The study is not complete any more: correct what is marked.', problems)
+      if (!document)
+        throw new DomainError('invalid', 'The study is not complete any more: correct what is marked.', problems)
       const inputHash = await inputHashOf(document)
       await tx.studyRun.updateMany({ where: open, data: { inputHash, of: document.cases.length } })
       return { organisationId, projectId, studyId, runId, attempt, inputHash, document }

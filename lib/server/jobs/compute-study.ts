@@ -48,7 +48,12 @@ export async function computeStudyJob(
       await failRun(db, run, error.message)
       return
     }
-    if (last) await failRun(db, run, 'The computation broke off because of an error here, not in your records: ask for it again.')
+    if (last)
+      await failRun(
+        db,
+        run,
+        'The computation broke off because of an error here, not in your records: ask for it again.',
+      )
     throw error
   }
 }

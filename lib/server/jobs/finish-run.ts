@@ -52,7 +52,10 @@ export async function storeResults(db: Database, run: ClaimedRun, result: StudyR
         series: packed[position] ?? null,
       })),
     })
-    return { action: 'computing-finished', payload: { runId, word: result.overall.word, counts: result.overall.counts } }
+    return {
+      action: 'computing-finished',
+      payload: { runId, word: result.overall.word, counts: result.overall.counts },
+    }
   })
 }
 

@@ -27,7 +27,8 @@ export async function renderReportJob(
       await failReport(db, report, error.message)
       return
     }
-    if (last) await failReport(db, report, 'The report could not be rendered because of an error here: ask for it again.')
+    if (last)
+      await failReport(db, report, 'The report could not be rendered because of an error here: ask for it again.')
     throw error
   }
 }

@@ -8,7 +8,11 @@ const pause = 1000
  * Listens on a channel of the database and comes back by itself after a lost connection. What is announced meanwhile is missed, so the
  * listener must not rely on it alone.
  */
-export function listenTo(databaseUrl: string, channel: string, onWord: (word: string) => void): { close(): Promise<void> } {
+export function listenTo(
+  databaseUrl: string,
+  channel: string,
+  onWord: (word: string) => void,
+): { close(): Promise<void> } {
   let client: pg.Client | null = null
   let closed = false
   let retry: NodeJS.Timeout | undefined
@@ -17,7 +21,11 @@ export function listenTo(databaseUrl: string, channel: string, onWord: (word: st
     if (!closed) retry = setTimeout(connect, pause)
   }
   const connect = () => {
-    const fresh = new pg.Client({ connectionString: databaseUrl, keepAlive: true, application_name: 'breakaway-listen' })
+    const fresh = new pg.Client({
+      connectionString: databaseUrl,
+      keepAlive: true,
+      application_name: 'breakaway-listen',
+    })
     client = fresh
     let over = false
     const lost = () => {

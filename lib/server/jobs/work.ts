@@ -24,7 +24,11 @@ const patience = 15_000
  * Takes jobs from the queue until it is stopped: woken as soon as one is put in, and looking by itself in case a word was missed.
  * Stopping aborts what runs and gives it back to the queue.
  */
-export async function startWork(databaseUrl: string, db: Database, workshop: Workshop): Promise<{ stop(): Promise<void> }> {
+export async function startWork(
+  databaseUrl: string,
+  db: Database,
+  workshop: Workshop,
+): Promise<{ stop(): Promise<void> }> {
   const boss = await openBoss(databaseUrl, 'work')
   const stopping = new AbortController()
   const running = new Set<Promise<void>>()

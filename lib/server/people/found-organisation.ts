@@ -12,7 +12,12 @@ import { env } from '../env'
 const years = 25
 
 /** Founds an organisation with its certificate authority; whoever founds it is its first administrator. */
-export async function foundOrganisation(tx: Tx, founder: Actor, { id, name }: { id: string; name: string }, at: Date): Promise<void> {
+export async function foundOrganisation(
+  tx: Tx,
+  founder: Actor,
+  { id, name }: { id: string; name: string },
+  at: Date,
+): Promise<void> {
   await enterAsFounder(tx, id)
   await tx.organisation.create({ data: { id, name, createdAt: at, auditHash: chainStart } })
   await tx.membership.create({
@@ -34,6 +39,10 @@ export async function foundOrganisation(tx: Tx, founder: Actor, { id, name }: { 
   })
   const head = await lockHead(tx, id, null)
   await appendEvents(tx, head, founder, at, [
-    { action: 'organisation-founded', subject: { kind: 'organisation', id }, payload: { name, authority: fingerprint } },
+    {
+      action: 'organisation-founded',
+      subject: { kind: 'organisation', id },
+      payload: { name, authority: fingerprint },
+    },
   ])
 }

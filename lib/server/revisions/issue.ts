@@ -26,6 +26,10 @@ export async function withdraw(context: WriteContext, row: RevisionWithSubject, 
   return moveRevision(context, row, 'withdraw', reason)
 }
 
-async function register({ tx, place: { organisationId }, at }: WriteContext, revisionId: string, sha256: string): Promise<void> {
+async function register(
+  { tx, place: { organisationId }, at }: WriteContext,
+  revisionId: string,
+  sha256: string,
+): Promise<void> {
   await tx.registerEntry.create({ data: { organisationId, kind: 'report', digest: sha256, subjectId: revisionId, at } })
 }

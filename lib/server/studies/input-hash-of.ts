@@ -27,7 +27,9 @@ export function inputHashOf(document: StudyDocument): Promise<string> {
 }
 
 /** The same for a page that only shows whether results are still those of the records: a document that cannot be computed has none. */
-export async function inputHashIfAny(document: StudyDocument): Promise<{ hash: string | null; refusal: DomainError | null }> {
+export async function inputHashIfAny(
+  document: StudyDocument,
+): Promise<{ hash: string | null; refusal: DomainError | null }> {
   try {
     return { hash: await inputHashOf(document), refusal: null }
   } catch (error) {
