@@ -1,0 +1,48 @@
+import AxeBuilder from '@axe-core/playwright'
+import { signIn } from './pages/session'
+import { openStudy } from './pages/study'
+import { expect, test } from './support/test'
+
+const problems = async (page: import('@playwright/test').Page) => {
+  const { violations } = await new AxeBuilder({ page }).analyze()
+  return violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(' ')).join(', ')}`)
+}
+
+test('pages without an account have no accessibility violation', async ({ page }) => {
+  for (const address of ['/sign-in', '/verify']) {
+    await page.goto(address)
+    await expect(page.getByRole('heading', { level: 1 })).toBeVisible()
+    expect(await problems(page), address).toEqual([])
+  }
+})
+
+test('records, cases, results, review and issue have no accessibility violation and fit a narrow screen', async ({
+  page,
+}) => {
+  await signIn(page, 'Lindqvar')
+  const study = await openStudy(page)
+  await page.goto('/projects')
+  await page.getByRole('link', { name: 'Open plant records' }).first().click()
+  await page.waitForURL(/\/plant\//)
+  const plant = new URL(page.url()).pathname.replace(/\/[^/]+$/, '')
+  const addresses = [
+    '/projects',
+    '/profile',
+    ...['bus', 'supply', 'motor', 'driven-load'].map((kind) => `${plant}/${kind}`),
+    ...['cases', 'cases/limits', 'cases/schedules', 'cases/settings', 'results', 'review', 'issue'].map(
+      (part) => `${study}/${part}`,
+    ),
+  ]
+  for (const address of addresses) {
+    await page.goto(address)
+    await expect(page.getByRole('heading', { level: 1 }).first()).toBeVisible()
+    expect(await problems(page), address).toEqual([])
+  }
+  await page.setViewportSize({ width: 390, height: 800 })
+  for (const address of addresses) {
+    await page.goto(address)
+    await expect(page.getByRole('heading', { level: 1 }).first()).toBeVisible()
+    const wider = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth)
+    expect(wider, address).toBeLessThanOrEqual(1)
+  }
+})

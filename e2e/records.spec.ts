@@ -1,0 +1,56 @@
+import { atAnotherDesk, signIn } from './pages/session'
+import { expect, test } from './support/test'
+
+const buses = async (page: import('@playwright/test').Page): Promise<void> => {
+  await page.goto('/projects')
+  await page.getByRole('link', { name: 'Open plant records' }).first().click()
+  await page.waitForURL(/\/plant\//)
+}
+
+test('a value is kept as typed and shown as understood; nonsense is refused beside its field', async ({ page }) => {
+  await signIn(page, 'Lindqvar')
+  await buses(page)
+  await page.getByRole('button', { name: /^Add bus/ }).click()
+  await page.getByLabel('Tag', { exact: true }).fill('TEST BUS')
+  const voltage = page.getByLabel(/Nominal/).first()
+  for (const [typed, sentence] of [
+    ['eleven kV', /number|voltage|read/i],
+    ['-11 kV', /negative|above|greater|positive/i],
+    ['11', /unit/i],
+    ['11 kg', /unit|voltage/i],
+  ] as const) {
+    await voltage.fill(typed)
+    await voltage.blur()
+    await expect(page.getByText(sentence).first()).toBeVisible()
+    await expect(voltage).toHaveValue(typed)
+  }
+  await voltage.fill('11 kV')
+  await page.getByRole('button', { name: /^(Save|Add) bus|^Save/ }).click()
+  await expect(page.getByRole('cell', { name: /TEST BUS/ }).first()).toBeVisible()
+})
+
+test('what was typed survives a reload', async ({ page }) => {
+  await signIn(page, 'Lindqvar')
+  await buses(page)
+  await page.getByRole('button', { name: /^Add bus/ }).click()
+  await page.getByLabel('Tag', { exact: true }).fill('HALF TYPED')
+  await page.reload()
+  await page.getByRole('button', { name: /^Add bus/ }).click()
+  await expect(page.getByLabel('Tag', { exact: true })).toHaveValue('HALF TYPED')
+})
+
+test('a stale save names whose change it met and keeps both texts', async ({ browser, page }) => {
+  await signIn(page, 'Lindqvar')
+  await buses(page)
+  const other = await atAnotherDesk(browser, 'Lindqvar')
+  await buses(other)
+  for (const desk of [page, other]) await desk.getByRole('button', { name: 'Open S33' }).click()
+  await page.getByLabel('Name').fill('Station, first desk')
+  await page.getByRole('button', { name: /^Save/ }).click()
+  await expect(page.getByText('Station, first desk').first()).toBeVisible()
+  await other.getByLabel('Name').fill('Station, second desk')
+  await other.getByRole('button', { name: /^Save/ }).click()
+  await expect(other.getByText(/A\. Lindqvar/).first()).toBeVisible()
+  await expect(other.getByText('Station, first desk').first()).toBeVisible()
+  await expect(other.getByLabel('Name').first()).toHaveValue('Station, second desk')
+})
