@@ -29,9 +29,9 @@ export async function writeReport(
   result: StudyResult,
   { date, entry }: { date: string; entry: string },
 ): Promise<void> {
-  const bytes = await renderReport(
+  const { pdf } = await renderReport(
     { document, result, revision: await draftOf(document, date), draft: true },
     { entry },
   )
-  await writeFile(path.join(folder, 'report.pdf'), bytes)
+  await writeFile(path.join(folder, 'report.pdf'), pdf)
 }

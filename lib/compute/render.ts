@@ -1,4 +1,5 @@
 import type { ReportInput } from '../report/report-input'
+import type { RenderedReport } from './render.worker'
 import { runInThread } from './thread-pool'
 
 export interface RenderOptions {
@@ -10,8 +11,8 @@ export interface RenderOptions {
 }
 
 /** Renders a report in a thread of this process, so that neither a request nor a page waits for it. */
-export const renderReport = (input: ReportInput, options: RenderOptions): Promise<Uint8Array> =>
-  runInThread<Uint8Array>(input, {
+export const renderReport = (input: ReportInput, options: RenderOptions): Promise<RenderedReport> =>
+  runInThread<RenderedReport>(input, {
     entry: options.entry,
     name: 'render',
     milliseconds: options.milliseconds ?? 240_000,

@@ -19,8 +19,8 @@ const input = { draft: true } as ReportInput
 afterAll(() => closeThreads())
 
 test('the bytes of a finished report come back whole', async () => {
-  const entry = program('done', 'return new Uint8Array([37, 80, 68, 70, input.draft ? 1 : 0])')
-  expect(await renderReport(input, { entry })).toEqual(new Uint8Array([37, 80, 68, 70, 1]))
+  const entry = program('done', 'return { pdf: new Uint8Array([37, 80, 68, 70, input.draft ? 1 : 0]), pages: 1 }')
+  expect(await renderReport(input, { entry })).toEqual({ pdf: new Uint8Array([37, 80, 68, 70, 1]), pages: 1 })
 })
 
 test('a report that never ends is ended at its time with a sentence', async () => {
