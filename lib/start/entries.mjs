@@ -10,6 +10,7 @@ export const entries = {
   worker: 'lib/server/jobs/main.ts',
   render: 'lib/compute/render.worker.ts',
   compute: 'lib/compute/node.worker.ts',
+  verify: 'lib/seal/verify.worker.ts',
   study: 'lib/cli/main.ts',
   bench: 'lib/cli/bench.ts',
   seed: 'prisma/seed.ts',

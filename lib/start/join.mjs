@@ -2,6 +2,7 @@
 import { readEnvironment } from './environment.mjs'
 import { Failure } from './failure.mjs'
 import { preparePrograms } from './prepare.mjs'
+import { programEnvironment } from './program-environment.mjs'
 import { ensureSecrets } from './secrets.mjs'
 
 /**
@@ -19,11 +20,8 @@ export async function joinDatabase(command, say) {
     )
   }
   await preparePrograms(say)
-  Object.assign(process.env, ensureSecrets(environment.secretsDir), {
-    DATABASE_URL: environment.databaseUrl,
-    NODE_ENV: 'production',
-    NEXT_TELEMETRY_DISABLED: '1',
-  })
+  const secrets = ensureSecrets(environment.secretsDir)
+  Object.assign(process.env, programEnvironment({ databaseUrl: environment.databaseUrl, secrets }))
   const { bringUpToDate } = await import('./database.mjs')
   await bringUpToDate(environment.databaseUrl)
   return environment

@@ -5,6 +5,7 @@ import { isLoopback, readEnvironment } from './environment.mjs'
 import { runCommand } from './failure.mjs'
 import { openPort } from './port.mjs'
 import { prepareApplication, preparePrograms } from './prepare.mjs'
+import { programEnvironment } from './program-environment.mjs'
 import { demoPeopleFile, ensureSecrets } from './secrets.mjs'
 import { claimRun } from './service/run-record.mjs'
 import { runUntilStopped } from './undo-list.mjs'
@@ -51,13 +52,7 @@ async function start(undo) {
   await preparePrograms(say)
   const secrets = ensureSecrets(secretsDir)
   const databaseUrl = await openDatabase(environment, undo)
-  const env = {
-    ...process.env,
-    ...secrets,
-    DATABASE_URL: databaseUrl,
-    NODE_ENV: development ? 'development' : 'production',
-    NEXT_TELEMETRY_DISABLED: '1',
-  }
+  const env = { ...process.env, ...programEnvironment({ databaseUrl, secrets, development }) }
   const { peopleTable, readDemoPeople, seedDemo } = await import('./demo.mjs')
   const demo = environment.databaseUrl === null && isLoopback(host)
   if (demo) await seedDemo(databaseUrl, demoPeopleFile(secretsDir), env)

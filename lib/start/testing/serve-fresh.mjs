@@ -2,8 +2,8 @@
 import crypto from 'node:crypto'
 import { seedDemo } from '../demo.mjs'
 import { prepareApplication, preparePrograms } from '../prepare.mjs'
+import { programEnvironment } from '../program-environment.mjs'
 import { inRoot } from '../root.mjs'
-import { secretNames } from '../secrets.mjs'
 import { startService } from '../service/service.mjs'
 import { joinTestCluster, leaveTestCluster } from './cluster.mjs'
 import { copyTemplate, ensureTemplate } from './template.mjs'
@@ -27,14 +27,9 @@ export async function serveFresh({ port, peopleFile, say, undo }) {
   undo.add(database.drop)
   const host = '127.0.0.1'
   const address = `http://${host}:${port}`
-  const env = {
-    ...process.env,
-    ...Object.fromEntries(secretNames.map((name) => [name, crypto.randomBytes(32).toString('base64url')])),
-    DATABASE_URL: database.url,
-    BASE_URL: address,
-    NODE_ENV: 'production',
-    NEXT_TELEMETRY_DISABLED: '1',
-  }
+  const secret = () => crypto.randomBytes(32).toString('base64url')
+  const secrets = { BETTER_AUTH_SECRET: secret(), CA_WRAP_SECRET: secret() }
+  const env = { ...process.env, ...programEnvironment({ databaseUrl: database.url, secrets }), BASE_URL: address }
   await seedDemo(database.url, peopleFile, env)
   await startService({ web: [server], address, host, port, env, logDir: inRoot('.data', 'test', 'log'), say, undo })
   return address
