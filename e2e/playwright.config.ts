@@ -17,6 +17,8 @@ export default defineConfig({
   use: {
     baseURL: `http://127.0.0.1:${port}`,
     viewport: { width: 1280, height: 720 },
+    actionTimeout: 20_000,
+    navigationTimeout: 30_000,
     acceptDownloads: true,
     trace: 'off',
     screenshot: 'only-on-failure',

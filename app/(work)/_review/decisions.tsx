@@ -6,16 +6,12 @@ import { Decision, type DecisionWords } from './decision'
 type Decided = Exclude<RevisionAction, `sign-${string}` | 'read-revision' | 'download-report' | 'comment'>
 
 interface Offer extends DecisionWords {
-  decide: (revisionId: string, text: string) => Promise<Outcome<unknown>>
+  /** Binds the revision to a server action: only such functions reach the browser. */
+  of: (revisionId: string) => (text: string) => Promise<Outcome<unknown>>
 }
 
 const note = 'Note'
 const reason = 'Reason'
-
-const acceptCheck = async (id: string, text: string) => actions.decideOnCheck(id, true, text)
-const rejectCheck = async (id: string, text: string) => actions.decideOnCheck(id, false, text)
-const acceptReview = async (id: string, text: string) => actions.decideOnReview(id, true, text)
-const rejectReview = async (id: string, text: string) => actions.decideOnReview(id, false, text)
 
 const offers: Record<Decided, Offer> = {
   'send-for-check': {
@@ -24,7 +20,7 @@ const offers: Record<Decided, Offer> = {
     explain: 'The checker ticks inputs against their sources and may send it back with a reason.',
     text: note,
     tone: 'main',
-    decide: actions.send,
+    of: (id) => actions.send.bind(null, id),
   },
   'accept-check': {
     verb: 'Accept check',
@@ -33,7 +29,7 @@ const offers: Record<Decided, Offer> = {
       'You have checked inputs against their sources. The revision goes out for review, and you will sign as its checker.',
     text: note,
     tone: 'main',
-    decide: acceptCheck,
+    of: (id) => actions.decideOnCheck.bind(null, id, true),
   },
   'reject-check': {
     verb: 'Send back to preparer',
@@ -41,7 +37,7 @@ const offers: Record<Decided, Offer> = {
     explain: 'It becomes a draft again; the frozen attempt stays readable.',
     text: reason,
     textNeeded: true,
-    decide: rejectCheck,
+    of: (id) => actions.decideOnCheck.bind(null, id, false),
   },
   'accept-review': {
     verb: 'Accept review',
@@ -49,7 +45,7 @@ const offers: Record<Decided, Offer> = {
     explain: 'The review stays open until it is closed with the purpose of issue.',
     text: note,
     tone: 'main',
-    decide: acceptReview,
+    of: (id) => actions.decideOnReview.bind(null, id, true),
   },
   'reject-review': {
     verb: 'Reject review',
@@ -57,7 +53,7 @@ const offers: Record<Decided, Offer> = {
     explain: 'The revision becomes a draft again; the frozen attempt stays readable.',
     text: reason,
     textNeeded: true,
-    decide: rejectReview,
+    of: (id) => actions.decideOnReview.bind(null, id, false),
   },
   'close-review': {
     verb: 'Close review',
@@ -68,7 +64,7 @@ const offers: Record<Decided, Offer> = {
     textNeeded: true,
     oneLine: true,
     tone: 'main',
-    decide: actions.close,
+    of: (id) => actions.close.bind(null, id),
   },
   'back-to-draft': {
     verb: 'Take back to draft',
@@ -76,7 +72,7 @@ const offers: Record<Decided, Offer> = {
     explain: 'Signatures given in this round end with it. The frozen attempt stays readable.',
     text: reason,
     textNeeded: true,
-    decide: actions.takeBack,
+    of: (id) => actions.takeBack.bind(null, id),
   },
   issue: {
     verb: 'Issue revision',
@@ -84,7 +80,7 @@ const offers: Record<Decided, Offer> = {
     explain: 'The file that all three have signed is released unaltered. A revision issued before is superseded by it.',
     text: note,
     tone: 'main',
-    decide: actions.issue,
+    of: (id) => actions.issue.bind(null, id),
   },
   withdraw: {
     verb: 'Withdraw revision',
@@ -94,7 +90,7 @@ const offers: Record<Decided, Offer> = {
     text: reason,
     textNeeded: true,
     tone: 'danger',
-    decide: actions.withdraw,
+    of: (id) => actions.withdraw.bind(null, id),
   },
 }
 
@@ -113,13 +109,13 @@ export function Decisions({ revisionId, allowed, purposes }: DecisionsProps) {
   return (
     <div className="flex flex-wrap gap-2">
       {decided.map((action) => {
-        const { decide, ...words } = offers[action]
+        const { of, ...words } = offers[action]
         return (
           <Decision
             key={action}
             {...words}
             offers={action === 'close-review' ? purposes : undefined}
-            decide={decide.bind(null, revisionId)}
+            decide={of(revisionId)}
           />
         )
       })}
