@@ -48,7 +48,9 @@ test('an engineer computes, three people sign, the client downloads and anyone v
     await approver.goto(revision)
     await decide(approver, 'Accept review')
     await decide(approver, 'Close review', { label: 'Purpose of issue', text: 'For approval by the utility' })
-    await expect(approver.getByRole('link', { name: 'Download report' })).toBeVisible({ timeout: 90_000 })
+    await expect(approver.getByText('The report is being rendered')).toBeVisible()
+    await expect(approver.getByText('The report is being rendered')).toBeHidden({ timeout: 90_000 })
+    await expect(approver.getByRole('link', { name: 'Download report' })).toBeVisible()
   })
 
   await test.step('a wrong passphrase is refused in one sentence and nothing is signed', async () => {
