@@ -35,6 +35,11 @@ async function testEverything(undo) {
     return { passed: 1, failed: 0 }
   })
   if (migrated) await parts.run('migrations make the schema', () => checks.checkDrift(server))
+  // before the unit tests: one of them serves it
+  const built = await parts.run('build', async () => {
+    await prepareApplication(say)
+    return { passed: 1, failed: 0 }
+  })
   await parts.run('unit and integration tests', async () => {
     const report = checks.freshReport('vitest.json')
     const args = [
@@ -46,10 +51,6 @@ async function testEverything(undo) {
     ]
     const status = await showNode([toolPath('vitest'), ...args], { TEST_CLUSTER_URL: server })
     return countVitest(report, status)
-  })
-  const built = await parts.run('build', async () => {
-    await prepareApplication(say)
-    return { passed: 1, failed: 0 }
   })
   await parts.run('browser tests', async () => {
     const report = checks.freshReport('playwright.json')
