@@ -16,7 +16,7 @@ async function testEverything(undo) {
   await preparePrograms(say)
   const { stages } = await import('./testing/stages.mjs')
   const checks = await import('./testing/checks.mjs')
-  const { countPlaywright, countVitest } = await import('./testing/counts.mjs')
+  const { countListed, countPlaywright, countVitest } = await import('./testing/counts.mjs')
   const { findChromium } = await import('./testing/find-chromium.mjs')
   const { joinTestCluster, leaveTestCluster } = await import('./testing/cluster.mjs')
   const { ensureTemplate } = await import('./testing/template.mjs')
@@ -49,7 +49,7 @@ async function testEverything(undo) {
       '--reporter=json',
       `--outputFile=${report}`,
     ]
-    const status = await showNode([toolPath('vitest'), ...args], { TEST_CLUSTER_URL: server })
+    const status = await showNode([toolPath('vitest'), ...args], server ? { TEST_CLUSTER_URL: server } : {})
     return countVitest(report, status)
   })
   await parts.run('browser tests', async () => {
@@ -58,8 +58,7 @@ async function testEverything(undo) {
     const env = { PLAYWRIGHT_JSON_OUTPUT_NAME: report }
     const cannotRun = async (/** @type {string} */ note) => {
       await checks.checkWith([...playwright, '--list', '--reporter=json'], { env })
-      const { passed, failed } = countPlaywright(report, 0)
-      return { passed: 0, failed: Math.max(1, passed + failed), note }
+      return { passed: 0, failed: countListed(report), note }
     }
     if (!built) return cannotRun('There is no build to test.')
     try {

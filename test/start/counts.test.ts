@@ -2,7 +2,7 @@ import fs from 'node:fs'
 import path from 'node:path'
 import { expect, test } from 'vitest'
 import { Failure } from '@/lib/start/failure.mjs'
-import { countPlaywright, countVitest } from '@/lib/start/testing/counts.mjs'
+import { countListed, countPlaywright, countVitest } from '@/lib/start/testing/counts.mjs'
 import { findChromium } from '@/lib/start/testing/find-chromium.mjs'
 import { stages } from '@/lib/start/testing/stages.mjs'
 import { ownFolder } from '../support/own-folder'
@@ -47,6 +47,11 @@ test('a part that breaks off is one failure with its sentence, and the others go
   expect(parts.total()).toEqual({ passed: 4, failed: 2 })
   expect(said).toContain('Do this.')
   expect(parts.summary()).toHaveLength(3)
+})
+
+test('browser tests that cannot run are counted one by one', () => {
+  expect(countListed(report({ stats: { expected: 0, unexpected: 0, flaky: 0, skipped: 12 } }))).toBe(12)
+  expect(countListed('/not/there')).toBe(1)
 })
 
 const nowhere = async () => '/not/there'

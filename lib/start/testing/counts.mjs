@@ -48,3 +48,9 @@ export function countPlaywright(file, status) {
   const note = skipped > 0 ? { note: `${skipped} browser tests were skipped` } : {}
   return withStatus({ passed: expected + flaky, failed: unexpected, ...note }, status)
 }
+
+/**
+ * @param {string} file report of Playwright that only listed the tests
+ * @returns {number} how many there are, at least 1: without a browser each counts as failed
+ */
+export const countListed = (file) => Math.max(1, readReport(file)?.stats.skipped ?? 0)
