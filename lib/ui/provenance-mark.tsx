@@ -21,10 +21,10 @@ function Shape({ kind }: { kind: ProvenanceKind }) {
 
 /** The mark before a value that says where it came from; a value without a source shows a gap of the same width. */
 export function ProvenanceMark({ kind, source }: { kind: ProvenanceKind | null; source?: string }) {
-  if (!kind) return <span className="inline-block w-3.5 shrink-0" aria-hidden="true" />
+  if (!kind) return <span className="inline-block w-4.5 shrink-0" aria-hidden="true" />
   const words = source ? `${provenanceMark[kind].meaning}: ${source}` : provenanceMark[kind].meaning
   return (
-    <span className="inline-block w-3.5 shrink-0 text-soft" title={words} role="img" aria-label={words}>
+    <span className="inline-block w-4.5 shrink-0 text-left text-soft" title={words} role="img" aria-label={words}>
       <Shape kind={kind} />
     </span>
   )

@@ -39,7 +39,12 @@ export function RecordCell({ field, draft, tag, tags, style, editable, onCommit 
   const value = (
     <>
       {field.kind === 'quantity' ? <ProvenanceMark kind={kind} source={source} /> : null}
-      {text === '' ? <span className="text-soft">–</span> : text}
+      {text === '' ? <span className="text-soft">–</span> : null}
+      {text.length > 24 ? (
+        <span className="inline-block min-w-44">{text}</span>
+      ) : (
+        <span className="whitespace-nowrap">{text}</span>
+      )}
     </>
   )
   if (!editable || !canBeTyped(field)) return value

@@ -9,6 +9,7 @@ import type { Options } from '@/lib/ui/form/field'
 import { FormView } from '@/lib/ui/form/form-view'
 import { recordDraft } from '@/lib/ui/form/to-draft'
 import { Moment } from '@/lib/ui/moment'
+import { ScrollRegion } from '@/lib/ui/scroll-region'
 import { compareDrafts } from './compare-drafts'
 import { ConflictPanel } from './conflict-panel'
 import type { KindDescription } from './kind-description'
@@ -70,7 +71,10 @@ export function RecordSheet(props: RecordSheetProps) {
   const tag = typeof row?.values.tag === 'string' ? row.values.tag : null
 
   return (
-    <section aria-labelledby={heading} className="border border-rule bg-sheet">
+    <section
+      aria-labelledby={heading}
+      className="flex flex-col border border-rule bg-sheet xl:sticky xl:top-3 xl:max-h-[calc(100dvh-12rem)]"
+    >
       <header className="flex items-baseline justify-between gap-2 border-b border-hair px-3 py-1.5">
         <h2 id={heading} className="m-0 text-body font-semibold">
           {tag ? `${one[0]?.toUpperCase()}${one.slice(1)} ${tag}` : `New ${one}`}
@@ -79,62 +83,66 @@ export function RecordSheet(props: RecordSheetProps) {
           Close sheet
         </Button>
       </header>
-      <form onSubmit={submit} noValidate className="flex flex-col gap-3 p-3">
-        <fieldset disabled={!sheet.ready || !editable} className="m-0 min-w-0 border-0 p-0">
-          <FormView
-            fields={fields}
-            draft={sheet.draft}
-            style={style}
-            options={options}
-            issues={sheet.issues}
-            knownSources={knownSources}
-            onChange={sheet.change}
-          >
-            {editable ? (
-              <SourceForAll draft={sheet.draft} onChange={(draft) => sheet.change(draft, sheet.issues)} />
-            ) : null}
-          </FormView>
-        </fieldset>
-        {sheet.conflict ? (
-          <ConflictPanel
-            by={sheet.conflict.by}
-            at={sheet.conflict.at}
-            differences={differences}
-            busy={sheet.busy}
-            onKeepMine={() => void sheet.keepMine()}
-            onTakeTheirs={sheet.takeTheirs}
-          />
-        ) : (
-          <SheetState refusal={sheet.refusal} restoredFrom={sheet.restoredFrom} onDiscard={sheet.discard} />
-        )}
-        {editable ? (
-          <div className="flex flex-wrap items-center gap-2">
-            <Button type="submit" tone="main" busy={sheet.busy} disabled={!sheet.ready}>
-              {row ? `Save ${one}` : `Add ${one}`}
-            </Button>
-            {sheet.unsaved && row ? <Button onClick={sheet.discard}>Discard changes</Button> : null}
-            {row && props.onCopy ? <Button onClick={props.onCopy}>Copy {one}</Button> : null}
-            {row ? (
-              <Confirm
-                trigger={`Remove ${one}`}
-                tone="danger"
-                title={`Remove ${tag ?? one}?`}
-                confirm={`Remove ${one}`}
-                onConfirm={remove}
-              >
-                The record leaves the live plant. Frozen revisions keep their copy of it.
-              </Confirm>
-            ) : null}
-          </div>
-        ) : (
-          <p className="m-0 text-soft">Your part in this project lets you read records, not change them.</p>
-        )}
-        {row ? (
-          <p className="m-0 text-label text-soft">
-            Last saved by {row.changedBy}, <Moment at={row.changedAt} />
-            {sheet.unsaved ? '; text above is not saved yet' : ''}
-          </p>
-        ) : null}
+      <form onSubmit={submit} noValidate className="flex min-h-0 flex-col">
+        <ScrollRegion label={`Fields of the ${one}`} className="min-h-0 p-3 xl:overflow-y-auto">
+          <fieldset disabled={!sheet.ready || !editable} className="m-0 min-w-0 border-0 p-0">
+            <FormView
+              fields={fields}
+              draft={sheet.draft}
+              style={style}
+              options={options}
+              issues={sheet.issues}
+              knownSources={knownSources}
+              onChange={sheet.change}
+            >
+              {editable ? (
+                <SourceForAll draft={sheet.draft} onChange={(draft) => sheet.change(draft, sheet.issues)} />
+              ) : null}
+            </FormView>
+          </fieldset>
+        </ScrollRegion>
+        <div className="flex flex-col gap-2 border-t border-hair p-3 xl:max-h-[45dvh] xl:overflow-y-auto">
+          {sheet.conflict ? (
+            <ConflictPanel
+              by={sheet.conflict.by}
+              at={sheet.conflict.at}
+              differences={differences}
+              busy={sheet.busy}
+              onKeepMine={() => void sheet.keepMine()}
+              onTakeTheirs={sheet.takeTheirs}
+            />
+          ) : (
+            <SheetState refusal={sheet.refusal} restoredFrom={sheet.restoredFrom} onDiscard={sheet.discard} />
+          )}
+          {editable ? (
+            <div className="flex flex-wrap items-center gap-2">
+              <Button type="submit" tone="main" busy={sheet.busy} disabled={!sheet.ready}>
+                {row ? `Save ${one}` : `Add ${one}`}
+              </Button>
+              {sheet.unsaved && row ? <Button onClick={sheet.discard}>Discard changes</Button> : null}
+              {row && props.onCopy ? <Button onClick={props.onCopy}>Copy {one}</Button> : null}
+              {row ? (
+                <Confirm
+                  trigger={`Remove ${one}`}
+                  tone="danger"
+                  title={`Remove ${tag ?? one}?`}
+                  confirm={`Remove ${one}`}
+                  onConfirm={remove}
+                >
+                  The record leaves the live plant. Frozen revisions keep their copy of it.
+                </Confirm>
+              ) : null}
+            </div>
+          ) : (
+            <p className="m-0 text-soft">Your part in this project lets you read records, not change them.</p>
+          )}
+          {row ? (
+            <p className="m-0 text-label text-soft">
+              Last saved by {row.changedBy}, <Moment at={row.changedAt} />
+              {sheet.unsaved ? '; text above is not saved yet' : ''}
+            </p>
+          ) : null}
+        </div>
       </form>
     </section>
   )

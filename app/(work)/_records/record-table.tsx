@@ -5,7 +5,7 @@ import type { NumberStyle } from '@/lib/quantity/quantity-name'
 import { DataTable } from '@/lib/ui/data-table'
 import { type Draft, type DraftPath, type GroupDraft, withDraftAt } from '@/lib/ui/form/draft'
 import type { Field, Options } from '@/lib/ui/form/field'
-import { fieldAt } from '@/lib/ui/form/show-draft'
+import { fieldAt, onlyValue } from '@/lib/ui/form/show-draft'
 import { recordDraft } from '@/lib/ui/form/to-draft'
 import type { KindDescription } from './kind-description'
 import { moveInTable } from './move-in-table'
@@ -56,7 +56,8 @@ export function RecordTable({
       }),
     [rows, fields, style],
   )
-  const cell = ({ row, draft, tag }: Line, path: DraftPath) => {
+  const cell = ({ row, draft, tag }: Line, column: DraftPath) => {
+    const path = onlyValue(fields, draft, column)
     const found = fieldAt(fields, draft, path)
     if (!found) return <span className="text-soft">–</span>
     return (
@@ -97,10 +98,20 @@ export function RecordTable({
         ...columns.map(({ label, path }) => ({
           id: path.join('.'),
           label,
-          numeric: lines.some((line) => isNumeric(fieldAt(fields, line.draft, path)?.field)),
+          numeric: lines.some((line) =>
+            isNumeric(fieldAt(fields, line.draft, onlyValue(fields, line.draft, path))?.field),
+          ),
           cell: (line: Line) => cell(line, path),
         })),
-        ...(inWords ? [{ id: 'in-words', label: 'In words', cell: ({ row }: Line) => inWords[row.id] ?? '' }] : []),
+        ...(inWords
+          ? [
+              {
+                id: 'in-words',
+                label: 'In words',
+                cell: ({ row }: Line) => <span className="block min-w-80">{inWords[row.id] ?? ''}</span>,
+              },
+            ]
+          : []),
       ]}
     />
   )

@@ -2,7 +2,7 @@ import type { VerdictWord } from '@/lib/engine/criteria/rule'
 import type { CaseRecord } from '@/lib/study/document/case-records'
 import { caseSentence } from '@/lib/study/words/case-sentence'
 import { startOutcomeWords } from '@/lib/study/words/outcome-words'
-import { motorTag } from '@/lib/study/words/tags'
+import { motorTag, plantConditionTag, supplyTag } from '@/lib/study/words/tags'
 import { type Column, DataTable } from '@/lib/ui/data-table'
 import { Verdict } from '@/lib/ui/verdict'
 import { CaseLink } from './case-link'
@@ -27,11 +27,29 @@ export function CaseOverview({ results, chosen }: { results: Results; chosen: st
     caseResult(results, record.id)?.motors.flatMap(({ motorId, start }) => (start ? [{ motorId, start }] : [])) ?? []
   const first = (record: CaseRecord) => starts(record)[0]?.start
   const columns: Column<CaseRecord>[] = [
-    { id: 'tag', label: 'Case', cell: ({ id, tag }) => <CaseLink caseId={id}>{tag}</CaseLink> },
     {
-      id: 'words',
-      label: 'In words',
-      cell: (record) => <span className="block min-w-64">{caseSentence(record, document)}</span>,
+      id: 'tag',
+      label: 'Case',
+      cell: (record) => (
+        <CaseLink caseId={record.id} title={`${caseSentence(record, document)}.`}>
+          {record.tag}
+        </CaseLink>
+      ),
+    },
+    { id: 'supply', label: 'Supply', cell: ({ supply }) => supplyTag(document, supply) },
+    {
+      id: 'start',
+      label: 'Start',
+      cell: ({ schedule }) => (
+        <span className="whitespace-nowrap">
+          {document.schedules.find(({ id }) => id === schedule)?.tag ?? schedule}
+        </span>
+      ),
+    },
+    {
+      id: 'condition',
+      label: 'Plant condition',
+      cell: ({ plantCondition }) => plantConditionTag(document, plantCondition),
     },
     {
       id: 'first',

@@ -9,7 +9,8 @@ import { toRpm } from '@/lib/units/speed'
 import { Figure } from './figure'
 import { sampledTable, type TableCurve } from './sampled-table'
 
-const size = { width: 170, height: 80 }
+/** Two beside each other on a usual screen; the type in them stays readable. */
+const size = { width: 125, height: 78 }
 
 const timeAxis = ({ result }: CaseFigure): TableCurve => ({
   head: 'Time from the first switching-on, s',
@@ -77,7 +78,7 @@ export function TorqueFigure({ figure, motorId }: { figure: CaseFigure; motorId:
 /** All figures of a case. */
 export function CasePlots({ figure }: { figure: CaseFigure }) {
   return (
-    <div className="grid grid-cols-1 gap-3 2xl:grid-cols-2">
+    <div className="grid grid-cols-1 gap-3 xl:grid-cols-2">
       {placesToDraw(figure).map((busId) => (
         <VoltageFigure key={busId} figure={figure} busId={busId} />
       ))}

@@ -21,7 +21,7 @@ export function LimitsMatrix({ results }: { results: Results }) {
       <h2 id="limits" className="m-0 mb-1 text-title font-semibold">
         Limits matrix
       </h2>
-      <ScrollRegion label="Limits matrix" className="border border-hair bg-sheet">
+      <ScrollRegion label="Limits matrix" className="w-fit max-w-full border border-hair bg-sheet">
         <table className="dense">
           <caption className="sr-only">
             Verdict, value and margin of every limit in every case. The margin is what is left inside the limit, or how
@@ -111,8 +111,9 @@ function Cell({ results, rule, row, governs }: CellProps) {
       <span className="text-soft" title="The limit is written for another number of starts than is intended.">
         <span className="block whitespace-nowrap">{value === null ? '–' : `${value}\u2009${unit}`}</span>
         <span className="block whitespace-nowrap">
-          <VerdictMark word={row.word} /> {row.word === 'not-assessed' ? 'not assessed' : row.word}, class not in use
+          <VerdictMark word={row.word} /> {row.word === 'not-assessed' ? 'not assessed' : row.word}
         </span>
+        <span className="block">class not in use</span>
       </span>
     )
   return (

@@ -13,7 +13,7 @@ const references = ['change-of-before', 'change-of-nominal', 'remaining-of-nomin
 /** Every place at every instant, against each of the three references. */
 export function VoltageTable({ document, places }: { document: StudyDocument; places: readonly PlaceResult[] }) {
   return (
-    <ScrollRegion label="Voltages" className="border border-hair bg-sheet">
+    <ScrollRegion label="Voltages" className="w-fit max-w-full border border-hair bg-sheet">
       <table className="dense">
         <caption className="px-2.5 pt-1.5 text-left font-semibold">Line voltage at each place</caption>
         <thead>

@@ -28,7 +28,7 @@ export function SigningRound({ revision, certificate }: SigningRoundProps) {
       <h2 id="sign-offs" className="m-0 text-title font-semibold">
         Sign-offs
       </h2>
-      <table className="dense border border-hair bg-sheet">
+      <table className="dense w-fit max-w-full border border-hair bg-sheet">
         <caption className="sr-only">Signatures of this revision</caption>
         <thead>
           <tr>

@@ -12,6 +12,8 @@ interface Named {
   name: string
   label: string
   hint?: string
+  /** How it reads in a line with others, `#` standing for the value; empty leaves it out there. */
+  inLine?: string
 }
 
 export interface TextField extends Named {
@@ -36,8 +38,6 @@ export interface DecimalField extends Named {
   kind: 'decimal'
   optional?: true
   initial?: string
-  /** How it reads in a line with others, `#` standing for the number. */
-  inLine?: string
 }
 
 /** A value with its unit as typed, and where it came from. */

@@ -7,9 +7,12 @@ import { useForm, useIssue } from './form-context'
 import { newIdentity } from './new-identity'
 import { rowDraft, rowKey } from './to-draft'
 
-const isFlat = (fields: readonly Field[]): boolean =>
-  fields.length <= 4 &&
-  fields.every((field) => field.kind !== 'group' && field.kind !== 'variants' && field.kind !== 'list')
+/** Rows of one or two values, or of nothing that has a source, stand side by side. */
+const isFlat = (fields: readonly Field[]): boolean => {
+  const nested = fields.some(({ kind }) => kind === 'group' || kind === 'variants' || kind === 'list')
+  const sourced = fields.some(({ kind }) => kind === 'quantity')
+  return !nested && fields.length <= (sourced ? 2 : 4)
+}
 
 /** Rows of the same parts; short ones stand side by side. */
 export function ListInput({ field, draft, path }: { field: ListField; draft: ListDraft; path: DraftPath }) {

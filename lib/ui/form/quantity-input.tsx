@@ -17,6 +17,8 @@ interface QuantityInputProps {
   compact?: boolean
 }
 
+const spaced = (text: string): string => text.replace(/\s+/g, ' ').trim()
+
 /** A value as typed; how it was understood is said below once the field is left. */
 export function QuantityInput({ field, draft, path, compact = false }: QuantityInputProps) {
   const { set, style } = useForm()
@@ -27,7 +29,9 @@ export function QuantityInput({ field, draft, path, compact = false }: QuantityI
   const error = refused ?? (left && parsed && !parsed.ok ? parsed.message : undefined)
   const unclear = parsed?.ok && parsed.ambiguous ? '; check the separator' : ''
   const reading =
-    parsed?.ok && (unclear || parsed.reading !== draft.text.trim()) ? `read as ${parsed.reading}${unclear}` : ''
+    parsed?.ok && (unclear || spaced(parsed.reading) !== spaced(draft.text))
+      ? `read as ${parsed.reading}${unclear}`
+      : ''
   const aside = field.optional && !compact ? 'may stay empty' : undefined
 
   return (
@@ -37,7 +41,7 @@ export function QuantityInput({ field, draft, path, compact = false }: QuantityI
           className={
             compact
               ? 'flex flex-col gap-1'
-              : 'grid grid-cols-1 gap-1 @sm:grid-cols-[minmax(7.5rem,2fr)_minmax(13rem,3fr)]'
+              : 'grid grid-cols-1 gap-1 @sm:grid-cols-[minmax(7.5rem,2fr)_minmax(15rem,4fr)]'
           }
         >
           <input

@@ -1,6 +1,6 @@
 import type { ProvenanceKind } from '@/lib/quantity/provenance'
 import type { Draft, DraftPath, GroupDraft } from './draft'
-import type { Field, Option, Options } from './field'
+import type { Field, ListField, Option, Options } from './field'
 
 /** A value in one line, as a table or a comparison shows it. */
 export interface Shown {
@@ -20,10 +20,14 @@ const joined = (fields: readonly Field[], group: GroupDraft, options: Options): 
       const part = group.parts[field.name]
       if (!part) return ''
       const { text } = showDraft(field, part, options)
-      return field.kind === 'decimal' && field.inLine && text !== '' ? field.inLine.replace('#', text) : text
+      return field.inLine === undefined || text === '' ? text : field.inLine.replace('#', text)
     })
     .filter((text) => text !== '')
     .join(' ')
+
+/** A row with an identity goes by its name. */
+const rowInLine = (field: ListField, row: GroupDraft, options: Options): string =>
+  joined(field.identified ? field.fields.filter(({ name }) => name === 'name') : field.fields, row, options)
 
 /** The draft of a field in words; an identity is shown by its tag, a shape by its name and values. */
 export const showDraft = (field: Field, draft: Draft, options: Options): Shown => {
@@ -41,9 +45,7 @@ export const showDraft = (field: Field, draft: Draft, options: Options): Shown =
     }
     case 'list':
       return plain(
-        field.kind === 'list'
-          ? draft.rows.map((row) => joined(field.fields, row.group, options)).join(', ') || '–'
-          : '',
+        field.kind === 'list' ? draft.rows.map((row) => rowInLine(field, row.group, options)).join(', ') || '–' : '',
       )
     case 'text': {
       if (field.kind === 'choice') return plain(label(field.options, draft.text))
@@ -82,4 +84,14 @@ export const fieldAt = (
     }
   const chosen = field.kind === 'variants' ? field.options.find((option) => option.value === part.choice) : undefined
   return chosen ? fieldAt(chosen.fields, part, rest) : null
+}
+
+/** The path on to the value of a shape that has only one, as a short-circuit level in MVA has; else the path itself. */
+export const onlyValue = (fields: readonly Field[], draft: GroupDraft, path: DraftPath): DraftPath => {
+  const found = fieldAt(fields, draft, path)
+  if (found?.field.kind !== 'variants' || found.draft.is !== 'group' || !found.draft.on) return path
+  const { choice } = found.draft
+  const parts = found.field.options.find((option) => option.value === choice)?.fields ?? []
+  const [part] = parts
+  return parts.length === 1 && part?.kind === 'quantity' ? [...path, part.name] : path
 }

@@ -25,7 +25,7 @@ export function SourceInput({ of, draft, onChange }: SourceInputProps) {
       </span>
       <select
         aria-label={`Kind of source, ${of}`}
-        className="control w-27 shrink-0 px-1 text-dense"
+        className="control w-24 shrink-0 px-1 text-dense"
         value={draft.kind}
         onChange={(event) => onChange({ ...draft, kind: asSourceKind(event.target.value) })}
       >

@@ -62,7 +62,14 @@ export const drivenLoad: KindDescription = {
       fields: [
         { kind: 'text', name: 'part', label: 'Part' },
         { kind: 'quantity', name: 'inertia', label: 'Inertia', quantity: 'inertia' },
-        { kind: 'quantity', name: 'speedRatio', label: 'Speed ratio to the motor', quantity: 'ratio', initial: '1' },
+        {
+          kind: 'quantity',
+          name: 'speedRatio',
+          label: 'Speed ratio to the motor',
+          quantity: 'ratio',
+          initial: '1',
+          inLine: '',
+        },
       ],
     },
     {

@@ -97,6 +97,6 @@ export const motor: KindDescription = {
     column('Breakdown torque', 'breakdownTorque'),
     column('Inertia', 'inertia'),
     column('Permissible hot', 'permissibleHot'),
-    column('Circuit', 'circuit'),
+    column('Circuit', 'circuit', 'kind'),
   ],
 }

@@ -17,7 +17,7 @@ export const schedule: KindDescription = {
       fields: [
         motorField(),
         { kind: 'reference', name: 'starter', label: 'Starting method', to: 'starter' },
-        { kind: 'quantity', name: 'at', label: 'Switched on at', quantity: 'time', initial: '0 s' },
+        { kind: 'quantity', name: 'at', label: 'Switched on at', quantity: 'time', initial: '0 s', inLine: 'at #' },
       ],
     },
     noteField,
