@@ -7,7 +7,7 @@ export default function NotFound() {
       <p className="m-0">
         Nothing is kept under this address, or it is not shared with you: check the address, ask whoever sent it, or go
         to{' '}
-        <Link href="/projects" className="link">
+        <Link prefetch={false} href="/projects" className="link">
           your projects
         </Link>
         .

@@ -12,7 +12,12 @@ export const SceneSvg = ({ scene, className }: { scene: Scene; className?: strin
       role="img"
       aria-labelledby={`${id}-title ${id}-desc`}
       className={className}
-      style={{ width: '100%', height: 'auto', fontFamily, fontVariantNumeric: 'lining-nums tabular-nums' }}
+      style={{
+        width: '100%',
+        height: 'auto',
+        fontFamily: `var(--font-source-sans, ${fontFamily})`,
+        fontVariantNumeric: 'lining-nums tabular-nums',
+      }}
     >
       <title id={`${id}-title`}>{scene.title}</title>
       <desc id={`${id}-desc`}>{scene.description}</desc>

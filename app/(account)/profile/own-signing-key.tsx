@@ -9,11 +9,14 @@ export async function OwnSigningKey({ organisationId }: { organisationId: string
   const { challenge, subject } = await ask(signingChallenge, { organisationId })
   const certificate = await ownCertificate(organisationId)
   return (
-    <SigningKeyPanel
-      person={subject}
-      certificate={certificate}
-      challenge={challenge}
-      register={registerSigningKey.bind(null, organisationId)}
-    />
+    <div className="flex flex-col gap-3">
+      <h2 className="m-0 text-title font-semibold">Signing key</h2>
+      <SigningKeyPanel
+        person={subject}
+        certificate={certificate}
+        challenge={challenge}
+        register={registerSigningKey.bind(null, organisationId)}
+      />
+    </div>
   )
 }

@@ -18,7 +18,7 @@ export function PersonMenu({ name }: { name: string }) {
   }
   return (
     <div className="flex shrink-0 items-center gap-2 text-dense">
-      <Link href="/profile" className="link">
+      <Link prefetch={false} href="/profile" className="link">
         {name}
       </Link>
       <Button tone="quiet" className="text-dense" onClick={signOut}>

@@ -16,6 +16,7 @@ export function PlaceList({ label, places }: { label: string; places: readonly P
           return (
             <li key={href}>
               <Link
+                prefetch={false}
                 href={href}
                 aria-current={here ? 'page' : undefined}
                 className={`block border-b-2 px-3 py-1.5 whitespace-nowrap no-underline md:border-b-0 md:border-l-4 ${

@@ -17,6 +17,7 @@ export function TabLinks({ label, links }: TabLinksProps) {
         {links.map(({ label, href }) => (
           <li key={href}>
             <Link
+              prefetch={false}
               href={href}
               aria-current={path === href ? 'page' : undefined}
               className={`block border-b-2 px-2.5 py-1 whitespace-nowrap no-underline ${

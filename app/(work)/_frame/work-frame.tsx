@@ -32,14 +32,17 @@ export async function WorkFrame({ path, places, cells, children }: WorkFrameProp
         <nav aria-label="Path" className="min-w-0">
           <ol className="m-0 flex min-w-0 list-none flex-wrap items-center gap-x-1.5 p-0 text-dense">
             {path.map(({ label, href }, index) => (
-              <li key={`${href}${label}`} className="flex min-w-0 items-center gap-1.5">
+              <li
+                key={`${href}${label}`}
+                className={`min-w-0 items-center gap-1.5 ${index < path.length - 2 ? 'hidden md:flex' : 'flex'}`}
+              >
                 {index > 0 ? (
                   <span aria-hidden="true" className="text-soft">
                     /
                   </span>
                 ) : null}
                 {href ? (
-                  <Link href={href} className="link truncate">
+                  <Link prefetch={false} href={href} className="link truncate">
                     {label}
                   </Link>
                 ) : (
@@ -56,7 +59,7 @@ export async function WorkFrame({ path, places, cells, children }: WorkFrameProp
       {actor.initialPassword ? (
         <p className="m-0 border-b border-close bg-sheet px-3 py-1.5">
           Your password was handed to you by somebody else:{' '}
-          <Link href="/profile" className="link">
+          <Link prefetch={false} href="/profile" className="link">
             replace it with one of your own
           </Link>
           .

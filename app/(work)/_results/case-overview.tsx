@@ -49,7 +49,9 @@ export function CaseOverview({ results, chosen }: { results: Results; chosen: st
     {
       id: 'condition',
       label: 'Plant condition',
-      cell: ({ plantCondition }) => plantConditionTag(document, plantCondition),
+      cell: ({ plantCondition }) => (
+        <span className="whitespace-nowrap">{plantConditionTag(document, plantCondition)}</span>
+      ),
     },
     {
       id: 'first',

@@ -1,17 +1,18 @@
 'use client'
 
 import { useRouter } from 'next/navigation'
-import { useEffect } from 'react'
+import { useEffect, useTransition } from 'react'
 
-const everyTwoSeconds = 2000
+const twoSeconds = 2000
 
-/** Shows the page anew every two seconds while something is being made for it. */
+/** Shows the page anew while something is being made for it: two seconds after each time it has arrived, never twice at once. */
 export function RefreshWhile({ waiting }: { waiting: boolean }) {
   const router = useRouter()
+  const [arriving, start] = useTransition()
   useEffect(() => {
-    if (!waiting) return
-    const timer = setInterval(() => router.refresh(), everyTwoSeconds)
-    return () => clearInterval(timer)
-  }, [waiting, router])
+    if (!waiting || arriving) return
+    const timer = setTimeout(() => start(() => router.refresh()), twoSeconds)
+    return () => clearTimeout(timer)
+  }, [waiting, arriving, router])
   return null
 }

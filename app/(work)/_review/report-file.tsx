@@ -43,7 +43,7 @@ export function ReportFile({ revision, href }: { revision: RevisionView; href: s
           </p>
           <p className="m-0 text-dense text-soft">
             The study’s own data is attached to the file.{' '}
-            <Link href="/verify" className="link">
+            <Link prefetch={false} href="/verify" className="link">
               Verify a report
             </Link>{' '}
             checks signatures and recomputes the numbers in your browser.

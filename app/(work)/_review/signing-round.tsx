@@ -72,7 +72,7 @@ export function SigningRound({ revision, certificate }: SigningRoundProps) {
       {due && !certificate ? (
         <p className="m-0">
           You are the next to sign, and have no signing key yet:{' '}
-          <Link href="/profile" className="link">
+          <Link prefetch={false} href="/profile" className="link">
             make your signing key
           </Link>{' '}
           first. A key made after the round has begun counts from the next round on.

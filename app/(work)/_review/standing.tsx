@@ -29,7 +29,7 @@ export function Standing({ revision, hrefOf }: { revision: RevisionView; hrefOf:
     <>
       {' '}
       In force is{' '}
-      <Link className="link" href={hrefOf(issuedRevision.revisionId)}>
+      <Link prefetch={false} className="link" href={hrefOf(issuedRevision.revisionId)}>
         revision {issuedRevision.number}
       </Link>
       .

@@ -24,7 +24,7 @@ export function ProjectSheet({ project, userId }: { project: ProjectLine; userId
           {name}
         </h2>
         {can(actor, 'read-plant').allowed ? (
-          <Link href={`/projects/${projectId}/plant/bus`} className="link">
+          <Link prefetch={false} href={`/projects/${projectId}/plant/bus`} className="link">
             Open plant records
           </Link>
         ) : null}
@@ -46,7 +46,7 @@ export function ProjectSheet({ project, userId }: { project: ProjectLine; userId
               id: 'title',
               label: 'Title',
               cell: (study) => (
-                <Link href={href(study)} className="link">
+                <Link prefetch={false} href={href(study)} className="link">
                   {study.title}
                 </Link>
               ),

@@ -73,7 +73,7 @@ export function ComputePanel(props: ComputePanelProps) {
           ) : null}
           <span className={results === 'stale' ? 'text-close' : 'text-soft'}>{said[results]}</span>
           {resultsLink && results !== 'none' ? (
-            <Link className="link" href={`/studies/${studyId}/results`}>
+            <Link prefetch={false} className="link" href={`/studies/${studyId}/results`}>
               Open results
             </Link>
           ) : null}

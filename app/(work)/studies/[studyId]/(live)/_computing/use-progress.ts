@@ -4,7 +4,7 @@ import { useRouter } from 'next/navigation'
 import { useCallback, useEffect, useState } from 'react'
 import { isOpen, type Progress } from './progress'
 
-const everySecond = 1000
+const second = 1000
 
 /** Follows a computation while it runs and shows the page anew once it has ended. */
 export const useProgress = (studyId: string, given: Progress) => {
@@ -23,8 +23,17 @@ export const useProgress = (studyId: string, given: Progress) => {
 
   useEffect(() => {
     if (!open) return
-    const timer = setInterval(() => void look(), everySecond)
-    return () => clearInterval(timer)
+    let over = false
+    let timer: ReturnType<typeof setTimeout>
+    // The next question is asked when the last one was answered, so that a slow server is not asked twice at once.
+    const again = () => {
+      if (!over) timer = setTimeout(() => void look().then(again), second)
+    }
+    again()
+    return () => {
+      over = true
+      clearTimeout(timer)
+    }
   }, [open, look])
 
   return { progress, open, look }

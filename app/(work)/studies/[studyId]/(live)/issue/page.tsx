@@ -30,7 +30,7 @@ export default async function IssuePage({ params }: PageProps<'/studies/[studyId
         <h1 className="m-0 mb-4 text-title font-semibold">Issue</h1>
         <EmptyState title="Nothing is ready to be issued.">
           Close the review of a revision on the{' '}
-          <Link href={`/studies/${studyId}/review`} className="link">
+          <Link prefetch={false} href={`/studies/${studyId}/review`} className="link">
             Review page
           </Link>{' '}
           first; the final report is then rendered and signed here.
@@ -44,7 +44,7 @@ export default async function IssuePage({ params }: PageProps<'/studies/[studyId
         <h1 className="m-0 text-title font-semibold">Issue of revision {revision.number}</h1>
         <Standing revision={revision} hrefOf={(id) => `${base}/${id}`} />
         <p className="m-0">
-          <Link href={`${base}/${revision.revisionId}`} className="link">
+          <Link prefetch={false} href={`${base}/${revision.revisionId}`} className="link">
             Open revision {revision.number}
           </Link>
         </p>

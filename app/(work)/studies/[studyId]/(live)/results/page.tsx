@@ -27,7 +27,7 @@ export default async function ResultsPage({ params, searchParams }: PageProps<'/
       {run.result === null ? (
         <EmptyState title="Nothing has been computed yet.">
           Press “Compute cases” above; with no cases yet,{' '}
-          <Link className="link" href={`/studies/${studyId}/cases`}>
+          <Link prefetch={false} className="link" href={`/studies/${studyId}/cases`}>
             add the first one
           </Link>
           .

@@ -23,7 +23,7 @@ export default async function ReviewPage({ params }: PageProps<'/studies/[studyI
       {may.freeze && !ready ? (
         <Notice>
           A revision freezes records together with the results that belong to them:{' '}
-          <Link href={`/studies/${studyId}/cases`} className="link">
+          <Link prefetch={false} href={`/studies/${studyId}/cases`} className="link">
             compute the cases
           </Link>{' '}
           as the records stand now, then freeze.
@@ -43,7 +43,7 @@ export default async function ReviewPage({ params }: PageProps<'/studies/[studyI
               id: 'number',
               label: 'Revision',
               cell: ({ revisionId, number, attempt }) => (
-                <Link href={`/studies/${studyId}/revisions/${revisionId}`} className="link">
+                <Link prefetch={false} href={`/studies/${studyId}/revisions/${revisionId}`} className="link">
                   Revision {number}
                   {attempt > 1 ? `, attempt ${attempt}` : ''}
                 </Link>
