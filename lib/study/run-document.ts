@@ -19,5 +19,5 @@ export const runDocument = (document: StudyDocument, onProgress?: ProgressListen
     onProgress?.(results.length, input.cases.length)
   }
   const judged = judgeStudy(input, results)
-  return { ...judged, overall: studyVerdict(document, judged.verdicts) }
+  return { ...judged, overall: studyVerdict(document, input, judged.verdicts) }
 }

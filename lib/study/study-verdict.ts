@@ -1,6 +1,6 @@
 import { overallVerdict } from '../engine/criteria/overall'
 import type { Verdict } from '../engine/criteria/rule'
-import type { StudyVerdict } from '../engine/study-run'
+import type { StudyRunInput, StudyVerdict } from '../engine/study-run'
 import type { StudyDocument } from './document/study-document'
 
 /** Identities of the cases that count in the verdict of the whole. */
@@ -11,7 +11,15 @@ export const designCases = ({ cases }: StudyDocument): ReadonlySet<string> =>
  * The verdict of the whole study: over the design cases and the limits in use. Sensitivities and comparisons are shown
  * beside it: a method that was only compared, and fails, does not make the proposed one fail.
  */
-export const studyVerdict = (document: StudyDocument, verdicts: readonly Verdict[]): StudyVerdict => {
+export const studyVerdict = (
+  document: StudyDocument,
+  { rules, margins }: StudyRunInput,
+  verdicts: readonly Verdict[],
+): StudyVerdict => {
   const counted = designCases(document)
-  return overallVerdict(verdicts.filter(({ caseId }) => counted.has(caseId)))
+  return overallVerdict(
+    verdicts.filter(({ caseId }) => counted.has(caseId)),
+    rules,
+    margins,
+  )
 }

@@ -7,15 +7,11 @@ export type Ampere = Si<'A'>
 export type Ohm = Si<'ohm'>
 export type OhmPerMetre = Si<'ohm/m'>
 export type Siemens = Si<'S'>
-export type SiemensPerMetre = Si<'S/m'>
 export type Watt = Si<'W'>
-export type Var = Si<'var'>
 export type VoltAmpere = Si<'VA'>
 export type Hertz = Si<'Hz'>
 export type Second = Si<'s'>
-export type Metre = Si<'m'>
 export type RadianPerSecond = Si<'rad/s'>
-export type Radian = Si<'rad'>
 export type NewtonMetre = Si<'N·m'>
 export type KilogramSquareMetre = Si<'kg·m²'>
 export type Joule = Si<'J'>
@@ -28,15 +24,11 @@ export const ampere = (value: number) => value as Ampere
 export const ohm = (value: number) => value as Ohm
 export const ohmPerMetre = (value: number) => value as OhmPerMetre
 export const siemens = (value: number) => value as Siemens
-export const siemensPerMetre = (value: number) => value as SiemensPerMetre
 export const watt = (value: number) => value as Watt
-export const reactiveVar = (value: number) => value as Var
 export const voltAmpere = (value: number) => value as VoltAmpere
 export const hertz = (value: number) => value as Hertz
 export const second = (value: number) => value as Second
-export const metre = (value: number) => value as Metre
 export const radianPerSecond = (value: number) => value as RadianPerSecond
-export const radian = (value: number) => value as Radian
 export const newtonMetre = (value: number) => value as NewtonMetre
 export const kilogramSquareMetre = (value: number) => value as KilogramSquareMetre
 export const joule = (value: number) => value as Joule

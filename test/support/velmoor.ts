@@ -8,7 +8,6 @@ import {
   type Ohm,
   ohm,
   perUnit,
-  radianPerSecond,
   second,
   siemens,
   volt,
@@ -321,6 +320,3 @@ export const velmoorCases: Readonly<Record<string, CaseInput>> = Object.fromEntr
     ] as const
   ).map(([id, supply, motors, changes]) => [id, velmoorCase(id, supply, motors, changes)]),
 )
-
-export const rpm = (value: number) => fromRpm(value)
-export const speed = radianPerSecond

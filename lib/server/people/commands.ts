@@ -35,6 +35,7 @@ export const createProject = command({
 /**
  * Gives a person a part in a project, and an account if there is none for the address: then the answer holds the password,
  * shown once, to hand over. A guest does not become a member of the organisation, so cannot sign.
+ * @public
  */
 export const addMember = command({
   input: z.object({
@@ -67,7 +68,10 @@ export const addMember = command({
   },
 })
 
-/** Replaces a person's roles in a project; without any the person leaves it. */
+/**
+ * Replaces a person's roles in a project; without any the person leaves it.
+ * @public
+ */
 export const changeMember = command({
   input: z.object({ projectId: idInput, userId: idInput, roles: z.union([projectRoles, z.tuple([])]) }),
   scope: ({ projectId }) => ({ kind: 'project' as const, id: projectId }),

@@ -98,7 +98,10 @@ export interface MemberLine {
   roles: Role[]
 }
 
-/** The people of a project. */
+/**
+ * The people of a project.
+ * @public
+ */
 export const projectMembers = query({
   input: z.object({ projectId: idInput }),
   scope: ({ projectId }) => ({ kind: 'project' as const, id: projectId }),

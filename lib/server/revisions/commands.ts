@@ -70,7 +70,10 @@ export const closeReview = command({
   run: (context, input, { row }) => closeReviewOf(context, row, input.purpose, input.note),
 })
 
-/** Asks for the report once more after its rendering failed. */
+/**
+ * Asks for the report once more after its rendering failed.
+ * @public
+ */
 export const renderAgain = command({
   input: ofRevision,
   scope: revisionScope,

@@ -2,6 +2,7 @@ import 'server-only'
 import { createHash } from 'node:crypto'
 import { DomainError } from '@/lib/errors'
 import { canonicalBytes } from '@/lib/study/canonical-json'
+import { preIssueChecks } from '@/lib/study/pre-issue-checks'
 import type { WriteContext } from '../context'
 import { newId } from '../identity'
 import type { Done } from '../perform'
@@ -11,7 +12,6 @@ import { loadLiveStudy } from '../studies/live-study'
 import { lastDone } from '../studies/run-state'
 import type { StudyRow } from '../studies/study-of'
 import { toJson } from '../to-json'
-import { checksBeforeIssue } from './checks'
 import { addDecision } from './decisions'
 import { versionsOf } from './moved'
 import { nextNumber } from './next-number'
@@ -59,7 +59,7 @@ export async function freeze(
       frozenByName: actor.name,
       frozenAt: at,
       state: 'draft',
-      checks: toJson(await checksBeforeIssue(tx, live.document, run)),
+      checks: toJson({ checks: preIssueChecks(live.document) }),
     },
   })
   await addDecision(tx, { organisationId, revisionId, move: 'freeze', actor, note, at })

@@ -22,7 +22,10 @@ const readable = {
     can(actor, 'read-revision', subject),
 }
 
-/** The revisions of a study that the person may read, newest first. */
+/**
+ * The revisions of a study that the person may read, newest first.
+ * @public
+ */
 export const revisionsOf = query({
   input: z.object({ studyId: idInput }),
   scope: ({ studyId }) => ({ kind: 'study' as const, id: studyId }),

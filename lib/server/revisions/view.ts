@@ -1,4 +1,3 @@
-import type { FieldIssue } from '@/lib/errors'
 import type { RevisionAction } from '@/lib/policy/action'
 import type { Role } from '@/lib/policy/role'
 import type { RevisionMove, RevisionState, SignOffRole } from '@/lib/study/states'
@@ -44,13 +43,6 @@ export interface Moved {
   change: 'added' | 'changed' | 'removed'
   by: string | null
   at: string | null
-}
-
-export interface PreIssueCheck {
-  id: string
-  sentence: string
-  passed: boolean
-  issues: FieldIssue[]
 }
 
 /** A frozen revision as its page shows it. */

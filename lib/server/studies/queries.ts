@@ -79,7 +79,10 @@ export const runProgress = query({
   },
 })
 
-/** The last results of a study, without curves. */
+/**
+ * The last results of a study, without curves.
+ * @public
+ */
 export const studyResults = query({
   ...ofStudy,
   run: async ({ tx }, { studyId }): Promise<StudySummary> => {

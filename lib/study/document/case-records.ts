@@ -118,7 +118,6 @@ export const caseRecord = z.strictObject({
 
 export type StarterRecord = z.infer<typeof starterRecord>
 export type PlantConditionRecord = z.infer<typeof plantConditionRecord>
-export type ScheduleRecord = z.infer<typeof scheduleRecord>
 export type LoadConditionRecord = z.infer<typeof loadConditionRecord>
 export type CaseRecord = z.infer<typeof caseRecord>
 export type CaseChange = z.infer<typeof caseChange>
