@@ -23,6 +23,9 @@ export default {
   typescript: { ignoreBuildErrors: true },
   poweredByHeader: false,
   reactStrictMode: true,
+  // no picture is scaled by the server: neither its address nor its library is needed
+  images: { unoptimized: true },
+  outputFileTracingExcludes: { '/*': ['node_modules/sharp/**', 'node_modules/@img/**'] },
   // packages with compiled parts or threads of their own are loaded as they are
   serverExternalPackages: ['pg', 'pg-boss', 'piscina', '@node-rs/argon2', '@prisma/client', '@prisma/adapter-pg'],
   headers: async () => [{ source: '/:path*', headers: securityHeaders }],

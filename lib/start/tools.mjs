@@ -1,8 +1,5 @@
 // @ts-check
-import { createRequire } from 'node:module'
-import path from 'node:path'
-
-const require = createRequire(import.meta.url)
+import { inRoot } from './root.mjs'
 
 /** @type {Record<string, [string, string]>} the program a tool's package holds, run with our Node and without a shell */
 const programs = {
@@ -17,6 +14,6 @@ const programs = {
 
 /** @param {keyof typeof programs} name @returns {string} absolute path */
 export function toolPath(name) {
-  const [packageName, program] = programs[name] ?? ['', '']
-  return path.join(path.dirname(require.resolve(`${packageName}/package.json`)), program)
+  // not asked of the resolver: some of these packages do not let their files be named
+  return inRoot('node_modules', ...(programs[name] ?? []))
 }

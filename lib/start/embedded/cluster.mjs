@@ -84,9 +84,13 @@ export function createCluster({ dataDir, account, native }) {
       env: { ...process.env, TZ: 'UTC' },
     })
     if (made.status !== 0) {
-      const reason = (made.stderr ?? '').trim().split('\n').at(-1) ?? String(made.error)
+      const reason = (made.stderr ?? '').trim().split('\n').at(-1) || String(made.error)
+      // containers may run programs under a number that the system has no name for
+      const remedy = reason.includes('user does not exist')
+        ? 'run Breakaway under an account that the system knows by name'
+        : 'check disk space and rights'
       throw new Failure(
-        `The embedded database could not be created in ${dataDir} (${reason}): check disk space and rights, or set DATABASE_URL.`,
+        `The embedded database could not be created in ${dataDir} (${reason}): ${remedy}, or set DATABASE_URL.`,
       )
     }
     fs.renameSync(unfinished, dataDir)

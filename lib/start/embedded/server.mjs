@@ -76,7 +76,7 @@ async function launch({ native, dataDir, port, account, extra, ready }) {
     const until = Date.now() + 90_000
     while (!ended && Date.now() < until) {
       if (await ready()) return /** @type {number} */ (child.pid)
-      await pause(20)
+      await pause(40)
     }
     if (!ended && child.pid) await stopPostmaster(child.pid)
     if (attempt < 80 && /shared memory block|lock file/.test(lastWords(log))) {
