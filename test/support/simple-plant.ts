@@ -21,7 +21,7 @@ export const singleCage: InductionCircuit = {
   cages: [{ resistance: ohm(0.00925), reactance: ohm(0.0661) }],
 }
 
-export const noLoad: LoadCurve = {
+export const noLoad: Extract<LoadCurve, { kind: 'power' }> = {
   kind: 'power',
   constant: newtonMetre(0),
   atRated: newtonMetre(0),

@@ -24,6 +24,8 @@ export interface Crossing {
 
 /** Instants are located to a tenth of a nanosecond; the speeds they rest on are good to the integration tolerance. */
 const sharpness = 1e-10
+/** Parts into which a step is cut to see where it turned round. */
+const looks = 16
 
 /** Crossings in the last step that come first; more than one only where they coincide. */
 export function firstCrossings(system: System, courses: Courses, integrator: Integrator): Crossing[] {
@@ -76,9 +78,14 @@ function locate(integrator: Integrator, crossing: Crossing, scratch: Float64Arra
     return scratch[crossing.motor]! - crossing.speed
   }
   const { from, time } = integrator
-  const [before, after] = [excess(from), integrator.state[crossing.motor]! - crossing.speed]
-  // A step that begins on the crossed speed and ends on the wrong side of it has turned round within: its end will do.
-  if (before === 0 || before > 0 === after > 0)
-    return after === 0 || before !== 0 ? time : Math.min(time, from + sharpness)
-  return findRoot(excess, from, time, sharpness, before, after)
+  const after = integrator.state[crossing.motor]! - crossing.speed
+  const before = excess(from)
+  if (before > 0 !== after > 0 && before !== 0) return findRoot(excess, from, time, sharpness, before, after)
+  // A step that begins on the crossed speed itself has turned round within: a shaft let go that comes back to rest.
+  for (let part = 1; part < looks; part++) {
+    const t = from + (part / looks) * (time - from)
+    const there = excess(t)
+    if (there > 0 !== after > 0 && there !== 0) return findRoot(excess, t, time, sharpness, there, after)
+  }
+  return before === 0 ? Math.min(time, from + sharpness) : time
 }

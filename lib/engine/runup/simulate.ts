@@ -38,6 +38,9 @@ const longest = 1
 /** Torque left, in parts of rated, below which a shaft counts as settled, and as worth a look for a hang. */
 const settledTorque = 1e-5
 const hangingTorque = 4e-3
+/** No run of a plant needs so many steps; a caller is not kept waiting for one that does. */
+const mostSteps = 400_000
+const nobody: ReadonlySet<number> = new Set()
 
 /**
  * Runs a plant up from its state before the start.
@@ -68,10 +71,10 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   const held = (i: number): boolean => system.resting[i] === 1 && system.connection.code[i] !== 0
 
-  /** Lets go every resting shaft whose torque exceeds what holds it; after `solveAt`. */
-  function release(): void {
+  /** Lets go every resting shaft whose torque exceeds what holds it, but those that have just halted; after `solveAt`. */
+  function release(halted: ReadonlySet<number>): void {
     for (let i = 0; i < plant.motors.length; i++) {
-      if (!held(i) || system.balance(i, 0) <= 0) continue
+      if (!held(i) || halted.has(i) || system.balance(i, 0) <= 0) continue
       system.resting[i] = 0
       system.piece[i] = 0
       const start = starts.find((each) => each.motor === i)
@@ -80,10 +83,10 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   /** Solves anew after switchings and notes the state just after them; false where the network has no solution. */
-  function afterSwitching(t: number, moved: readonly StartCourse[]): boolean {
+  function afterSwitching(t: number, moved: readonly StartCourse[], halted: ReadonlySet<number> = nobody): boolean {
     lastHangTorque = Number.POSITIVE_INFINITY
     if (!system.solveAt(state)) return false
-    release()
+    release(halted)
     if (!recorder.begin(t)) return false
     if (first === null) {
       first = Float64Array.from(now)
@@ -124,17 +127,17 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     for (const start of late) start.outcome ??= { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
   }
 
-  /** Acts on crossings at the present instant: the starts that changed over, and whether the motion begins anew. */
-  function act(crossings: readonly Crossing[], t: number): { moved: StartCourse[]; anew: boolean } {
+  /** Acts on crossings at the present instant: the starts that changed over and the shafts that halted. */
+  function act(crossings: readonly Crossing[], t: number): { moved: StartCourse[]; halted: Set<number> } {
     const moved: StartCourse[] = []
-    let anew = false
+    const halted = new Set<number>()
     for (const { motor, kind } of crossings) {
       if (kind === 'corner-up') system.piece[motor] = system.piece[motor]! + 1
       if (kind === 'corner-down') system.piece[motor] = system.piece[motor]! - 1
       if (kind === 'halt') {
         system.resting[motor] = 1
         system.piece[motor] = 0
-        anew = true
+        halted.add(motor)
       }
       const running = courses.running.find((each) => each.motor === motor)
       if (running && kind === 'pull-out') running.pulledOutAt = t
@@ -155,7 +158,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
         moved.push(start)
       }
     }
-    return { moved, anew }
+    return { moved, halted }
   }
 
   /** Instant in the last step at which a resting shaft is let go, or null. */
@@ -169,18 +172,18 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       }
       const { from, time } = integrator
       const atFrom = surplus(from)
-      const t = atFrom >= 0 ? Math.min(time, from + 1e-9) : findRoot(surplus, from, time, 1e-9, atFrom)
+      // A surplus all through the step is that of a shaft that has just come to rest: it is let go at the end, not at once again.
+      const t = atFrom >= 0 ? time : findRoot(surplus, from, time, 1e-9, atFrom)
       if (earliest === null || t < earliest) earliest = t
     }
     return earliest
   }
 
-  /** Largest torque left on a shaft at the last instant observed, in parts of rated; shafts given up do not count. */
+  /** Largest torque left on a shaft at the last instant observed, in parts of rated. */
   function restlessness(): number {
     let most = 0
     for (let i = 0; i < plant.motors.length; i++) {
-      if (system.resting[i] || starts.some((start) => start.motor === i && start.outcome?.kind === 'timed-out'))
-        continue
+      if (system.resting[i]) continue
       most = Math.max(most, Math.abs(now[placeOf(system, i, 'accelerating')]!) / plant.ratedTorque[i]!)
     }
     return most
@@ -191,7 +194,9 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     if (starts.some((start) => start.position === 'open' || !start.switchedOn)) return false
     const torque = restlessness()
     const open = starts.filter((start) => start.outcome === null)
-    if (open.length === 0) return torque < settledTorque
+    // A start that was given up goes on turning: there is no settled plant to wait for.
+    const givenUp = starts.some((start) => start.outcome?.kind === 'timed-out')
+    if (open.length === 0) return givenUp || torque < settledTorque
     const waits = open.some((start) => start.position !== 'running' && changeOverOf(start.starter)?.kind === 'time')
     if (waits || torque > hangingTorque || torque > lastHangTorque / 2) return false
     lastHangTorque = torque
@@ -234,7 +239,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   for (;;) {
     const from = integrator.time
-    if (from >= horizon) return result({ kind: 'horizon', at: from })
+    if (from >= horizon || integrator.counters.steps > mostSteps) return result({ kind: 'horizon', at: from })
     const until = nextInstant(starts, from, timeLimit, horizon)
     let crossings: Crossing[] = []
     let letGo = false
@@ -255,12 +260,12 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     }
     const t = integrator.time
     for (const start of starts) if (start.position === 'star') start.i2tInStar = state[system.integral[start.motor]!]!
-    const { moved, anew } = act(crossings, t)
+    const { moved, halted } = act(crossings, t)
     moved.push(...switchDue(system, starts, t))
     judgeStarted()
     giveUp(t)
-    if (moved.length > 0 || anew || letGo) {
-      if (!afterSwitching(t, moved)) return collapsed(t)
+    if (moved.length > 0 || halted.size > 0 || letGo) {
+      if (!afterSwitching(t, moved, halted)) return collapsed(t)
       judgeStarted()
     } else if (crossings.length > 0 && !integrator.restart(t, stride)) return collapsed(t)
     if (isOver()) return result({ kind: 'settled', at: t })
