@@ -31,7 +31,9 @@ function download(address) {
  */
 export async function scriptsOf(address, page) {
   const html = await fetch(new URL(page, address)).then((answer) => answer.text())
-  const sources = new Set([...html.matchAll(/<script[^>]+src="([^"]+\.js[^"]*)"/g)].map(([, source = '']) => source))
+  // what is kept for browsers without modules is not loaded by others
+  const tags = [...html.matchAll(/<script\b[^>]*>/g)].map(([tag]) => tag).filter((tag) => !/\bnomodule\b/i.test(tag))
+  const sources = new Set(tags.flatMap((tag) => /\bsrc="([^"]+)"/.exec(tag)?.slice(1) ?? []))
   let bytes = 0
   for (const source of sources) {
     const { status, bytes: sent } = await download(new URL(source.replaceAll('&amp;', '&'), address))
