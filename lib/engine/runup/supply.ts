@@ -3,7 +3,7 @@ import { atSlip } from '../machines/at-slip'
 import { addElement } from '../network/admittance'
 import { reduceNetwork } from '../network/reduce'
 import { refuse, type Setup } from '../network/refusal'
-import { reciprocal } from '../numeric/complex'
+import { magnitude, reciprocal, subtract } from '../numeric/complex'
 import type { Plant } from './plant'
 
 /** The supply's own impedance, and what was taken out of the stated one. */
@@ -30,8 +30,7 @@ export function sourceImpedance(plant: Plant): Setup<SourceImpedance> {
   const seen = reduceNetwork(matrix, [plant.supplyNode], null)
   if (seen === null) return refuse('bad-value', [supply.busId], 'The network between supply and motors is singular.')
   const motors: Complex = { re: seen.admittance[0]!, im: seen.admittance[1]! }
-  const whole = reciprocal(supply.impedance)
-  const rest = { re: whole.re - motors.re, im: whole.im - motors.im }
+  const rest = subtract(reciprocal(supply.impedance), motors)
   if (!(rest.re >= 0 && rest.im < 0)) {
     return refuse(
       'bad-value',
@@ -45,7 +44,7 @@ export function sourceImpedance(plant: Plant): Setup<SourceImpedance> {
     ok: true,
     value: {
       impedance,
-      takenOut: voltAmpere(nominal ** 2 * Math.hypot(motors.re, motors.im)),
+      takenOut: voltAmpere(nominal ** 2 * magnitude(motors)),
     },
   }
 }

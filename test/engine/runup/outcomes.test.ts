@@ -146,6 +146,39 @@ describe('a start', () => {
   })
 })
 
+describe('a load that all but holds the shaft', () => {
+  // A running machine slows down in the dip and takes the voltage that made the shaft stir.
+  const beside = simpleMotor('R', { kind: 'running', load: constantLoad(1100) }, { inertia: kilogramSquareMetre(20) })
+  const withLoad = (torque: number) =>
+    runCase(simplePlant([beside, simpleMotor('M', started({ kind: 'direct' }, constantLoad(torque)))], 0.03))
+  const standstill = withLoad(1).motors[1]!.start!.standstill.torque
+
+  it('lets it stir and come to rest again, without end neither of steps nor of switchings', () => {
+    for (const part of [1 - 1e-3, 1 - 1e-6, 1 - 1e-9, 1]) {
+      const result = withLoad(part * standstill)
+      const { outcome } = result.motors[1]!.start!
+      expect(['stalled', 'never-turned']).toContain(outcome.kind)
+      expect(result.motors[1]!.speedAtEnd).toBe(0)
+      expect(result.counters.steps).toBeLessThan(1000)
+    }
+  })
+
+  it('holds it when the torque is a hair too small', () => {
+    expect(withLoad(standstill * (1 + 1e-9)).motors[1]!.start!.outcome.kind).toBe('never-turned')
+  })
+
+  it('lets it go when the voltage comes back', () => {
+    // N starts at the same time, light and unloaded; once it is up the voltage rises and M breaks away.
+    const light = simpleMotor('N', started(), { inertia: kilogramSquareMetre(2) })
+    const held = simpleMotor('M', started({ kind: 'direct' }, constantLoad(250)))
+    const result = runCase(simplePlant([light, held], 0.04))
+    const { time, motors } = result.series
+    const stirs = time[motors.M!.speed.findIndex((speed) => speed > 0)]!
+    expect(stirs).toBeGreaterThan(0.05)
+    expect(result.motors[1]!.start!.outcome.kind).toBe('started')
+  })
+})
+
 describe('a running machine', () => {
   const running = (load: MotorInput['duty']['load'], changes: Partial<MotorInput> = {}) =>
     simpleMotor('R', { kind: 'running', load }, changes)
