@@ -22,7 +22,7 @@ interface DataTableProps<Row> {
 /** A dense table; wider than its place it scrolls by itself, never the page. */
 export function DataTable<Row>({ caption, columns, rows, rowId, chosen, captionHidden = true }: DataTableProps<Row>) {
   return (
-    <ScrollRegion label={caption} className="w-fit max-w-full border border-hair bg-sheet">
+    <ScrollRegion label={`${caption}, table`} className="w-fit max-w-full border border-hair bg-sheet">
       <table className="dense">
         <caption className={captionHidden ? 'sr-only' : 'px-2.5 pt-1.5 pb-0.5 text-left font-semibold'}>
           {caption}

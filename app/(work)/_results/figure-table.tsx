@@ -17,7 +17,7 @@ interface FigureTableProps<Item> {
 export function FigureTable<Item>({ caption, items, itemId, name, rows }: FigureTableProps<Item>) {
   if (items.length === 0) return null
   return (
-    <ScrollRegion label={caption} className="w-fit max-w-full border border-hair bg-sheet">
+    <ScrollRegion label={`${caption}, table`} className="w-fit max-w-full border border-hair bg-sheet">
       <table className="dense">
         <caption className="px-2.5 pt-1.5 text-left font-semibold">{caption}</caption>
         <thead>

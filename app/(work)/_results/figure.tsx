@@ -8,7 +8,7 @@ export function Figure({ scene, table }: { scene: Scene; table: SampledTable }) 
   return (
     <figure className="m-0 border border-hair bg-sheet p-2">
       <figcaption className="px-1 pb-1 font-semibold">{scene.title}</figcaption>
-      <ScrollRegion label={scene.title}>
+      <ScrollRegion label={`${scene.title}, drawn`}>
         <SceneSvg scene={scene} className="block min-w-116" />
       </ScrollRegion>
       <details className="px-1 pt-1 text-dense">

@@ -21,7 +21,7 @@ export function LimitsMatrix({ results }: { results: Results }) {
       <h2 id="limits" className="m-0 mb-1 text-title font-semibold">
         Limits matrix
       </h2>
-      <ScrollRegion label="Limits matrix" className="w-fit max-w-full border border-hair bg-sheet">
+      <ScrollRegion label="Limits matrix, table" className="w-fit max-w-full border border-hair bg-sheet">
         <table className="dense">
           <caption className="sr-only">
             Verdict, value and margin of every limit in every case. The margin is what is left inside the limit, or how

@@ -104,7 +104,9 @@ interface DecisionsProps {
 
 /** The decisions that the person may take on the revision now. */
 export function Decisions({ revisionId, allowed, purposes }: DecisionsProps) {
-  const decided = allowed.filter(isDecided)
+  // An accepted review is closed next; accepting it twice says nothing.
+  const closing = allowed.includes('close-review')
+  const decided = allowed.filter(isDecided).filter((action) => !(closing && action === 'accept-review'))
   if (decided.length === 0) return null
   return (
     <div className="flex flex-wrap gap-2">

@@ -1,5 +1,3 @@
-import { Verdict } from '@/lib/ui/verdict'
-
 interface Check {
   id: string
   sentence: string
@@ -36,21 +34,24 @@ export function PreIssueChecks({ kept }: { kept: unknown }) {
       </h2>
       <ul className="m-0 list-none border border-hair bg-sheet p-0">
         {open.map(({ id, sentence, issues }) => (
-          <li key={id} className="border-b border-hair px-3 py-1.5 last:border-b-0">
-            <Verdict word="fails" /> {sentence}
-            {issues.length > 0 ? (
+          <li key={id} className="border-b border-hair px-3 py-1.5">
+            <details>
+              <summary>
+                <span className="font-semibold text-close">to answer</span> {sentence}
+                {issues.length > 1 ? <span className="text-soft"> ({issues.length})</span> : null}
+              </summary>
               <ul className="m-0 list-disc pl-8 text-dense text-soft">
                 {issues.map(({ message }) => (
                   <li key={message}>{message}</li>
                 ))}
               </ul>
-            ) : null}
+            </details>
           </li>
         ))}
         <li className="px-3 py-1.5">
           <details>
             <summary>
-              <Verdict word="meets" /> {passed.length} of {checks.length} checks have nothing to say
+              <span className="font-semibold text-meets">clear</span> {passed.length} of {checks.length} checks
             </summary>
             <ul className="m-0 list-disc pl-8 text-dense text-soft">
               {passed.map(({ id, sentence }) => (

@@ -1,17 +1,9 @@
-import Link from 'next/link'
 import type { CertificateInForce } from '@/app/_action/own-certificate'
 import { signOffWords } from '@/app/_words/state-words'
-import { SignButton } from '@/app/(account)/_signing/sign-button'
 import type { RevisionView } from '@/lib/server/revisions/view'
-import { type SignOffRole, signOffRoles } from '@/lib/study/states'
+import { signOffRoles } from '@/lib/study/states'
 import { Moment } from '@/lib/ui/moment'
-import { complete, prepare } from './actions'
-
-const labels: Record<SignOffRole, string> = {
-  prepared: 'Sign as preparer',
-  checked: 'Sign as checker',
-  approved: 'Sign as approver',
-}
+import { SignHere } from './sign-here'
 
 interface SigningRoundProps {
   revision: RevisionView
@@ -61,23 +53,7 @@ export function SigningRound({ revision, certificate }: SigningRoundProps) {
           })}
         </tbody>
       </table>
-      {due && certificate ? (
-        <SignButton
-          label={labels[due]}
-          spki={certificate.spki}
-          prepare={prepare.bind(null, revisionId, due)}
-          complete={complete.bind(null, revisionId)}
-        />
-      ) : null}
-      {due && !certificate ? (
-        <p className="m-0">
-          You are the next to sign, and have no signing key yet:{' '}
-          <Link prefetch={false} href="/profile" className="link">
-            make your signing key
-          </Link>{' '}
-          first. A key made after the round has begun counts from the next round on.
-        </p>
-      ) : null}
+      <SignHere revisionId={revisionId} due={due ?? null} spki={certificate?.spki ?? null} />
       <p className="m-0 max-w-3xl text-label text-soft">
         Each signature is made with the signer’s own key in their own browser. It shows integrity and who stands behind
         the report within this organisation; it is not a qualified electronic signature and not a professional seal.

@@ -22,6 +22,8 @@ const open: Partial<Record<RevisionState, string>> = {
     'The review is closed: preparer, checker and approver sign the final report in this order, then it is issued.',
 }
 
+const inSentence = (text: string): string => `${text[0]?.toLowerCase()}${text.slice(1)}`
+
 /** Where a revision stands, in a sentence, with the revision to use instead. */
 export function Standing({ revision, hrefOf }: { revision: RevisionView; hrefOf: (revisionId: string) => string }) {
   const { state, number, purpose, issuedAt, supersededAt, withdrawn, issuedRevision } = revision
@@ -40,8 +42,8 @@ export function Standing({ revision, hrefOf }: { revision: RevisionView; hrefOf:
       {open[state]}
       {state === 'issued' && issuedAt ? (
         <>
-          Revision {number} is issued{purpose ? `, ${purpose.toLowerCase()}` : ''}, on <Moment at={issuedAt} />. It is
-          the one in force.
+          Revision {number} is issued{purpose ? `, ${inSentence(purpose)}` : ''}, on <Moment at={issuedAt} />. It is the
+          one in force.
         </>
       ) : null}
       {state === 'superseded' ? (
