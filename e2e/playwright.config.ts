@@ -39,7 +39,7 @@ export default defineConfig({
     command: 'node lib/start/serve-for-tests.mjs',
     cwd: root,
     url: `http://127.0.0.1:${port}/api/health`,
-    timeout: 120_000,
+    timeout: 300_000,
     gracefulShutdown: { signal: 'SIGTERM', timeout: 15_000 },
     env: { PORT: String(port), DEMO_SECRETS_FILE: path.join(root, '.data/test/people.json') },
     stdout: 'ignore',
