@@ -1,4 +1,4 @@
-import type { GroupDraft } from '@/lib/ui/form/draft'
+import type { Draft, GroupDraft } from '@/lib/ui/form/draft'
 import type { Field, Options } from '@/lib/ui/form/field'
 import { showDraft } from '@/lib/ui/form/show-draft'
 
@@ -29,5 +29,18 @@ export const compareDrafts = (
 /** Whether two drafts hold the same text; keys of rows that exist in the browser only do not count. */
 export const sameDraft = (a: GroupDraft, b: GroupDraft): boolean => plain(a) === plain(b)
 
-const plain = (draft: GroupDraft): string =>
+const samePart = (a: Draft | undefined, b: Draft | undefined): boolean => plain(a) === plain(b)
+
+/** My text over a colleague's: what I did not touch is theirs, what I changed stays mine. */
+export const mergeDrafts = (base: GroupDraft, mine: GroupDraft, theirs: GroupDraft): GroupDraft => ({
+  ...theirs,
+  parts: Object.fromEntries(
+    Object.entries(theirs.parts).map(([name, part]) => {
+      const own = mine.parts[name]
+      return [name, own && !samePart(own, base.parts[name]) ? own : part]
+    }),
+  ),
+})
+
+const plain = (draft: Draft | undefined): string =>
   JSON.stringify(draft, (name, value: unknown) => (name === 'key' ? undefined : value))

@@ -6,14 +6,17 @@ import type { DraftDifference } from './compare-drafts'
 interface ConflictPanelProps {
   by: string
   at: string
+  /** Fields that I changed and that read differently in what was saved. */
   differences: readonly DraftDifference[]
+  /** Fields that only the other person changed: they stay as saved. */
+  takenOver: readonly string[]
   busy: boolean
   onKeepMine: () => void
   onTakeTheirs: () => void
 }
 
 /** Two people changed one record: both texts side by side, and nothing lost until one is chosen. */
-export function ConflictPanel({ by, at, differences, busy, onKeepMine, onTakeTheirs }: ConflictPanelProps) {
+export function ConflictPanel({ by, at, differences, takenOver, busy, onKeepMine, onTakeTheirs }: ConflictPanelProps) {
   return (
     <Notice tone="caution">
       <p className="m-0 mb-2">
@@ -41,6 +44,11 @@ export function ConflictPanel({ by, at, differences, busy, onKeepMine, onTakeThe
           </tbody>
         </table>
       )}
+      {takenOver.length > 0 ? (
+        <p className="m-0 mb-2">
+          What {by} changed and you did not, stays as saved: {takenOver.join(', ').toLowerCase()}.
+        </p>
+      ) : null}
       <div className="flex flex-wrap gap-2">
         <Button busy={busy} onClick={onKeepMine}>
           Keep my text and save

@@ -1,13 +1,12 @@
 'use client'
 
-import { type FormEvent, useId, useMemo } from 'react'
+import { type FormEvent, useId } from 'react'
 import { answered } from '@/app/_action/outcome'
 import type { NumberStyle } from '@/lib/quantity/quantity-name'
 import { Button } from '@/lib/ui/button'
 import { Confirm } from '@/lib/ui/confirm'
 import type { Options } from '@/lib/ui/form/field'
 import { FormView } from '@/lib/ui/form/form-view'
-import { recordDraft } from '@/lib/ui/form/to-draft'
 import { Moment } from '@/lib/ui/moment'
 import { ScrollRegion } from '@/lib/ui/scroll-region'
 import { compareDrafts } from './compare-drafts'
@@ -51,11 +50,12 @@ export function RecordSheet(props: RecordSheetProps) {
     save: actions.save,
     onSaved,
   })
-  const differences = useMemo(
-    () =>
-      sheet.conflict ? compareDrafts(fields, sheet.draft, recordDraft(fields, sheet.conflict.theirs, style), tags) : [],
-    [sheet.conflict, sheet.draft, fields, style, tags],
-  )
+  const { base, merged, theirs } = sheet
+  const differences = merged && theirs ? compareDrafts(fields, merged, theirs, tags) : []
+  const takenOver =
+    merged && theirs
+      ? compareDrafts(fields, base, merged, tags).filter(({ name }) => !differences.some((one) => one.name === name))
+      : []
   const submit = (event: FormEvent) => {
     event.preventDefault()
     void sheet.save()
@@ -107,6 +107,7 @@ export function RecordSheet(props: RecordSheetProps) {
               by={sheet.conflict.by}
               at={sheet.conflict.at}
               differences={differences}
+              takenOver={takenOver.map(({ label }) => label)}
               busy={sheet.busy}
               onKeepMine={() => void sheet.keepMine()}
               onTakeTheirs={sheet.takeTheirs}

@@ -10,7 +10,7 @@ import type { Field } from '@/lib/ui/form/field'
 import { readDraft } from '@/lib/ui/form/read-draft'
 import { recordDraft } from '@/lib/ui/form/to-draft'
 import { useKeptDraft } from '@/lib/ui/form/use-kept-draft'
-import { sameDraft } from './compare-drafts'
+import { mergeDrafts, sameDraft } from './compare-drafts'
 import { type Conflict, readConflict } from './conflict'
 import type { RecordActions, SavedRecord } from './record-row'
 
@@ -39,6 +39,9 @@ export const useRecordSheet = ({ fields, style, keptAs, id, version, values, sav
   const [refusal, setRefusal] = useState<Refusal | null>(null)
   const [conflict, setConflict] = useState<Conflict | null>(null)
 
+  const theirs = useMemo(() => conflict && recordDraft(fields, conflict.theirs, style), [conflict, fields, style])
+  const merged = theirs && mergeDrafts(form.base, form.draft, theirs)
+
   const send = async (draft: GroupDraft, over: number) => {
     const read = readDraft(fields, draft, style)
     if (read.issues.length > 0) {
@@ -57,7 +60,8 @@ export const useRecordSheet = ({ fields, style, keptAs, id, version, values, sav
     setRefusal(outcome.ok ? null : outcome)
     setConflict(outcome.ok ? null : readConflict(outcome.detail))
     if (!outcome.ok) return form.refuse(outcome.issues.map(belowValues))
-    form.startFrom(id === null ? saved : draft, outcome.value.version, false)
+    form.startFrom(id === null ? saved : draft, outcome.value.version)
+    setConflict(null)
     router.refresh()
     onSaved(outcome.value)
   }
@@ -70,16 +74,19 @@ export const useRecordSheet = ({ fields, style, keptAs, id, version, values, sav
     conflict,
     unsaved: form.touched && !sameDraft(form.draft, saved),
     save: () => send(form.draft, form.version),
-    keepMine: () => conflict && send(form.draft, conflict.version),
+    /** Mine over theirs, as it would be saved; null where there is no conflict. */
+    merged,
+    theirs,
+    keepMine: () => conflict && merged && send(merged, conflict.version),
     takeTheirs: () => {
-      if (!conflict) return
-      form.startFrom(recordDraft(fields, conflict.theirs, style), conflict.version, false)
+      if (!conflict || !theirs) return
+      form.startFrom(theirs, conflict.version)
       setConflict(null)
       setRefusal(null)
       router.refresh()
     },
     discard: () => {
-      form.startFrom(saved, version, false)
+      form.startFrom(saved, version)
       setConflict(null)
       setRefusal(null)
     },

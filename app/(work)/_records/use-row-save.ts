@@ -7,6 +7,7 @@ import type { GroupDraft } from '@/lib/ui/form/draft'
 import type { Field } from '@/lib/ui/form/field'
 import { keepDraft } from '@/lib/ui/form/kept-draft'
 import { readDraft } from '@/lib/ui/form/read-draft'
+import { recordDraft } from '@/lib/ui/form/to-draft'
 import type { RecordActions, RecordRow } from './record-row'
 
 interface RowSave {
@@ -30,7 +31,8 @@ export const useRowSave = ({ fields, style, actions, keptAs, onRefused }: RowSav
       router.refresh()
       return null
     }
-    keepDraft(keptAs(row.id), { draft, version: row.version, at: Date.now() })
+    const base = recordDraft(fields, row.values, style)
+    keepDraft(keptAs(row.id), { draft, base, version: row.version, at: Date.now() })
     onRefused(row.id)
     return outcome.message
   }

@@ -3,6 +3,8 @@ import type { GroupDraft } from './draft'
 /** Unsaved text of one form with the version it was typed over. */
 export interface KeptDraft {
   draft: GroupDraft
+  /** The record as it was when typing began. */
+  base: GroupDraft
   version: number
   /** When it was last typed into, milliseconds. */
   at: number
@@ -12,8 +14,8 @@ const prefix = 'breakaway.unsaved.'
 
 const isKept = (value: unknown): value is KeptDraft => {
   if (typeof value !== 'object' || value === null) return false
-  const { draft, version, at } = value as Partial<KeptDraft>
-  return typeof version === 'number' && typeof at === 'number' && draft?.is === 'group'
+  const { draft, base, version, at } = value as Partial<KeptDraft>
+  return typeof version === 'number' && typeof at === 'number' && draft?.is === 'group' && base?.is === 'group'
 }
 
 /** Keeps unsaved text in this browser, so that a reload or an ended session loses none. A full or closed store is no error. */

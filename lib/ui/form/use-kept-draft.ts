@@ -7,6 +7,8 @@ import { forgetDraft, keepDraft, keptDraft } from './kept-draft'
 
 interface FormState {
   draft: GroupDraft
+  /** The record as it was when typing began. */
+  base: GroupDraft
   issues: readonly FieldIssue[]
   /** Version that the text was typed over. */
   version: number
@@ -22,6 +24,7 @@ interface FormState {
 export const useKeptDraft = (key: string, saved: GroupDraft, version: number) => {
   const [state, setState] = useState<FormState>({
     draft: saved,
+    base: saved,
     issues: [],
     version,
     restoredFrom: null,
@@ -33,7 +36,15 @@ export const useKeptDraft = (key: string, saved: GroupDraft, version: number) =>
     const kept = keptDraft(key)
     setState((now) =>
       kept && !now.ready
-        ? { ...now, draft: kept.draft, version: kept.version, restoredFrom: kept.at, touched: true, ready: true }
+        ? {
+            ...now,
+            draft: kept.draft,
+            base: kept.base,
+            version: kept.version,
+            restoredFrom: kept.at,
+            touched: true,
+            ready: true,
+          }
         : { ...now, ready: true },
     )
   }, [key])
@@ -41,7 +52,7 @@ export const useKeptDraft = (key: string, saved: GroupDraft, version: number) =>
   const change = useCallback(
     (draft: GroupDraft, issues: readonly FieldIssue[]) => {
       setState((now) => {
-        keepDraft(key, { draft, version: now.version, at: Date.now() })
+        keepDraft(key, { draft, base: now.base, version: now.version, at: Date.now() })
         return { ...now, draft, issues, touched: true }
       })
     },
@@ -52,17 +63,16 @@ export const useKeptDraft = (key: string, saved: GroupDraft, version: number) =>
 
   /** Goes on from another state of the record: the saved one, or a colleague's. */
   const startFrom = useCallback(
-    (draft: GroupDraft, from: number, unsaved: boolean) => {
-      if (unsaved) keepDraft(key, { draft, version: from, at: Date.now() })
-      else forgetDraft(key)
-      setState({ draft, issues: [], version: from, restoredFrom: null, touched: unsaved, ready: true })
+    (draft: GroupDraft, from: number) => {
+      forgetDraft(key)
+      setState({ draft, base: draft, issues: [], version: from, restoredFrom: null, touched: false, ready: true })
     },
     [key],
   )
 
   useEffect(() => {
     // Somebody else's change, or one made in the table, reaches a sheet that holds no text of its own.
-    if (!state.touched && state.ready && version !== state.version) startFrom(saved, version, false)
+    if (!state.touched && state.ready && version !== state.version) startFrom(saved, version)
   }, [state.touched, state.ready, state.version, version, saved, startFrom])
 
   return { ...state, change, refuse, startFrom }

@@ -1,6 +1,6 @@
 'use client'
 
-import { type FormEvent, useMemo } from 'react'
+import type { FormEvent } from 'react'
 import { compareDrafts } from '@/app/(work)/_records/compare-drafts'
 import { ConflictPanel } from '@/app/(work)/_records/conflict-panel'
 import { SheetState } from '@/app/(work)/_records/sheet-state'
@@ -8,7 +8,6 @@ import { useRecordSheet } from '@/app/(work)/_records/use-record-sheet'
 import type { NumberStyle } from '@/lib/quantity/quantity-name'
 import { Button } from '@/lib/ui/button'
 import { FormView } from '@/lib/ui/form/form-view'
-import { recordDraft } from '@/lib/ui/form/to-draft'
 import { saveStudy } from './actions'
 import { studyFields } from './study-fields'
 
@@ -33,13 +32,12 @@ export function StudySheet({ studyId, version, values, style, editable, keptAs }
     save: (change) => saveStudy(studyId, change.version, change.values),
     onSaved: () => undefined,
   })
-  const differences = useMemo(
-    () =>
-      sheet.conflict
-        ? compareDrafts(studyFields, sheet.draft, recordDraft(studyFields, sheet.conflict.theirs, style), {})
-        : [],
-    [sheet.conflict, sheet.draft, style],
-  )
+  const { base, merged, theirs } = sheet
+  const differences = merged && theirs ? compareDrafts(studyFields, merged, theirs, {}) : []
+  const takenOver =
+    merged && theirs
+      ? compareDrafts(studyFields, base, merged, {}).filter(({ name }) => !differences.some((one) => one.name === name))
+      : []
   const submit = (event: FormEvent) => {
     event.preventDefault()
     void sheet.save()
@@ -63,6 +61,7 @@ export function StudySheet({ studyId, version, values, style, editable, keptAs }
           by={sheet.conflict.by}
           at={sheet.conflict.at}
           differences={differences}
+          takenOver={takenOver.map(({ label }) => label)}
           busy={sheet.busy}
           onKeepMine={() => void sheet.keepMine()}
           onTakeTheirs={sheet.takeTheirs}
