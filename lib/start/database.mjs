@@ -1,15 +1,36 @@
 // @ts-check
 import path from 'node:path'
-import { ensureDatabase } from './embedded/owner.mjs'
+import { ensureDatabase, withClient } from './embedded/owner.mjs'
 import { startCluster } from './embedded/server.mjs'
 import { bundleOf } from './entries.mjs'
 import { Failure } from './failure.mjs'
 import { acceptDatabase } from './migrate/accept.mjs'
 import { applyMigrations } from './migrate/apply.mjs'
 import { lastLines, runNode } from './run-step.mjs'
+import { stampOf } from './stamp.mjs'
 
 /** The application's database in the embedded cluster. */
 const databaseName = 'breakaway'
+
+/** The queue's tables carry what they were made of, so that a start with nothing new need not run a program for it. */
+const queueStamp = () => stampOf({ paths: ['.jobs/queues.js', 'node_modules/pg-boss/package.json'] })
+
+/** @param {string} url */
+async function ensureQueues(url) {
+  const stamp = queueStamp()
+  const made = await withClient(url, async (client) => {
+    const { rows } = await client.query("select obj_description(to_regnamespace('pgboss')) as stamp")
+    return rows[0].stamp
+  })
+  if (made === stamp) return
+  const queues = await runNode([bundleOf('queues')], { DATABASE_URL: url })
+  if (queues.status !== 0) {
+    throw new Failure(
+      `${lastLines(queues, 12)}\nThe queues could not be made: the user in DATABASE_URL must own the database or have the right to create schemas in it.`,
+    )
+  }
+  await withClient(url, (client) => client.query(`comment on schema pgboss is ${client.escapeLiteral(stamp)}`))
+}
 
 /**
  * Brings a database to this version: checks it, applies migrations, makes the queues.
@@ -19,12 +40,7 @@ const databaseName = 'breakaway'
 export async function bringUpToDate(url) {
   await acceptDatabase(url)
   const applied = await applyMigrations(url)
-  const queues = await runNode([bundleOf('queues')], { DATABASE_URL: url })
-  if (queues.status !== 0) {
-    throw new Failure(
-      `${lastLines(queues, 12)}\nThe queues could not be made: the user in DATABASE_URL must own the database or have the right to create schemas in it.`,
-    )
-  }
+  await ensureQueues(url)
   return applied
 }
 

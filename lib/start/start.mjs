@@ -1,5 +1,6 @@
 // @ts-check
 import './node-version.mjs'
+import fs from 'node:fs'
 import path from 'node:path'
 import { isLoopback, readEnvironment } from './environment.mjs'
 import { runCommand } from './failure.mjs'
@@ -55,8 +56,13 @@ async function start(undo) {
   const env = { ...process.env, ...programEnvironment({ databaseUrl, secrets, development }) }
   const { peopleTable, readDemoPeople, seedDemo } = await import('./demo.mjs')
   const demo = environment.databaseUrl === null && isLoopback(host)
-  if (demo) await seedDemo(databaseUrl, demoPeopleFile(secretsDir), env)
-  else if (environment.databaseUrl === null)
+  // lies beside the database it tells about, so that both go together
+  const seeded = path.join(dataDir, 'pg.seeded')
+  if (demo && !fs.existsSync(seeded)) {
+    await seedDemo(databaseUrl, demoPeopleFile(secretsDir), env)
+    fs.writeFileSync(seeded, '')
+  }
+  if (!demo && environment.databaseUrl === null)
     say('No demo people are made where other machines can reach the application (HOST)')
   const server = development ? null : await prepareApplication(say)
   const { startService } = await import('./service/service.mjs')

@@ -63,7 +63,8 @@ export function createCluster({ dataDir, account, native }) {
     fs.chownSync(unfinished, account.uid, account.gid)
     fs.chownSync(oneLine, account.uid, account.gid)
   }
-  fs.rmSync(passwordFile(dataDir), { force: true })
+  // what tells about an earlier cluster of this name goes with it
+  for (const word of ['passwords', 'port', 'seeded']) fs.rmSync(`${dataDir}.${word}`, { force: true })
   fs.writeFileSync(passwordFile(dataDir), JSON.stringify(passwords), { mode: 0o600 })
   try {
     const options = [
