@@ -1,6 +1,7 @@
 // @ts-check
 import './node-version.mjs'
 import { runCommand } from './failure.mjs'
+import { choosePort } from './port.mjs'
 import { prepareApplication, preparePrograms } from './prepare.mjs'
 import { showNode } from './run-step.mjs'
 import { runUntilStopped } from './undo-list.mjs'
@@ -64,7 +65,9 @@ async function testEverything(undo) {
     try {
       const { chromium } = await import('@playwright/test')
       const browser = await findChromium(process.env, async () => chromium.executablePath())
-      const status = await showNode([...playwright, '--reporter=list,json'], { ...env, CHROMIUM: browser })
+      const port = process.env.E2E_PORT || String(await choosePort({ host: '127.0.0.1', first: 4310 }))
+      const how = { ...env, CHROMIUM: browser, E2E_PORT: port }
+      const status = await showNode([...playwright, '--reporter=list,json'], how)
       return countPlaywright(report, status)
     } catch (error) {
       return cannotRun(error instanceof Error ? error.message : String(error))
