@@ -24,6 +24,8 @@ export function proxy(request: NextRequest) {
   const policy = contentSecurityPolicy(nonce, process.env.NODE_ENV === 'development')
   const headers = new Headers(request.headers)
   headers.set('x-nonce', nonce)
+  // Where to come back to after signing in; a page does not know its own address.
+  headers.set('x-path', request.nextUrl.pathname + request.nextUrl.search)
   headers.set('content-security-policy', policy)
   const response = NextResponse.next({ request: { headers } })
   response.headers.set('content-security-policy', policy)

@@ -1,9 +1,9 @@
 import 'server-only'
 import { notFound } from 'next/navigation'
 import type * as z from 'zod'
+import { signedIn } from '@/app/_action/signed-in'
 import { DomainError } from '@/lib/errors'
 import { type OwnQuery, type Query, read } from '@/lib/server/read'
-import { requireActor } from '@/lib/server/session'
 
 const isHidden = (error: unknown): boolean =>
   error instanceof DomainError && ['not-found', 'forbidden', 'invalid'].includes(error.code)
@@ -13,7 +13,7 @@ export const seek = async <Shape extends z.ZodType, Subject, Answer>(
   asked: Query<Shape, Subject, Answer> | OwnQuery<Shape, Answer>,
   input: z.input<Shape>,
 ): Promise<Answer | null> => {
-  const actor = await requireActor()
+  const actor = await signedIn()
   try {
     return await read(asked, actor, input)
   } catch (error) {

@@ -1,5 +1,5 @@
 import 'server-only'
-import { X509Certificate } from 'node:crypto'
+import { publicKeyOf } from '@/app/(account)/_signing/public-key-of'
 import { myCertificate } from '@/lib/server/people/queries'
 import { listedCertificates } from '@/lib/server/signoff/queries'
 import { ask, seek } from './ask'
@@ -18,7 +18,6 @@ export const ownCertificate = async (organisationId: string): Promise<Certificat
   if (!own) return null
   const listed = (await ask(listedCertificates, { organisationId })).find((one) => one.fingerprint === own.fingerprint)
   if (!listed) return null
-  const { publicKey } = new X509Certificate(Buffer.from(listed.certificate, 'base64'))
   const { fingerprint, notAfter } = own
-  return { fingerprint, notAfter, spki: publicKey.export({ type: 'spki', format: 'der' }).toString('base64') }
+  return { fingerprint, notAfter, spki: publicKeyOf(listed.certificate) }
 }

@@ -1,7 +1,7 @@
 import { type ReactNode, useId } from 'react'
 
 /** What a control needs to be tied to its label, its hint and its error. */
-export interface ControlProps {
+interface ControlProps {
   id: string
   'aria-describedby': string | undefined
   'aria-invalid': true | undefined

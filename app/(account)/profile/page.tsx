@@ -1,15 +1,15 @@
 import type { Metadata } from 'next'
 import { ask } from '@/app/_action/ask'
+import { signedIn } from '@/app/_action/signed-in'
 import { WorkFrame } from '@/app/(work)/_frame/work-frame'
 import { myOrganisations } from '@/lib/server/people/queries'
-import { requireActor } from '@/lib/server/session'
 import { OwnSigningKey } from './own-signing-key'
 import { PasswordForm } from './password-form'
 
 export const metadata: Metadata = { title: 'Profile' }
 
 export default async function ProfilePage() {
-  const actor = await requireActor()
+  const actor = await signedIn()
   const organisations = await ask(myOrganisations, {})
   return (
     <WorkFrame path={[{ label: 'Projects', href: '/projects' }, { label: 'Profile' }]}>

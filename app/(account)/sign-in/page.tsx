@@ -13,6 +13,9 @@ export default async function SignInPage({ searchParams }: PageProps<'/sign-in'>
           Motor-starting studies on weak supplies, from plant records to the signed report.
         </p>
       </div>
+      {typeof then === 'string' && then !== 'close' && then !== '/projects' ? (
+        <p className="m-0">Sign in to go on where you were. Text that was not saved is kept in this browser.</p>
+      ) : null}
       <SignInForm then={typeof then === 'string' ? then : null} />
       <p className="m-0 border-t border-hair pt-3 text-label text-soft">
         This service supports the judgement of a licensed engineer and never replaces it. Local codes, the utility’s

@@ -1,10 +1,10 @@
 import Link from 'next/link'
 import type { ReactNode } from 'react'
-import { requireActor } from '@/lib/server/session'
+import { signedIn } from '@/app/_action/signed-in'
 import { PersonMenu } from './person-menu'
 import { TitleBlock, type TitleCell } from './title-block'
 
-export interface PathStep {
+interface PathStep {
   label: string
   href?: string
 }
@@ -19,7 +19,7 @@ interface WorkFrameProps {
 
 /** The sheet that all work is done on: path on top, places at the left, title block along the bottom. */
 export async function WorkFrame({ path, places, cells, children }: WorkFrameProps) {
-  const actor = await requireActor()
+  const actor = await signedIn()
   return (
     <div className="flex min-h-dvh flex-col">
       <a

@@ -1,5 +1,6 @@
 'use client'
 
+import { useRouter } from 'next/navigation'
 import { type FormEvent, useId } from 'react'
 import { answered } from '@/app/_action/outcome'
 import type { NumberStyle } from '@/lib/quantity/quantity-name'
@@ -40,6 +41,7 @@ export function RecordSheet(props: RecordSheetProps) {
   const { description, row, template, options, tags, style, knownSources, keptAs, editable, actions, onSaved } = props
   const { fields, one } = description
   const heading = useId()
+  const router = useRouter()
   const sheet = useRecordSheet({
     fields,
     style,
@@ -66,6 +68,7 @@ export function RecordSheet(props: RecordSheetProps) {
     if (!outcome.ok) return outcome.message
     sheet.discard()
     props.onClose()
+    router.refresh()
     return null
   }
   const tag = typeof row?.values.tag === 'string' ? row.values.tag : null

@@ -46,6 +46,8 @@ export function RecordWorkspace(props: RecordWorkspaceProps) {
   const copied = rows.find((record) => record.id === query.get('copy')) ?? null
   // Rises when the sheet must look for its text again: another record was added, or a cell was refused.
   const [round, setRound] = useState(0)
+  // Just added: its row is on the way.
+  const [added, setAdded] = useState<string | null>(null)
   const show = (id: string | null, copyOf: string | null = null) => {
     const next = new URLSearchParams(query)
     next.delete('record')
@@ -82,7 +84,7 @@ export function RecordWorkspace(props: RecordWorkspaceProps) {
           </Button>
         ) : null}
       </div>
-      {open !== undefined && !row && !adding ? (
+      {open !== undefined && !row && !adding && open !== added ? (
         <Notice tone="caution">The record that was open is no longer there: somebody removed it.</Notice>
       ) : null}
       <div className="flex flex-col-reverse gap-4 xl:flex-row xl:items-start">
@@ -122,6 +124,7 @@ export function RecordWorkspace(props: RecordWorkspaceProps) {
               onCopy={row ? () => show('new', row.id) : null}
               onSaved={(saved) => {
                 if (row) return
+                setAdded(saved.id)
                 setRound((count) => count + 1)
                 show(saved.id)
               }}

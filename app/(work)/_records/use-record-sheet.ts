@@ -62,8 +62,9 @@ export const useRecordSheet = ({ fields, style, keptAs, id, version, values, sav
     if (!outcome.ok) return form.refuse(outcome.issues.map(belowValues))
     form.startFrom(id === null ? saved : draft, outcome.value.version)
     setConflict(null)
-    router.refresh()
+    // The address first: changing it would cancel a refresh that is under way.
     onSaved(outcome.value)
+    router.refresh()
   }
 
   return {

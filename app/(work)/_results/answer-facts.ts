@@ -35,7 +35,7 @@ const most = (starts: readonly StartOf[], figure: (start: StartResult) => number
     return value !== null && (known === null || known === undefined || value > known) ? one : best
   }, undefined)
 
-export const supplyLevel = ({ level, xOverR }: SupplyRecord): string => {
+const supplyLevel = ({ level, xOverR }: SupplyRecord): string => {
   const ratio = xOverR ? `, X/R ${xOverR.text}` : ''
   if (level.form === 'power') return `${level.power.text}${ratio}`
   if (level.form === 'current') return `${level.current.text}${ratio}`

@@ -21,7 +21,7 @@ const timeAxis = ({ result }: CaseFigure): TableCurve => ({
 const rpm = (values: readonly number[] = []): number[] => values.map((value) => toRpm(radianPerSecond(value)))
 
 /** Buses that limits are set for, and the terminals of what starts: the places that a reader looks at first. */
-export const placesToDraw = ({ document, result, verdicts }: CaseFigure): readonly string[] => {
+const placesToDraw = ({ document, result, verdicts }: CaseFigure): readonly string[] => {
   const limited = document.limits.flatMap(({ place }) => (place.kind === 'bus' ? [place.bus] : []))
   const terminals = result.motors
     .filter(({ start }) => start)
@@ -31,7 +31,7 @@ export const placesToDraw = ({ document, result, verdicts }: CaseFigure): readon
   return [...new Set([...limited, ...terminals, ...judged])].filter((id) => present.has(id))
 }
 
-export function VoltageFigure({ figure, busId }: { figure: CaseFigure; busId: string }) {
+function VoltageFigure({ figure, busId }: { figure: CaseFigure; busId: string }) {
   const nominal = figure.document.plant.buses.find(({ id }) => id === busId)?.nominal.si ?? Number.NaN
   const values = (figure.result.series.busVoltage[busId] ?? []).map((value) => (100 * value) / nominal)
   const curve = { head: `${busTag(figure.document, busId)}, % of nominal`, values, decimals: 2 }
@@ -43,7 +43,7 @@ export function VoltageFigure({ figure, busId }: { figure: CaseFigure; busId: st
 const startedIds = ({ result }: CaseFigure): readonly string[] =>
   result.motors.filter(({ start }) => start).map(({ motorId }) => motorId)
 
-export function SpeedFigure({ figure }: { figure: CaseFigure }) {
+function SpeedFigure({ figure }: { figure: CaseFigure }) {
   const curves = startedIds(figure).map((id) => ({
     head: `${motorTag(figure.document, id)}, r/min`,
     values: rpm(figure.result.series.motors[id]?.speed),
@@ -52,7 +52,7 @@ export function SpeedFigure({ figure }: { figure: CaseFigure }) {
   return <Figure scene={speedPlot(figure, size)} table={sampledTable(timeAxis(figure), curves)} />
 }
 
-export function CurrentFigure({ figure }: { figure: CaseFigure }) {
+function CurrentFigure({ figure }: { figure: CaseFigure }) {
   const curves = startedIds(figure).flatMap((id) => {
     const series = figure.result.series.motors[id]
     const tag = motorTag(figure.document, id)
@@ -64,7 +64,7 @@ export function CurrentFigure({ figure }: { figure: CaseFigure }) {
   return <Figure scene={currentPlot(figure, size)} table={sampledTable(timeAxis(figure), curves)} />
 }
 
-export function TorqueFigure({ figure, motorId }: { figure: CaseFigure; motorId: string }) {
+function TorqueFigure({ figure, motorId }: { figure: CaseFigure; motorId: string }) {
   const series = figure.result.series.motors[motorId]
   const axis = { head: 'Speed, r/min', values: rpm(series?.speed), decimals: 1 }
   const kilo = (values: readonly number[] = []) => values.map((value) => value / 1000)

@@ -1,8 +1,8 @@
 import type { Metadata } from 'next'
 import { ask } from '@/app/_action/ask'
+import { signedIn } from '@/app/_action/signed-in'
 import { can } from '@/lib/policy/can'
 import { myOrganisations, myProjects } from '@/lib/server/people/queries'
-import { requireActor } from '@/lib/server/session'
 import { EmptyState } from '@/lib/ui/empty-state'
 import { WorkFrame } from '../_frame/work-frame'
 import { startProject } from './actions'
@@ -13,7 +13,7 @@ import { QuickForm } from './quick-form'
 export const metadata: Metadata = { title: 'Projects' }
 
 export default async function ProjectsPage() {
-  const actor = await requireActor()
+  const actor = await signedIn()
   const projects = await ask(myProjects, {})
   const organisations = await ask(myOrganisations, {})
   const mayStart = organisations.filter(({ organisationId, role }) => {

@@ -42,7 +42,7 @@ export interface GroupDraft {
   parts: Readonly<Record<string, Draft>>
 }
 
-export interface ListRow {
+interface ListRow {
   key: string
   group: GroupDraft
 }
@@ -54,15 +54,6 @@ export interface ListDraft {
 
 /** From the record's root; a number is a row of a list, an empty name the record's own shape. */
 export type DraftPath = readonly (string | number)[]
-
-/** The draft at a path; undefined where there is none. */
-export const draftAt = (draft: Draft, path: DraftPath): Draft | undefined => {
-  const [head, ...rest] = path
-  if (head === undefined) return draft
-  const next =
-    draft.is === 'group' ? draft.parts[head] : draft.is === 'list' ? draft.rows[Number(head)]?.group : undefined
-  return next && draftAt(next, rest)
-}
 
 /** The same draft with one part replaced; a path that leads nowhere changes nothing. */
 export const withDraftAt = <T extends Draft>(draft: T, path: DraftPath, value: Draft): T => {

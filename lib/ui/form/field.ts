@@ -83,7 +83,7 @@ export interface FlagField extends Named {
 }
 
 /** Kind of source and its document, for parts that have one source together. */
-export interface SourceField extends Named {
+interface SourceField extends Named {
   kind: 'source'
 }
 

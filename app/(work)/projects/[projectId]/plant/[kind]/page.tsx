@@ -2,6 +2,7 @@ import type { Metadata } from 'next'
 import { notFound } from 'next/navigation'
 import { Suspense } from 'react'
 import { ask } from '@/app/_action/ask'
+import { signedIn } from '@/app/_action/signed-in'
 import { studyTitleCells } from '@/app/(work)/_frame/study-title-cells'
 import { WorkFrame } from '@/app/(work)/_frame/work-frame'
 import { recordOptions, recordTags } from '@/app/(work)/_records/record-options'
@@ -9,7 +10,6 @@ import { RecordWorkspace } from '@/app/(work)/_records/record-workspace'
 import { myProjects } from '@/lib/server/people/queries'
 import { plantRecords } from '@/lib/server/plants/queries'
 import { plantKind } from '@/lib/server/plants/schema'
-import { requireActor } from '@/lib/server/session'
 import { studyView } from '@/lib/server/studies/queries'
 import { removePlantRecord, savePlantRecord } from './actions'
 import { PlantPlaces } from './plant-places'
@@ -30,7 +30,7 @@ export default async function PlantPage({ params, searchParams }: PageProps<'/pr
   const { projectId, kind: asked } = await params
   const kind = plantKind.safeParse(asked)
   if (!kind.success) notFound()
-  const actor = await requireActor()
+  const actor = await signedIn()
   const { project, rows, editable } = await ask(plantRecords, { projectId })
   const studyId = await studyAround(projectId, await searchParams)
   const study = studyId ? await ask(studyView, { studyId }) : null

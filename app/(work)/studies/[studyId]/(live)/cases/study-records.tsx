@@ -1,7 +1,7 @@
 import { Suspense } from 'react'
+import { signedIn } from '@/app/_action/signed-in'
 import { recordOptions, recordTags } from '@/app/(work)/_records/record-options'
 import { RecordWorkspace } from '@/app/(work)/_records/record-workspace'
-import { requireActor } from '@/lib/server/session'
 import type { StudyView } from '@/lib/server/studies/view'
 import type { StudyRecordKind } from '@/lib/study/document/record-kinds'
 import { removeStudyRecordAction, saveStudyRecord } from './record-actions'
@@ -16,7 +16,7 @@ interface StudyRecordsProps {
 /** Table and sheet of the study's records of one kind. */
 export async function StudyRecords({ study, kind, inWords }: StudyRecordsProps) {
   const { studyId, plant, rows, numberStyle, may } = study
-  const actor = await requireActor()
+  const actor = await signedIn()
   const place = { studyId, kind }
   return (
     <Suspense>

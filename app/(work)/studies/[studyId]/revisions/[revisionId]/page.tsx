@@ -1,6 +1,7 @@
 import type { Metadata } from 'next'
 import { ask, seek } from '@/app/_action/ask'
 import { ownCertificate } from '@/app/_action/own-certificate'
+import { signedIn } from '@/app/_action/signed-in'
 import { PlaceList } from '@/app/(work)/_frame/place-list'
 import { studyPlaces } from '@/app/(work)/_frame/places'
 import { WorkFrame } from '@/app/(work)/_frame/work-frame'
@@ -17,7 +18,6 @@ import { Standing } from '@/app/(work)/_review/standing'
 import { can } from '@/lib/policy/can'
 import { revisionDocument, revisionSeries, revisionView } from '@/lib/server/revisions/queries'
 import { purposes } from '@/lib/server/revisions/schema'
-import { requireActor } from '@/lib/server/session'
 import { Moment } from '@/lib/ui/moment'
 
 export const metadata: Metadata = { title: 'Revision' }
@@ -27,7 +27,7 @@ export default async function RevisionPage({
   searchParams,
 }: PageProps<'/studies/[studyId]/revisions/[revisionId]'>) {
   const { studyId, revisionId } = await params
-  const { userId } = await requireActor()
+  const { userId } = await signedIn()
   const revision = await ask(revisionView, { revisionId })
   const results = { document: await ask(revisionDocument, { revisionId }), summary: revision.summary }
   const caseId = caseToOpen(results, (await searchParams).case)

@@ -1,5 +1,5 @@
 import type { Metadata } from 'next'
-import { requireActor } from '@/lib/server/session'
+import { signedIn } from '@/app/_action/signed-in'
 import { studyOf } from '../../study'
 import { StudySheet } from './study-sheet'
 
@@ -7,7 +7,7 @@ export const metadata: Metadata = { title: 'Settings and texts' }
 
 export default async function SettingsPage({ params }: PageProps<'/studies/[studyId]/cases/settings'>) {
   const { studyId } = await params
-  const actor = await requireActor()
+  const actor = await signedIn()
   const { head, settings, texts, frequency, numberStyle, version, may } = await studyOf(studyId)
   return (
     <StudySheet
