@@ -7,4 +7,4 @@ import { env } from '../env'
 
 /** Checks an uploaded file in the thread that was bundled for it. */
 export const checkInThread = (bytes: Uint8Array, context: VerificationContext): Promise<CheckedUpload> =>
-  verifyInThread(bytes, context, { entry: path.join(env().JOBS_DIR, 'verify.js') })
+  verifyInThread(bytes, context, { entry: path.resolve(env().JOBS_DIR, 'verify.js') })
