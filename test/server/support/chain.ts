@@ -1,0 +1,24 @@
+import { chainStart, eventHash } from '@/lib/server/audit'
+import type { Tx } from '@/lib/server/db'
+import { enterAsJob } from '@/lib/server/enter'
+import { demo } from '@/prisma/seed/seed-demo'
+
+/** The demo project's events in their order, and the head row that names the last of them. */
+export async function chainOf(tx: Tx) {
+  await enterAsJob(tx, demo.organisationId)
+  const events = await tx.auditEvent.findMany({ where: { scope: demo.projectId }, orderBy: { sequence: 'asc' } })
+  const head = await tx.project.findFirstOrThrow({ where: { id: demo.projectId } })
+  return { events, head }
+}
+
+/** Where the demo project's chain breaks: the first sequence that does not follow from what stands before it; null if it holds. */
+export async function breakOf(tx: Tx): Promise<number | null> {
+  const { events, head } = await chainOf(tx)
+  let previousHash = chainStart
+  for (const [index, event] of events.entries()) {
+    const follows = event.sequence === index + 1 && event.previousHash === previousHash
+    if (!follows || event.hash !== eventHash(event)) return index + 1
+    previousHash = event.hash
+  }
+  return head.sequence === events.length && head.auditHash === previousHash ? null : events.length + 1
+}
