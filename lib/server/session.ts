@@ -1,6 +1,5 @@
 import 'server-only'
 import { headers } from 'next/headers'
-import { redirect } from 'next/navigation'
 import { cache } from 'react'
 import type { Actor } from './actor'
 import { auth } from './auth'
@@ -15,10 +14,3 @@ export async function actorOf(requestHeaders: Headers): Promise<Actor | null> {
 
 /** The signed-in person, looked up once a request; null when nobody is signed in. */
 export const currentActor: () => Promise<Actor | null> = cache(async () => actorOf(await headers()))
-
-/** The signed-in person; anybody else is sent to the sign-in page. */
-export async function requireActor(): Promise<Actor> {
-  const actor = await currentActor()
-  if (!actor) redirect('/sign-in')
-  return actor
-}
