@@ -59,3 +59,28 @@ test('a stale save names whose change it met and keeps both texts', async ({ bro
   await expect(other.getByText('Station, first desk').first()).toBeVisible()
   await expect(other.getByLabel('Name').first()).toHaveValue('Station, second desk')
 })
+
+test('a session that ended while typing is said, and the text is there after signing in again', async ({
+  page,
+  consoleErrors,
+}) => {
+  await signIn(page, 'Lindqvar')
+  await buses(page)
+  const address = page.url()
+  await page.getByRole('button', { name: 'Add bus' }).first().click()
+  await page.getByLabel('Tag', { exact: true }).fill('LATE BUS')
+  await page
+    .getByLabel(/Nominal/)
+    .first()
+    .fill('6.6 kV')
+  await page.context().clearCookies()
+  await page.locator('form').getByRole('button', { name: 'Add bus' }).click()
+  await expect(page.getByText(/session has ended/).first()).toBeVisible()
+  await signIn(page, 'Lindqvar')
+  await page.goto(address)
+  await page.getByRole('button', { name: 'Add bus' }).first().click()
+  await expect(page.getByLabel('Tag', { exact: true })).toHaveValue('LATE BUS')
+  await page.locator('form').getByRole('button', { name: 'Add bus' }).click()
+  await expect(page.getByRole('row', { name: /LATE BUS/ })).toBeVisible()
+  consoleErrors.length = 0
+})
