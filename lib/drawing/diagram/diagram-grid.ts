@@ -36,7 +36,7 @@ const deviceSymbol =
     return motorSymbol(x, y, schedule?.starts.some((start) => start.motor === device.record.id) ?? false)
   }
 
-/** One sheet of a diagram: the trees on it, and the buses whose part stands on a sheet of its own. */
+/** One sheet of a diagram: the trees on it, and the buses whose part is drawn apart. */
 export interface DiagramSheet {
   trees: readonly TreeBus[]
   apart: ReadonlySet<string>
@@ -70,7 +70,7 @@ export const diagramGrid = (context: GridContext, { trees, apart, from }: Diagra
     for (const [i, branch] of branches.entries()) {
       const { tag, lines } = branchLines(branch)
       const words = elsewhere
-        ? { tag: `${tag} to ${child.bus.tag}`, lines: ['on a sheet of its own', ...lines] }
+        ? { tag: `${tag} to ${child.bus.tag}`, lines: ['drawn apart, on another sheet', ...lines] }
         : { tag, lines }
       add({ depth, row: row + i, symbol: elsewhere ? tieSymbol : branchSymbol(branch), through: !elsewhere }, words)
     }

@@ -22,6 +22,15 @@ export function judge(
   const limit = rule.limit.kind === 'value' ? rule.limit.value : (rule.limit.steps[0]?.value ?? 0)
   const blank = { ...base, value: null, limit, margin: null, busId: null, motorId: null, at: null }
   const stopped = withoutFigures(result)
+  if (stopped === 'case-collapsed' && isMissedByCollapse(rule)) {
+    const { outcome } = result
+    return {
+      ...blank,
+      word: 'fails',
+      reason: stopped,
+      ...(outcome.kind === 'collapsed' && { busId: outcome.busId, at: outcome.at }),
+    }
+  }
   if (stopped !== null) return { ...blank, word: 'not-assessed', reason: stopped }
 
   const points = figures(rule, input, result)
@@ -50,6 +59,15 @@ export function judge(
     motorId: worst.motorId,
     at: worst.at,
   }
+}
+
+/**
+ * Whether a limit is worse than missed where the voltage collapses during the start: what it asks for is never reached.
+ * Highest voltage, heat and the first instant say nothing about a collapse.
+ */
+function isMissedByCollapse({ quantity, instant }: RuleInput): boolean {
+  if (quantity === 'run-up-time' || quantity === 'accelerating-torque') return true
+  return (quantity === 'voltage-change' || quantity === 'remaining-voltage') && instant !== 'first'
 }
 
 /** Why a case has no figures at all, or null. */

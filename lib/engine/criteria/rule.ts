@@ -78,6 +78,7 @@ export interface Verdict {
   ruleId: string
   caseId: string
   word: VerdictWord
+  /** Why there is no verdict; with `fails`, why there is no figure. */
   reason: NotAssessedReason | null
   /** False when the rule's class of starts is not the one in use; such a row is shown and does not count. */
   inUse: boolean

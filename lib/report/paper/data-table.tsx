@@ -49,6 +49,24 @@ interface PreparedRow {
   height: number
   title: boolean
   cells: readonly PreparedCell[]
+  /** Whether it lies on the second of the two alternating grounds. */
+  shaded: boolean
+  /** Whether the next row goes on with the cells of this one. */
+  goesOn: boolean
+}
+
+/** Most lines of a cell in one piece: half a page, so that a table with long cells still breaks well. */
+const linesAtOnce = 32
+
+/** A row as one row, or as several where its cells are taller than a page should hold in one piece. */
+const inPieces = (cells: readonly PreparedCell[], shaded: boolean, leading: number): readonly PreparedRow[] => {
+  const most = Math.max(...cells.map(({ lines }) => lines.length))
+  const pieces = Math.max(1, Math.ceil(most / linesAtOnce))
+  return Array.from({ length: pieces }, (_, k) => {
+    const part = cells.map((cell) => ({ ...cell, lines: cell.lines.slice(k * linesAtOnce, (k + 1) * linesAtOnce) }))
+    const height = Math.max(...part.map(({ lines }) => lines.length)) * leading + 2 * padTop
+    return { title: false, cells: part, height, shaded, goesOn: k < pieces - 1 }
+  })
 }
 
 const rule = (pdf: Pdf, y: number, width: number, thickness: number, stroke: string): void => {
@@ -71,15 +89,16 @@ export const dataTable = (paper: Paper, options: TableOptions): ReactElement => 
   const { width, size = dense.size, leading = dense.leading } = options
   const columns = placed(options.columns, width)
   const baseline = leading / 2 + 0.33 * size
-  const prepare = (row: Row): PreparedRow => {
+  const prepare = (row: Row, index: number): readonly PreparedRow[] => {
     if ('title' in row) {
       const cells = [preparedCell({ text: row.title, weight: 'semibold' }, width - 2 * pad, size)]
-      return { title: true, cells, height: cells[0]!.lines.length * leading + 2 * padTop + 2 }
+      const height = cells[0]!.lines.length * leading + 2 * padTop + 2
+      return [{ title: true, cells, height, shaded: false, goesOn: false }]
     }
     const cells = columns.map((column, i) => preparedCell(row[i] ?? '', column.width - 2 * pad, size))
-    return { title: false, cells, height: Math.max(...cells.map((cell) => cell.lines.length)) * leading + 2 * padTop }
+    return inPieces(cells, index % 2 === 1, leading)
   }
-  const rows = options.rows.map(prepare)
+  const rows = options.rows.flatMap(prepare)
   const heads = columns.map((column) => wrapRuns(rich(column.head, 'semibold'), column.width - 2 * pad, size))
   const headHeight = Math.max(...heads.map((lines) => lines.length)) * leading + 2 * padTop + 1
   const anchor = (column: PlacedColumn) =>
@@ -107,13 +126,13 @@ export const dataTable = (paper: Paper, options: TableOptions): ReactElement => 
   const paintRow = (pdf: Pdf, index: number, top: number): void => {
     const row = rows[index]!
     if (row.title) pdf.rect(0, top, width, row.height).fill(band)
-    else if (index % 2 === 1) pdf.rect(0, top, width, row.height).fill(zebra)
+    else if (row.shaded) pdf.rect(0, top, width, row.height).fill(zebra)
     for (const [i, cell] of row.cells.entries()) {
       const column = row.title ? { ...columns[0]!, align: 'left' as const } : columns[i]!
       paintCell(pdf, cell, { x: anchor(column), y: top + padTop + baseline, size, leading, align: column.align })
     }
     const last = index === rows.length - 1
-    rule(pdf, top + row.height - 0.2, width, last ? 0.8 : 0.35, colour(last ? 'ink' : 'grid'))
+    if (!row.goesOn) rule(pdf, top + row.height - 0.2, width, last ? 0.8 : 0.35, colour(last ? 'ink' : 'grid'))
   }
   const body = groupsOf(rows).map((group) => {
     const height = group.reduce((sum, index) => sum + rows[index]!.height, 0)

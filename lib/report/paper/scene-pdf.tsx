@@ -1,4 +1,5 @@
 import type { ReactElement } from 'react'
+import type { PlacedScene } from '@/lib/drawing/pack-scenes'
 import type { Scene, SceneItem } from '@/lib/drawing/scene'
 import { colour, pt } from '../theme'
 import { measure } from '../type/measure'
@@ -53,3 +54,18 @@ export const sceneBlock = (
     pdf.restore()
   })
 }
+
+/** Several scenes at one scale, each at its place. */
+export const scenesBlock = (
+  paper: Paper,
+  placed: readonly PlacedScene[],
+  scale: number,
+  options: BlockOptions,
+): ReactElement =>
+  block(paper, options, (pdf) => {
+    for (const { scene, x, y } of placed) {
+      pdf.save().scale(scale).translate(x, y)
+      for (const item of scene.items) paintItem(pdf, item)
+      pdf.restore()
+    }
+  })

@@ -1,5 +1,8 @@
 import { limitedQuantity, placePhrase } from '@/lib/study/words/limit-sentence'
 import { listed, listedTags } from '@/lib/study/words/list-words'
+import { caseOutcomeSentence } from '@/lib/study/words/outcome-words'
+import { busTag } from '@/lib/study/words/tags'
+import { verdictWords } from '@/lib/study/words/verdict-words'
 import type { ReportContext } from '../report-context'
 import { byWeight, figureOf, inUse, type VerdictRow, verdictRows } from '../values/verdict-rows'
 
@@ -24,12 +27,18 @@ export const findings = ({ input, words, whole }: ReportContext): readonly strin
   const byLimit = [...new Set(notPlain.map((row) => row.limit))]
   const sentences = byLimit.map((limit) => {
     const of = notPlain.filter((row) => row.limit === limit)
-    const parts = of.map((row) => `${row.case.tag} ${row.verdict.word}, ${figureOf(row, document)}`)
+    const parts = of.map((row) => `${row.case.tag} ${verdictWords[row.verdict.word]}, ${figureOf(row, document)}`)
     return `**${limit.tag}** ${placePhrase(limit, document)}, ${limitedQuantity(limit, document)}: ${listed(parts)}.`
   })
   const compared = failingCases(rows, 'comparison')
   const comparedWords = compared.map(({ case: one, limits }) => words.verdict.failingCase(one.tag, listedTags(limits)))
+  const stopped = result.cases.flatMap(({ caseId, outcome }) => {
+    const one = document.cases.find(({ id }) => id === caseId)
+    if (!one || outcome.kind === 'complete') return []
+    return [`**${one.tag}**: ${caseOutcomeSentence(outcome, (bus) => busTag(document, bus))}`]
+  })
   return [
+    ...stopped,
     `${words.verdict.counted(cases, design.length)} ${words.verdict.tally(counts.meets, counts.close, counts.fails, counts['not-assessed'])}`,
     ...(sentences.length > 0 ? sentences : design.length > 0 ? [words.verdict.allMeet] : []),
     ...(comparedWords.length > 0 ? [`${words.verdict.comparedFailing} ${listed(comparedWords)}.`] : []),

@@ -40,14 +40,21 @@ export const recordRows = <R extends Tagged>(
   })
 }
 
-/** Records that differ only in what says which they are. */
+/** So many records at most share a column, so that the head that names them all stays a head. */
+const recordsAtOnce = 24
+
+/** Records that differ only in what says which they are, as many as a column holds. */
 const alike = <R extends Tagged>(fields: readonly RecordField<R>[], records: readonly R[]): readonly R[][] => {
   const groups = new Map<string, R[]>()
   for (const record of records) {
     const key = JSON.stringify(fields.filter((field) => !field.own).map((field) => field.of(record)))
     groups.set(key, [...(groups.get(key) ?? []), record])
   }
-  return [...groups.values()]
+  return [...groups.values()].flatMap((group) =>
+    Array.from({ length: Math.ceil(group.length / recordsAtOnce) }, (_, i) =>
+      group.slice(i * recordsAtOnce, (i + 1) * recordsAtOnce),
+    ),
+  )
 }
 
 const columnsAtOnce = 4

@@ -1,9 +1,10 @@
 import type { ReactElement } from 'react'
+import { packScenes } from '@/lib/drawing/pack-scenes'
 import type { Scene } from '@/lib/drawing/scene'
 import { singleLineSheets } from '@/lib/drawing/single-line-diagram'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import { block } from '../paper/block'
-import { sceneBlock, sceneScale } from '../paper/scene-pdf'
+import { sceneScale, scenesBlock } from '../paper/scene-pdf'
 import { caption, paragraph, typedText } from '../paper/text-block'
 import { chapter, type ReportContext, subsection } from '../report-context'
 import { contentHeight, contentWidth, landscape, largeLandscape, type PageFormat, small } from '../theme'
@@ -23,6 +24,8 @@ export const system: Section = (context) => {
 }
 
 const captionHeight = 46
+/** Between two parts of the diagram on one sheet, mm. */
+const gap = 14
 /** Type of the diagram on paper, in points in a millimetre of the scene, that is still read without effort. */
 const legible = 2.2
 
@@ -59,16 +62,22 @@ export const diagramPages = (context: ReportContext): readonly DiagramPage[] => 
   const first = input.document.plant.supplies[0]
   if (!first || scenes.length === 0)
     return [{ format: landscape, content: [title, ...paragraph(paper, say.noDiagram, { width })] }]
-  return scenes.map((scene, i) => {
-    const scale = sceneScale(scene, width, height)
-    const space = Math.min(30, Math.max(0, (height - scene.height * scale) / 3)) + 1
+  const scale = Math.min(...scenes.map((scene) => sceneScale(scene, width, height)))
+  const sheet = { width: width / scale, height: height / scale }
+  const sheets = [
+    scenes.slice(0, 1).map((scene) => ({ scene, x: 0, y: 0 })),
+    ...packScenes(scenes.slice(1), sheet, gap),
+  ]
+  return sheets.map((placed, i) => {
+    const used = Math.max(...placed.map(({ scene, y }) => y + scene.height)) * scale
+    const space = Math.min(30, Math.max(0, (height - used) / 3)) + 1
     return {
       format,
       content: [
-        ...(i === 0 ? [title] : caption(paper, say.goesOn(i + 1, scenes.length), { width })),
+        ...(i === 0 ? [title] : caption(paper, say.goesOn(i + 1, sheets.length), { width })),
         ...(i === 0 ? paragraph(paper, say.diagramNote(first.tag), { width, ...small, ink: 'soft', below: 4 }) : []),
         block(paper, { width, height: space }, () => undefined),
-        sceneBlock(paper, scene, { width, height }),
+        scenesBlock(paper, placed, scale, { width, height: used }),
       ],
     }
   })

@@ -33,7 +33,9 @@ const wholeBlock = (context: ReportContext, whole: StudyVerdict, governing: Verd
   const { paper, words, width, input } = context
   const hasDesign = input.document.cases.some(({ role }) => role === 'design')
   const sentence = hasDesign ? words.verdict.whole[whole.word] : words.verdict.noDesignCase
-  const limit = governing ? governingSentence(governing, context) : words.verdict.noGoverning
+  const held = whole.counts['not-assessed'] > 0
+  const none = held ? words.verdict.noneAssessed : words.verdict.noGoverning
+  const limit = governing ? governingSentence(governing, context) : none
   const pad = 12
   const sentenceLines = wrapRuns(plain(sentence), width - 2 * pad, 10.5)
   const limitLines = wrapRuns(rich(limit), width - 2 * pad, 9.5)

@@ -29,9 +29,9 @@ export const closeMargins = ({ settings }: StudyDocument) => ({
   voltage: perUnit(settings.closeVoltage.si),
 })
 
-/** `3.48 % (at most 4.0 %)` */
+/** `3.48 % (at most 4.0 %)`; where there is no figure, why. */
 export const figureOf = ({ verdict, limit }: VerdictRow, document: StudyDocument): string =>
-  verdictFigure(formatVerdict(verdict, limit.quantity, closeMargins(document)), limit.quantity)
+  verdictFigure(formatVerdict(verdict, limit.quantity, closeMargins(document)), limit.quantity, verdict.reason)
 
 const weight: Record<VerdictWord, number> = { fails: 0, 'not-assessed': 1, close: 2, meets: 3 }
 

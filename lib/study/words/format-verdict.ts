@@ -1,5 +1,6 @@
-import type { CloseMargins, RuleQuantity, Verdict, VerdictWord } from '../../engine/criteria/rule'
+import type { CloseMargins, NotAssessedReason, RuleQuantity, Verdict, VerdictWord } from '../../engine/criteria/rule'
 import { formatNumber } from '../../quantity/format-number'
+import { notAssessedReasons } from './verdict-words'
 
 /** How a quantity prints: its unit, SI units in one of it, usual decimals of a value and least decimals of a limit. */
 interface Print {
@@ -94,9 +95,14 @@ export const formatVerdict = (
   }
 }
 
-/** `3.48 % (at most 4.0 %)`, with `–` where there is no figure. */
-export const verdictFigure = (formatted: FormattedVerdict, quantity: RuleQuantity): string => {
+/** `3.48 % (at most 4.0 %)`; where there is no figure, why. */
+export const verdictFigure = (
+  formatted: FormattedVerdict,
+  quantity: RuleQuantity,
+  reason: NotAssessedReason | null,
+): string => {
   const side = atLeast(quantity) ? 'at least' : 'at most'
   const unit = `\u2009${formatted.unit}`
-  return `${formatted.value === null ? '–' : formatted.value + unit} (${side} ${formatted.limit}${unit})`
+  const none = reason === null ? 'not reached' : notAssessedReasons[reason]
+  return `${formatted.value === null ? none : formatted.value + unit} (${side} ${formatted.limit}${unit})`
 }

@@ -238,7 +238,6 @@ describe('a case without figures', () => {
 
   it('is not assessed, with the reason', () => {
     const reasons: [CaseResult['outcome'], string][] = [
-      [{ kind: 'collapsed', at: second(1), busId: 'B' }, 'case-collapsed'],
       [{ kind: 'no-load-flow', busId: 'B' }, 'case-not-computed'],
       [{ kind: 'refused', cause: 'island', buses: ['B'], detail: '' }, 'case-refused'],
     ]
@@ -250,5 +249,14 @@ describe('a case without figures', () => {
         margin: null,
       })
     }
+  })
+
+  it('fails what a collapse of the voltage makes unreachable, without a figure but with place and instant', () => {
+    const collapsed = without({ kind: 'collapsed', at: second(1), busId: 'B' })
+    const failed = { word: 'fails', reason: 'case-collapsed', value: null, margin: null, busId: 'B', at: 1 }
+    expect(on(limitOn(), tried, collapsed)).toMatchObject(failed)
+    expect(on(startRule('run-up-time', 60), tried, collapsed)).toMatchObject(failed)
+    expect(on(limitOn({ instant: 'first' }), tried, collapsed)).toMatchObject({ word: 'not-assessed' })
+    expect(on(startRule('heat-used', 1), tried, collapsed)).toMatchObject({ word: 'not-assessed' })
   })
 })

@@ -25,7 +25,7 @@ test('a plain verdict prints at the usual digits', () => {
     unit: 'pu',
   })
   expect(format(10.378, 20, 'run-up-time')).toEqual({ value: '10.38', limit: '20', margin: '9.62', unit: 's' })
-  expect(verdictFigure(format(0.16, 0.1, 'accelerating-torque'), 'accelerating-torque')).toBe(
+  expect(verdictFigure(format(0.16, 0.1, 'accelerating-torque'), 'accelerating-torque', null)).toBe(
     '16.0\u2009% (at least 10\u2009%)',
   )
 })
@@ -44,9 +44,12 @@ test('a limit with more decimals than usual prints them all', () => {
   expect(format(0.03, 0.0425, 'voltage-change').limit).toBe('4.25')
 })
 
-test('a verdict without a figure prints its limit alone', () => {
+test('a verdict without a figure says why beside its limit', () => {
   const formatted = formatVerdict({ value: null, limit: 20, word: 'fails' }, 'run-up-time', margins)
-  expect(verdictFigure(formatted, 'run-up-time')).toBe('– (at most 20\u2009s)')
+  expect(verdictFigure(formatted, 'run-up-time', null)).toBe('not reached (at most 20\u2009s)')
+  expect(verdictFigure(formatted, 'run-up-time', 'case-collapsed')).toBe(
+    'the voltage collapses during the start (at most 20\u2009s)',
+  )
 })
 
 const number = (text: string | null) => Number((text ?? '').replaceAll('\u2009', '').replace('−', '-'))

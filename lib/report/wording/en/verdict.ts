@@ -12,6 +12,7 @@ export const verdict = {
   noDesignCase: 'No case is marked as a design case, so there is nothing that the whole could meet.',
   governing: 'Governing limit',
   noGoverning: 'No limit was held against a design case.',
+  noneAssessed: 'No limit in use has a figure, so none governs.',
   governingPlace: (place: string, instant: string | null) =>
     `at ${place}${instant === null ? '' : `, ${instant} after the first switching-on`}`,
   supply: (tag: string, level: string) => `supply “${tag}” (${level})`,
@@ -88,6 +89,6 @@ export const verdict = {
     notAssessed: 'Not assessed, and why',
     notReached: 'beyond',
     reasonHeads: { limit: 'Limit', case: 'Case', reason: 'Reason' },
-    missed: 'A fail without a figure: the start never reached what the limit asks for.',
+    missed: 'A fail without a figure: the start never reached what the limit asks for, or the voltage collapsed.',
   },
 }
