@@ -13,6 +13,7 @@ import type {
   VoltAmpere,
   Watt,
 } from '../units/si'
+import type { ChangeOver, FurtherStarter, StartCapacitor, StarterDuty } from './starter-input'
 
 /** A node of the network; every rating elsewhere converts with its own voltage, never with this nominal. */
 export interface BusInput {
@@ -90,9 +91,6 @@ export type LoadCurve =
     }
   | { kind: 'points'; speeds: readonly RadianPerSecond[]; torques: readonly NewtonMetre[] }
 
-/** When a starting device goes to its next position; time counts from the motor's own switching-on. */
-export type ChangeOver = { kind: 'time'; at: Second } | { kind: 'speed'; at: RadianPerSecond }
-
 export type Starter =
   | { kind: 'direct' }
   | {
@@ -103,8 +101,20 @@ export type Starter =
       changeOver: ChangeOver
       /** Time without voltage between tap and line; 0 for a closed transition. */
       gap: Second
+      /**
+       * Middle step of a closed transition, star point open and the series part of the winding left in the line: its
+       * ohms per phase and its length. Without it the step is taken as instantaneous.
+       */
+      middle?: { impedance: Complex<Ohm>; time: Second } | null
     }
-  | { kind: 'star-delta'; changeOver: ChangeOver; gap: Second }
+  | {
+      kind: 'star-delta'
+      changeOver: ChangeOver
+      gap: Second
+      /** Closed transition: resistors in series with the windings in delta for this time, ohm each. */
+      transition?: { resistance: Ohm; time: Second } | null
+    }
+  | FurtherStarter
 
 export type StarterKind = Starter['kind']
 
@@ -127,6 +137,10 @@ export interface MotorInput {
         kind: 'starting'
         at: Second
         starter: Starter
+        /** Capacitors switched with this start. */
+        capacitors?: readonly StartCapacitor[]
+        /** What the starting device may be asked for; left out where nothing is known. */
+        starterDuty?: StarterDuty
         /** Curve while starting. */
         load: LoadCurve
         /** Curve once the process is on (valve open); null where it does not change. */

@@ -11,6 +11,7 @@ import type {
   Volt,
   VoltAmpere,
 } from '../units/si'
+import type { Position } from './starters/position'
 
 /** How one start ended; every outcome is a result. */
 export type StartOutcome =
@@ -25,6 +26,8 @@ export type StartOutcome =
   | { kind: 'never-turned'; missing: NewtonMetre }
   /** Still on its way at the time limit, or when the network collapsed. */
   | { kind: 'timed-out'; speed: RadianPerSecond }
+  /** Switched itself off: the drive's undervoltage level; from this motor's own switching-on. */
+  | { kind: 'tripped'; cause: 'undervoltage'; at: Second; speed: RadianPerSecond }
 
 /** How a machine that was running before the start came through it. */
 export type RunningOutcome = { kind: 'rode-through' } | { kind: 'pulled-out'; at: Second } | { kind: 'no-equilibrium' }
@@ -123,11 +126,14 @@ export interface MotorResult {
   speedAtEnd: RadianPerSecond
 }
 
+/** Where a starting device or its capacitors went: `running` is the last position, `off` a trip. */
+export type ChangeOverTarget = Position | 'capacitor-in' | 'capacitor-out'
+
 /** State just after a starting device moved on. */
 export interface ChangeOverResult {
   motorId: string
   at: Second
-  to: 'open' | 'running'
+  to: ChangeOverTarget
   speed: RadianPerSecond
   state: MotorState
   /** Voltage of every bus at this instant, in the order of `places`. */

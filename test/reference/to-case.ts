@@ -1,5 +1,6 @@
 import type { CaseInput, InductionCircuit, LoadCurve, MotorInput, Starter } from '@/lib/engine/case-input'
 import {
+  ampere,
   type Complex,
   hertz,
   kilogramSquareMetre,
@@ -109,6 +110,10 @@ interface ReferenceMotor {
     x_over_r?: number
     changeover?: { at_s?: number; at_speed_pu?: number }
     gap_s?: number
+    ohm?: number
+    initial_voltage_pu?: number
+    ramp_s?: number
+    current_limit_a?: number
   }
   initial?: string
 }
@@ -236,6 +241,15 @@ function toCurve(load: ReferenceMotor['load']): LoadCurve {
 
 function toStarter({ start, rated_kv, poles }: ReferenceMotor, frequency: number): Starter {
   if (start === undefined || start.method === 'dol') return { kind: 'direct' }
+  if (start.method === 'soft_starter')
+    return {
+      kind: 'soft-starter',
+      ramp: { kind: 'voltage', from: perUnit(start.initial_voltage_pu!), to: perUnit(1) },
+      rampTime: second(start.ramp_s!),
+      kick: null,
+      currentLimit: start.current_limit_a === undefined ? null : ampere(start.current_limit_a),
+      bypass: null,
+    }
   const { at_s, at_speed_pu } = start.changeover ?? {}
   const changeOver =
     at_s === undefined ? { kind: 'speed' as const, at: fromRpm(0) } : { kind: 'time' as const, at: second(at_s) }
@@ -245,6 +259,10 @@ function toStarter({ start, rated_kv, poles }: ReferenceMotor, frequency: number
   }
   const gap = second(start.gap_s ?? 0)
   if (start.method === 'star_delta') return { kind: 'star-delta', changeOver, gap }
+  if (start.method === 'reactor' || start.method === 'resistor') {
+    const [re, im] = start.method === 'reactor' ? [0, start.ohm!] : [start.ohm!, 0]
+    return { kind: start.method, impedance: { re: ohm(re), im: ohm(im) }, changeOver }
+  }
   if (start.method !== 'autotransformer') throw new Error(`no adapter for the starting method ${start.method}`)
   const size =
     start.impedance_percent === undefined

@@ -1,6 +1,7 @@
 import type { ChangeOverResult, RunningResult } from '@/lib/engine/case-result'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import type { CaseSummary } from '@/lib/study/summary'
+import { changeOverTargetWords } from '@/lib/study/words/change-over-words'
 import { busTag, motorTag } from '@/lib/study/words/tags'
 import { FigureTable } from './figure-table'
 import { activePower, current, orDash, percent, perUnit, reactivePower, seconds, speed, voltage } from './print'
@@ -75,9 +76,7 @@ export function ChangeOverTable({ document, result }: { document: StudyDocument;
       caption="Change-overs"
       items={items}
       itemId={({ key }) => key}
-      name={({ change }) =>
-        `${motorTag(document, change.motorId)} ${change.to === 'open' ? 'opens' : 'to its running position'}`
-      }
+      name={({ change }) => `${motorTag(document, change.motorId)}: ${changeOverTargetWords[change.to]}`}
       rows={[
         { label: 'After the first switching-on', print: ({ change }) => seconds(change.at) },
         { label: 'Speed', print: ({ change }) => speed(change.speed) },

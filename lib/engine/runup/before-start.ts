@@ -62,10 +62,12 @@ export function beforeStart(plant: Plant): { ok: true; value: BeforeStart } | No
 export const runningMotors = (plant: Plant): number[] =>
   plant.motors.flatMap((motor, i) => (motor.duty.kind === 'running' ? [i] : []))
 
+const direct = { link: { kind: 'direct' }, rotorResistance: 0 } as const
+
 function connectRunning(system: System): void {
   system.plant.motors.forEach((motor, i) => {
     const running = motor.duty.kind === 'running'
-    system.move(i, running ? 'running' : 'off')
+    system.move(i, running ? direct : null, 0)
     system.resting[i] = running ? 0 : 1
   })
 }

@@ -1,6 +1,7 @@
 import type { CaseInput, InductionCircuit, LoadCurve, MotorInput } from '../case-input'
 import { type Refusal, refuse } from '../network/refusal'
 import { isZero } from '../numeric/complex'
+import { capacitorsProblem, starterProblem } from '../starters/check-starter'
 
 /** The first thing in a case that no calculation can be made of, or null. Values are SI. */
 export function checkCase(input: CaseInput): Refusal | null {
@@ -116,17 +117,10 @@ function motorProblem(motor: MotorInput, input: CaseInput): string | null {
   const circuit = circuitProblem(motor.circuit)
   if (circuit !== null) return circuit
   if (motor.duty.kind === 'running') return curveProblem(motor.duty.load)
-  const { at, starter, load, processLoad } = motor.duty
+  const { at, starter, capacitors, load, processLoad } = motor.duty
   if (!notNegative(at)) return 'the start cannot lie before zero.'
-  if (starter.kind !== 'direct') {
-    if (!notNegative(starter.gap)) return 'the gap of the change-over must be zero or more.'
-    if (!notNegative(starter.changeOver.at)) return 'the change-over must lie at zero or later.'
-  }
-  if (starter.kind === 'autotransformer') {
-    if (!positive(starter.tap) || starter.tap > 1) return 'the tap must lie between 0 and 1.'
-    if (!finite(starter.impedance) || starter.impedance.re < 0)
-      return 'the autotransformer needs an impedance of zero or more.'
-  }
+  const device = starterProblem(starter, motor.circuit) ?? capacitorsProblem(capacitors ?? [])
+  if (device !== null) return device
   return curveProblem(load) ?? (processLoad === null ? null : curveProblem(processLoad))
 }
 

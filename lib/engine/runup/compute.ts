@@ -1,7 +1,7 @@
 import { ohm, radianPerSecond, second, volt, voltAmpere } from '../../units/si'
 import type { CaseInput } from '../case-input'
 import type { CaseOutcome, CaseResult, Counters } from '../case-result'
-import { changeOverOf } from '../starters/position'
+import { stepsOf } from '../starters/position'
 import { beforeStart, type NoStart, runningMotors } from './before-start'
 import type { Courses } from './course'
 import { watch } from './extremes'
@@ -109,27 +109,32 @@ function prepareCourses(system: System, before: Float64Array): Courses {
   return {
     starts: plant.motors.flatMap((motor, i) => {
       if (motor.duty.kind !== 'starting') return []
-      const change = changeOverOf(motor.duty.starter)
+      const { starter, capacitors } = motor.duty
       return [
         {
           motor: i,
-          starter: motor.duty.starter,
+          starter,
           at: motor.duty.at,
+          steps: stepsOf(starter),
+          step: -1,
           position: 'off' as const,
+          since: 0,
           switchedOn: false,
           turned: false,
-          openedAt: null,
+          undervoltage: starter.kind === 'drive' ? starter.undervoltage : null,
+          capacitors: (capacitors ?? []).map((item) => ({ item, state: 'waiting' as const })),
           runningAt: null,
           at95: null,
           atCriterion: null,
           i2t: null,
           slipEnergy: null,
-          i2tInStar: 0,
+          extraHeat: 0,
+          i2tSeen: 0,
+          extraAtCriterion: null,
           standstill: null,
           outcome: null,
           speed95: 0.95 * motor.ratedSpeed,
           speedCriterion: speedCriterion * motor.ratedSpeed,
-          speedChangeOver: change?.kind === 'speed' ? change.at : null,
           watches: {
             line: watch(placeOf(system, i, 'lineCurrent'), -1, false),
             motor: watch(placeOf(system, i, 'motorCurrent'), -1, false),

@@ -1,6 +1,7 @@
 import type { Starter } from '../case-input'
 import type { ChangeOverResult, MotorState, StartOutcome } from '../case-result'
-import type { Position } from '../starters/position'
+import type { StartCapacitor } from '../starter-input'
+import type { Position, Step, Until } from '../starters/position'
 import type { Watch } from './extremes'
 
 /** How far one start has come. Instants are case time, s; null until reached. */
@@ -9,26 +10,37 @@ export interface StartCourse {
   starter: Starter
   /** When it is switched on. */
   at: number
+  /** Positions of its device, the present one (−1 while off) and when it was taken. */
+  steps: readonly Step[]
+  step: number
   position: Position
+  since: number
   switchedOn: boolean
   turned: boolean
-  openedAt: number | null
   runningAt: number | null
+  /** Line voltage in V below which its drive switches itself off; null for other devices. */
+  undervoltage: number | null
+  /** Capacitors switched with the start: null while they wait, then whether they are in. */
+  capacitors: { readonly item: StartCapacitor; state: 'waiting' | 'in' | 'out' }[]
   at95: number | null
   atCriterion: number | null
   /** Integrals when the criterion was reached. */
   i2t: number | null
   slipEnergy: number | null
-  /** ∫I²dt of the line current when the motor left star; 0 for other starting devices. */
-  i2tInStar: number
+  /** What ∫I²dt so far heats the winding beyond the same integral in the running position, and the integral so far. */
+  extraHeat: number
+  i2tSeen: number
+  extraAtCriterion: number | null
   standstill: MotorState | null
   outcome: StartOutcome | null
-  /** Speed in rad/s of 95 % of rated, of the criterion and of the change-over (null without one by speed). */
+  /** Speed in rad/s of 95 % of rated and of the criterion. */
   speed95: number
   speedCriterion: number
-  speedChangeOver: number | null
   watches: { line: Watch; motor: Watch; voltage: Watch; accelerating: Watch }
 }
+
+/** What the present position of a starting device waits for; null when it is kept, and before switching on. */
+export const untilOf = (start: StartCourse): Until | null => start.steps[start.step]?.until ?? null
 
 /** How a machine that ran before the start fares. */
 export interface RunningCourse {

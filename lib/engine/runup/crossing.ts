@@ -1,6 +1,10 @@
 import type { Integrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
-import type { Courses } from './course'
+import { codes } from '../starters/connection'
+import type { Until } from '../starters/position'
+import { excessOf, isElectrical } from './condition'
+import { type Courses, type StartCourse, untilOf } from './course'
+import { rampEnd } from './schedule'
 import type { System } from './system'
 
 /** What a speed does on its way that the run-up must know of. */
@@ -11,14 +15,20 @@ export type CrossingKind =
   | 'at-95'
   | 'criterion'
   | 'change-over'
+  | 'capacitor'
+  | 'undervoltage'
   | 'pull-out'
   | 'recovery'
 
 export interface Crossing {
   motor: number
   kind: CrossingKind
-  /** Speed crossed, rad/s. */
-  speed: number
+  /** Speed crossed, rad/s; null where it is not a speed. */
+  speed: number | null
+  /** What a condition on current or voltage is exceeded by. */
+  excess: ((state: Float64Array) => number) | null
+  /** Which capacitor of the start. */
+  capacitor: number
   at: number
 }
 
@@ -29,19 +39,19 @@ const looks = 16
 
 /** Crossings in the last step that come first; more than one only where they coincide. */
 export function firstCrossings(system: System, courses: Courses, integrator: Integrator): Crossing[] {
-  const found = candidates(system, courses, integrator.state)
+  const found = candidates(system, courses, integrator)
   if (found.length === 0) return []
   const scratch = new Float64Array(system.stateLength)
-  for (const each of found) each.at = locate(integrator, each, scratch)
+  for (const each of found) each.at = locate(system, integrator, each, scratch)
   const first = Math.min(...found.map((each) => each.at))
   return found.filter((each) => each.at <= first + 10 * sharpness)
 }
 
 /** Crossings that the state at the end of a step shows to have happened. */
-function candidates(system: System, courses: Courses, state: Float64Array): Crossing[] {
+function candidates(system: System, courses: Courses, { state, time }: Integrator): Crossing[] {
   const found: Crossing[] = []
   const note = (motor: number, kind: CrossingKind, speed: number): void => {
-    found.push({ motor, kind, speed, at: 0 })
+    found.push({ motor, kind, speed, excess: null, capacitor: -1, at: 0 })
   }
   for (let i = 0; i < system.plant.motors.length; i++) {
     if (system.resting[i]) continue
@@ -58,11 +68,8 @@ function candidates(system: System, courses: Courses, state: Float64Array): Cros
     if (start.at95 === null && speed >= start.speed95) note(start.motor, 'at-95', start.speed95)
     if (start.atCriterion === null && speed >= start.speedCriterion)
       note(start.motor, 'criterion', start.speedCriterion)
-    const onFirst = start.position === 'tap' || start.position === 'star'
-    if (onFirst && start.speedChangeOver !== null && speed >= start.speedChangeOver) {
-      note(start.motor, 'change-over', start.speedChangeOver)
-    }
   }
+  for (const start of courses.starts) found.push(...conditionsMet(system, start, state, time))
   for (const { motor, pulledOutAt } of courses.running) {
     if (system.resting[motor]) continue
     const limit = system.plant.breakdownSpeed[motor]!
@@ -72,14 +79,55 @@ function candidates(system: System, courses: Courses, state: Float64Array): Cros
   return found
 }
 
-function locate(integrator: Integrator, crossing: Crossing, scratch: Float64Array): number {
+/** Conditions of a starting device and its capacitors that the end of a step meets. */
+function conditionsMet(system: System, start: StartCourse, state: Float64Array, t: number): Crossing[] {
+  if (!start.switchedOn || start.outcome?.kind === 'tripped') return []
+  const { motor } = start
+  const found: Crossing[] = []
+  const look = (kind: CrossingKind, until: Until | null, capacitor: number): void => {
+    if (until === null || (until.kind === 'current' && t < rampEnd(start))) return
+    if (isElectrical(until)) {
+      const excess = (at: Float64Array): number => {
+        const solved = system.solveAt(at)
+        return solved ? excessOf(until, system, motor, at[motor]!) : Number.NEGATIVE_INFINITY
+      }
+      system.setTime(t)
+      if (excess(state) >= 0) found.push({ motor, kind, speed: null, excess, capacitor, at: 0 })
+      return
+    }
+    if (until.kind === 'speed' && !system.resting[motor] && state[motor]! >= until.at) {
+      found.push({ motor, kind, speed: until.at, excess: null, capacitor, at: 0 })
+    }
+  }
+  look('change-over', untilOf(start), -1)
+  start.capacitors.forEach(({ item, state: is }, c) => {
+    if (is !== 'out') look('capacitor', is === 'waiting' ? item.on : item.off, c)
+  })
+  if (start.undervoltage !== null && system.connection.code[motor] === codes.drive) {
+    const level = start.undervoltage
+    const excess = (at: Float64Array): number =>
+      system.solveAt(at) ? level - Math.sqrt(system.busSquare[motor]!) : Number.NEGATIVE_INFINITY
+    system.setTime(t)
+    if (excess(state) > 0) found.push({ motor, kind: 'undervoltage', speed: null, excess, capacitor: -1, at: 0 })
+  }
+  return found
+}
+
+function locate(system: System, integrator: Integrator, crossing: Crossing, scratch: Float64Array): number {
+  const { motor, speed, excess: measured } = crossing
+  const measure = (state: Float64Array): number =>
+    speed !== null ? state[motor]! - speed : (measured?.(state) ?? Number.NEGATIVE_INFINITY)
   const excess = (t: number): number => {
     integrator.interpolate(t, scratch)
-    return scratch[crossing.motor]! - crossing.speed
+    if (measured) system.setTime(t)
+    return measure(scratch)
   }
   const { from, time } = integrator
-  const after = integrator.state[crossing.motor]! - crossing.speed
+  if (measured) system.setTime(time)
+  const after = measure(integrator.state)
   const before = excess(from)
+  // A condition that is met already when its position is taken is acted on at once.
+  if (measured && before >= 0) return Math.min(time, from + sharpness)
   if (before > 0 !== after > 0 && before !== 0) return findRoot(excess, from, time, sharpness, before, after)
   // A step that begins on the crossed speed itself has turned round within: a shaft let go that comes back to rest.
   for (let part = 1; part < looks; part++) {

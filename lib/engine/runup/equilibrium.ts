@@ -2,6 +2,7 @@ import { loadTorqueAt } from '../driven/load-segments'
 import { evaluateMachine } from '../machines/machine-table'
 import { solveReal } from '../numeric/real-lu'
 import { findRoot } from '../numeric/root'
+import { codes, evaluateConnection } from '../starters/connection'
 import type { System } from './system'
 
 /** How the search for speeds at which every torque balances ended. */
@@ -27,14 +28,16 @@ export function runningEquilibrium(
   speeds: Float64Array,
 ): EquilibriumOutcome {
   const { synchronous } = system.plant
-  for (const i of moving) speeds[i] = synchronous[i]!
+  // A drive sets the speed of its motor by itself.
+  const free = moving.filter((i) => system.connection.code[i] !== codes.drive)
+  for (const i of free) speeds[i] = synchronous[i]!
   let lacking = -1
   let lackingFor = 0
   for (let round = 0; round < maxRounds; round++) {
     if (!system.solveAt(speeds)) return { kind: 'no-network' }
     let change = 0
     let without = -1
-    for (const i of moving) {
+    for (const i of free) {
       const slip = runningSlip(system, i)
       if (slip === null) without = i
       const speed = slip === null ? system.plant.breakdownSpeed[i]! : synchronous[i]! * (1 - slip)
@@ -61,7 +64,10 @@ function runningSlip(system: System, i: number): number | null {
   const perPower = (torqueFactor[i]! * system.busSquare[i]!) / synchronous[i]!
   const surplus = (slip: number): number => {
     evaluateMachine(machines, i, slip)
-    return perPower * machines.airgap[i]! - loadTorqueAt(load, synchronous[i]! * (1 - slip))
+    evaluateConnection(system.connection, machines, i, system.busSquare[i]!)
+    return (
+      perPower * machines.airgap[i]! * system.connection.winding[i]! - loadTorqueAt(load, synchronous[i]! * (1 - slip))
+    )
   }
   const largest = 1 - breakdownSpeed[i]! / synchronous[i]!
   const [idle, most] = [surplus(0), surplus(largest)]

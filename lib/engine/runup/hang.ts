@@ -1,6 +1,7 @@
 import { newtonMetre, radianPerSecond } from '../../units/si'
 import type { StartOutcome } from '../case-result'
-import type { StartCourse } from './course'
+import { excessOf } from './condition'
+import { type StartCourse, untilOf } from './course'
 import { balanceNear, isStable } from './equilibrium'
 import type { System } from './system'
 
@@ -31,8 +32,9 @@ export function findHang(system: System, open: readonly StartCourse[], state: Fl
   if (speeds === null) return null
   for (const start of open) {
     if (system.resting[start.motor]) continue
-    const goal = start.position === 'running' ? start.speedCriterion : start.speedChangeOver
-    if (goal !== null && speeds[start.motor]! >= goal) return null
+    const until = untilOf(start)
+    if (until === null && speeds[start.motor]! >= start.speedCriterion) return null
+    if (until !== null && excessOf(until, system, start.motor, speeds[start.motor]!) >= 0) return null
   }
   return speeds
 }
@@ -50,7 +52,7 @@ export function hangOutcome(system: System, start: StartCourse, speeds: Float64A
     const missing = newtonMetre(-system.balance(i, 0))
     return start.turned ? { kind: 'stalled', speed: radianPerSecond(0), missing } : { kind: 'never-turned', missing }
   }
-  if (start.position !== 'running') return { kind: 'not-transferred', speed }
+  if (untilOf(start) !== null) return { kind: 'not-transferred', speed }
   if (speed >= system.plant.breakdownSpeed[i]!) return { kind: 'below-criterion', speed }
   return { kind: 'stalled', speed, missing: newtonMetre(largestLack(system, i, speeds)) }
 }

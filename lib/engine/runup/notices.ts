@@ -1,7 +1,7 @@
 import { perUnit, second } from '../../units/si'
 import type { BusInput, StaticLoadInput } from '../case-input'
 import type { Notice } from '../case-result'
-import { gapOf } from '../starters/position'
+import { hasGap } from '../starters/position'
 import type { BeforeStart } from './before-start'
 import type { Courses } from './course'
 import type { SampleStore } from './sampler'
@@ -18,7 +18,7 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
   if (source.takenOut !== null) found.push({ kind: 'levels-motors-taken-out', level: source.takenOut })
   for (const start of courses.starts) {
     const motor = plant.motors[start.motor]!
-    if (start.standstill !== null) {
+    if (start.standstill !== null && start.starter.kind !== 'drive') {
       const share = start.starter.kind === 'star-delta' ? Math.sqrt(1 / 3) : 1
       const winding = (share * start.standstill.motorVoltage) / motor.ratedVoltage
       if (winding < reduced)
@@ -27,7 +27,7 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
     if (courses.changeOvers.some((change) => change.motorId === motor.id && change.tooEarly)) {
       found.push({ kind: 'change-over-too-early', motorId: motor.id })
     }
-    if (gapOf(start.starter) > 0) found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
+    if (hasGap(start.starter)) found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
   }
   for (const load of plant.input.loads) {
     const at = firstBelowFloor(load, plant.input.buses, record.samples)

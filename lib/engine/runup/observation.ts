@@ -41,16 +41,15 @@ export function createObserver(system: System): (state: Float64Array, into: Floa
       const at = buses + perMotor * i
       const load = loadTorqueAt(system.driven[i]!, state[i]!)
       const square = system.busSquare[i]!
-      const current = Math.sqrt(system.currentSquare[i]!)
       into[at] = state[i]!
       into[at + 1] = system.torque[i]!
       into[at + 2] = load
       into[at + 3] = system.torque[i]! - load
-      into[at + 4] = current / connection.current[i]!
-      into[at + 5] = current
+      into[at + 4] = Math.sqrt(system.lineSquare[i]!)
+      into[at + 5] = Math.sqrt(system.currentSquare[i]!)
       into[at + 6] = Math.sqrt(square) * connection.terminal[i]!
       into[at + 7] = square * connection.admittance[2 * i]!
-      into[at + 8] = -square * connection.admittance[2 * i + 1]!
+      into[at + 8] = -square * (connection.admittance[2 * i + 1]! + connection.shunt[i]!)
     }
   }
 }

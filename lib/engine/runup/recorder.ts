@@ -43,6 +43,7 @@ export function createRecorder(system: System, courses: Courses, integrator: Int
 
   const observeAt = (t: number, into: Float64Array): boolean => {
     integrator.interpolate(t, scratch)
+    system.setTime(t)
     if (!system.solveAt(scratch)) return false
     observe(scratch, into)
     return true
@@ -92,6 +93,7 @@ export function createRecorder(system: System, courses: Courses, integrator: Int
     },
     begin(t) {
       const { state } = integrator
+      system.setTime(t)
       if (!system.solveAt(state)) return false
       observe(state, now)
       largestMismatch = Math.max(largestMismatch, system.solver.mismatch())
@@ -103,6 +105,7 @@ export function createRecorder(system: System, courses: Courses, integrator: Int
     },
     follow(solved) {
       const { state, time } = integrator
+      system.setTime(time)
       if (!solved && !system.solveAt(state)) return false
       observe(state, now)
       largestMismatch = Math.max(largestMismatch, system.solver.mismatch())

@@ -89,8 +89,6 @@ function startResult(
   const at = system.integral[i]!
   const i2t = start.i2t ?? record.state[at]!
   const slipEnergy = start.slipEnergy ?? record.state[at + 1]!
-  // In star the winding carries the whole line current, in delta only 1/√3 of it: each A²s in star heats it three times.
-  const i2tInStar = start.position === 'star' ? i2t : Math.min(start.i2tInStar, i2t)
   const since = (instant: number | null) => (instant === null ? null : second(instant - start.at))
   const { accelerating } = start.watches
   const hangs = start.outcome !== null && start.outcome.kind !== 'started'
@@ -112,7 +110,7 @@ function startResult(
     i2t: ampereSquaredSecond(i2t),
     slipEnergy: joule(slipEnergy),
     kineticEnergy: joule((motor.inertia * reached ** 2) / 2),
-    heatUsed: heatUsed(system, i, i2t + 2 * i2tInStar, slipEnergy),
+    heatUsed: heatUsed(system, i, i2t + (start.extraAtCriterion ?? start.extraHeat), slipEnergy),
     settledSpeed: hangs && record.end.kind === 'settled' ? speedAtEnd : settledSpeed,
   }
 }

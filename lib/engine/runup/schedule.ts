@@ -1,60 +1,102 @@
-import { changeOverOf, firstPosition, gapOf, type Position } from '../starters/position'
-import type { StartCourse } from './course'
+import { rampOf } from '../starters/position'
+import { type StartCourse, untilOf } from './course'
 import type { System } from './system'
 
 /** Two instants closer than this are one. */
 export const sameInstant = 1e-12
 
-const onFirstPosition = (start: StartCourse): boolean => start.position === 'tap' || start.position === 'star'
+/** What moved at an instant: the device of a start, or one of its capacitors. */
+export interface Move {
+  start: StartCourse
+  capacitor: number | null
+}
 
-/** Brings a starting device into a position, and the watches of its motor with it. */
-export function moveTo(system: System, start: StartCourse, position: Position, t: number): void {
-  start.position = position
-  system.move(start.motor, position)
-  if (position === 'running') start.runningAt = t
-  if (position === 'open') start.openedAt = t
-  const connected = position !== 'open'
+/** Brings a starting device into its next position, and the watches of its motor with it. */
+export function advance(system: System, start: StartCourse, t: number): Move {
+  start.step++
+  const step = start.steps[start.step]!
+  start.position = step.position
+  start.since = t
+  system.move(start.motor, step, t)
+  if (step.until === null) start.runningAt = t
+  const connected = step.position !== 'open'
   start.watches.line.active = true
   start.watches.motor.active = true
   start.watches.voltage.active = connected
   start.watches.accelerating.active = connected && start.at95 === null
+  setCapacitors(system, start)
+  return { start, capacitor: null }
 }
 
-/** Leaves the first position: over the gap where there is one. */
-export const changeOver = (system: System, start: StartCourse, t: number): void =>
-  moveTo(system, start, gapOf(start.starter) > 0 ? 'open' : 'running', t)
+/** Switches a capacitor of a start in or out. */
+export function switchCapacitor(system: System, start: StartCourse, capacitor: number): Move {
+  const one = start.capacitors[capacitor]!
+  one.state = one.state === 'waiting' ? 'in' : 'out'
+  setCapacitors(system, start)
+  return { start, capacitor }
+}
 
-/** When a start's next switching by time is due; null when it waits for a speed or has nothing to come. */
-export function dueAt(start: StartCourse): number | null {
+/** Susceptance of the capacitors that are in; none while the motor is off the line. */
+function setCapacitors(system: System, start: StartCourse): void {
+  const off = start.position === 'open' || start.position === 'off'
+  system.connection.shunt[start.motor] = off
+    ? 0
+    : start.capacitors.reduce((sum, { item, state }) => (state === 'in' ? sum + item.susceptance : sum), 0)
+}
+
+/** When the present position of a start is left by time; null when it waits for something else or is kept. */
+function dueAt(start: StartCourse): number | null {
   if (!start.switchedOn) return start.at
-  if (start.position === 'open') return start.openedAt! + gapOf(start.starter)
-  const change = changeOverOf(start.starter)
-  return onFirstPosition(start) && change?.kind === 'time' ? start.at + change.at : null
+  const until = untilOf(start)
+  if (until?.kind === 'after') return start.since + until.time
+  return until?.kind === 'time' ? Math.max(start.since, start.at + until.at) : null
 }
 
-/** Does the switchings that are due at t; returns the starts that moved. */
-export function switchDue(system: System, starts: readonly StartCourse[], t: number): StartCourse[] {
-  return starts.filter((start) => {
-    const due = dueAt(start)
-    if (due === null || t < due - sameInstant) return false
-    if (start.position === 'open') moveTo(system, start, 'running', t)
-    else if (start.switchedOn) changeOver(system, start, t)
-    else {
+/** When a capacitor of a start is switched by time; null when it is not. */
+function capacitorDue(start: StartCourse, capacitor: number): number | null {
+  const { item, state } = start.capacitors[capacitor]!
+  if (!start.switchedOn || state === 'out') return null
+  if (state === 'waiting' && item.on === null) return start.at
+  const until = state === 'waiting' ? item.on : item.off
+  return until?.kind === 'time' ? start.at + until.at : null
+}
+
+/** Does the switchings that are due at t; returns what moved. */
+export function switchDue(system: System, starts: readonly StartCourse[], t: number): Move[] {
+  const moves: Move[] = []
+  const isDue = (due: number | null): boolean => due !== null && t >= due - sameInstant
+  for (const start of starts) {
+    const fresh = !start.switchedOn
+    if (isDue(dueAt(start))) {
       start.switchedOn = true
-      moveTo(system, start, firstPosition(start.starter), t)
+      moves.push(advance(system, start, t))
     }
-    return true
-  })
+    start.capacitors.forEach((_, c) => {
+      if (!isDue(capacitorDue(start, c))) return
+      const move = switchCapacitor(system, start, c)
+      if (!fresh) moves.push(move)
+    })
+  }
+  return moves
 }
 
-/** Earliest switching or time limit after t, or the horizon. */
+/** When the ramp of the present position is over, s; before the start of time where it has none. */
+export const rampEnd = (start: StartCourse): number => {
+  const step = start.steps[start.step]
+  return step === undefined || rampOf(step) === 0 ? Number.NEGATIVE_INFINITY : start.since + rampOf(step)
+}
+
+/** Earliest switching, end of a ramp or time limit after t, or the horizon. */
 export function nextInstant(starts: readonly StartCourse[], t: number, timeLimit: number, horizon: number): number {
   let next = horizon
+  const consider = (instant: number | null): void => {
+    if (instant !== null && instant > t + sameInstant && instant < next) next = instant
+  }
   for (const start of starts) {
-    const due = dueAt(start)
-    if (due !== null && due > t + sameInstant && due < next) next = due
-    const limit = start.at + timeLimit
-    if (start.outcome === null && limit > t + sameInstant && limit < next) next = limit
+    consider(dueAt(start))
+    for (let c = 0; c < start.capacitors.length; c++) consider(capacitorDue(start, c))
+    consider(rampEnd(start))
+    if (start.outcome === null) consider(start.at + timeLimit)
   }
   return next
 }

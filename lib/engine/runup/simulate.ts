@@ -1,18 +1,19 @@
-import { type Complex, radianPerSecond, second } from '../../units/si'
+import { type Complex, ohm, radianPerSecond, second } from '../../units/si'
 import { pieceAt } from '../driven/load-segments'
+import { breakdownSlip } from '../machines/breakdown-slip'
 import { evaluateMachine } from '../machines/machine-table'
 import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
-import { changeOverOf } from '../starters/position'
 import { type BeforeStart, supplyPower, weakestBus } from './before-start'
-import type { Courses, StartCourse } from './course'
+import { type Courses, type StartCourse, untilOf } from './course'
 import { type Crossing, firstCrossings } from './crossing'
 import { findBalance, findHang, hangOutcome } from './hang'
 import { busVoltages, motorState, placeOf } from './observation'
 import { createRecorder } from './recorder'
 import type { SampleStore } from './sampler'
-import { changeOver, nextInstant, sameInstant, switchDue } from './schedule'
+import { advance, type Move, nextInstant, rampEnd, sameInstant, switchCapacitor, switchDue } from './schedule'
 import type { System } from './system'
+import { tripDrive } from './trip'
 
 /** How a run ended. */
 export type RunEnd =
@@ -83,8 +84,9 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   /** Solves anew after switchings and notes the state just after them; false where the network has no solution. */
-  function afterSwitching(t: number, moved: readonly StartCourse[], halted: ReadonlySet<number> = nobody): boolean {
+  function afterSwitching(t: number, moved: readonly Move[], halted: ReadonlySet<number> = nobody): boolean {
     lastHangTorque = Number.POSITIVE_INFINITY
+    system.setTime(t)
     if (!system.solveAt(state)) return false
     release(halted)
     if (!recorder.begin(t)) return false
@@ -92,23 +94,26 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       first = Float64Array.from(now)
       firstPower = supplyPower(system, before.source)
     }
-    for (const start of moved) {
+    for (const move of moved) {
+      const { start } = move
       if (start.standstill === null) start.standstill = motorState(system, now, start.motor)
-      else noteChangeOver(start, t)
+      else noteChangeOver(move, t)
     }
     return integrator.restart(t, 0)
   }
 
-  function noteChangeOver({ motor, position }: StartCourse, t: number): void {
-    if (position !== 'open' && position !== 'running') return
+  function noteChangeOver({ start, capacitor }: Move, t: number): void {
+    const { motor, position } = start
+    const capacitorState = capacitor === null ? null : start.capacitors[capacitor]!.state
+    const transferred = capacitor === null && (position === 'running' || position === 'rotor')
     courses.changeOvers.push({
       motorId: plant.motors[motor]!.id,
       at: second(t),
-      to: position,
+      to: capacitorState === null ? position : capacitorState === 'in' ? 'capacitor-in' : 'capacitor-out',
       speed: radianPerSecond(state[motor]!),
       state: motorState(system, now, motor),
       busVoltages: busVoltages(system, now),
-      tooEarly: position === 'running' && state[motor]! < plant.breakdownSpeed[motor]!,
+      tooEarly: transferred && state[motor]! < breakdownSpeedNow(system, motor),
     })
   }
 
@@ -128,10 +133,10 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   /** Acts on crossings at the present instant: the starts that changed over and the shafts that halted. */
-  function act(crossings: readonly Crossing[], t: number): { moved: StartCourse[]; halted: Set<number> } {
-    const moved: StartCourse[] = []
+  function act(crossings: readonly Crossing[], t: number): { moved: Move[]; halted: Set<number> } {
+    const moved: Move[] = []
     const halted = new Set<number>()
-    for (const { motor, kind } of crossings) {
+    for (const { motor, kind, capacitor } of crossings) {
       if (kind === 'corner-up') system.piece[motor] = system.piece[motor]! + 1
       if (kind === 'corner-down') system.piece[motor] = system.piece[motor]! - 1
       if (kind === 'halt') {
@@ -152,11 +157,11 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
         start.atCriterion = t
         start.i2t = state[at]!
         start.slipEnergy = state[at + 1]!
+        start.extraAtCriterion = start.extraHeat
       }
-      if (start && kind === 'change-over') {
-        changeOver(system, start, t)
-        moved.push(start)
-      }
+      if (start && kind === 'change-over') moved.push(advance(system, start, t))
+      if (start && kind === 'capacitor') moved.push(switchCapacitor(system, start, capacitor))
+      if (start && kind === 'undervoltage') moved.push(tripDrive(system, start, state[motor]!, t))
     }
     return { moved, halted }
   }
@@ -165,8 +170,10 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   function releaseInstant(): number | null {
     let earliest: number | null = null
     for (let i = 0; i < plant.motors.length; i++) {
+      system.setTime(integrator.time)
       if (!held(i) || !system.solveAt(state) || system.balance(i, 0) <= 0) continue
       const surplus = (t: number): number => {
+        system.setTime(t)
         integrator.interpolate(t, scratch)
         return system.solveAt(scratch) ? system.balance(i, 0) : -1
       }
@@ -190,14 +197,14 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   /** Whether the run is over: starts resolved and shafts settled, or every open start hanging. */
-  function isOver(): boolean {
-    if (starts.some((start) => start.position === 'open' || !start.switchedOn)) return false
+  function isOver(t: number): boolean {
+    if (starts.some((start) => untilOf(start)?.kind === 'after' || !start.switchedOn)) return false
     const torque = restlessness()
     const open = starts.filter((start) => start.outcome === null)
     // A start that was given up goes on turning: there is no settled plant to wait for.
-    const givenUp = starts.some((start) => start.outcome?.kind === 'timed-out')
+    const givenUp = starts.some(({ outcome }) => outcome?.kind === 'timed-out' || outcome?.kind === 'tripped')
     if (open.length === 0) return givenUp || torque < settledTorque
-    const waits = open.some((start) => start.position !== 'running' && changeOverOf(start.starter)?.kind === 'time')
+    const waits = open.some((start) => untilOf(start)?.kind === 'time' || rampEnd(start) > t)
     if (waits || torque > hangingTorque || torque > lastHangTorque / 2) return false
     lastHangTorque = torque
     judgeHanging(open)
@@ -213,9 +220,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   /** Passes over time in which nothing moves, up to the next instant; false where something does move. */
   function skipStillness(t: number, until: number): boolean {
-    if (until - t <= longest || restlessness() > settledTorque || starts.some((start) => start.position === 'open')) {
-      return false
-    }
+    const moves = starts.some((start) => start.position === 'open' || rampEnd(start) > t)
+    if (until - t <= longest || restlessness() > settledTorque || moves) return false
     const speeds = findBalance(system, state, 1e-5)
     if (speeds === null) return false
     state.set(speeds)
@@ -255,11 +261,11 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       if (released !== null && letGo) integrator.cutAt(released)
       else if (crossings.length > 0) integrator.cutAt(crossed)
       // The crossed speed itself, so that a shaft that halts stands still exactly.
-      for (const { motor, speed } of crossings) state[motor] = speed
+      for (const { motor, speed } of crossings) if (speed !== null) state[motor] = speed
       if (!recorder.follow(!letGo && crossings.length === 0)) return collapsed(integrator.time)
     }
     const t = integrator.time
-    for (const start of starts) if (start.position === 'star') start.i2tInStar = state[system.integral[start.motor]!]!
+    for (const start of starts) noteHeat(start, state[system.integral[start.motor]!]!)
     const { moved, halted } = act(crossings, t)
     moved.push(...switchDue(system, starts, t))
     judgeStarted()
@@ -267,9 +273,27 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     if (moved.length > 0 || halted.size > 0 || letGo) {
       if (!afterSwitching(t, moved, halted)) return collapsed(t)
       judgeStarted()
+    } else if (starts.some((start) => Math.abs(rampEnd(start) - t) < sameInstant)) {
+      if (!afterSwitching(t, [])) return collapsed(t)
     } else if (crossings.length > 0 && !integrator.restart(t, stride)) return collapsed(t)
-    if (isOver()) return result({ kind: 'settled', at: t })
+    if (isOver(t)) return result({ kind: 'settled', at: t })
   }
+}
+
+/** Breakdown speed of a motor with what is in its rotor circuit now, rad/s. */
+function breakdownSpeedNow(system: System, motor: number): number {
+  const { plant } = system
+  if (system.connection.ownRotor[motor] === 1) return plant.breakdownSpeed[motor]!
+  const { circuit } = plant.motors[motor]!
+  const share = system.connection.ownRotor[motor]!
+  const cages = circuit.cages.map((cage) => ({ ...cage, resistance: ohm(cage.resistance / share) }))
+  return plant.synchronous[motor]! * (1 - breakdownSlip({ ...circuit, cages }))
+}
+
+/** Adds what the last stretch heated the winding beyond the integral of the terminal current. */
+function noteHeat(start: StartCourse, i2t: number): void {
+  start.extraHeat += ((start.steps[start.step]?.heat ?? 1) - 1) * (i2t - start.i2tSeen)
+  start.i2tSeen = i2t
 }
 
 /** Error allowed in a step: speeds in parts of synchronous speed, integrals in parts of ten seconds of locked rotor at rated voltage. */

@@ -3,9 +3,11 @@ import { evaluateMachine } from '../machines/machine-table'
 import type { AdmittanceMatrix } from '../network/admittance'
 import { type ReducedNetwork, reduceNetwork } from '../network/reduce'
 import { createSolver, type NetworkSolver } from '../network/solver'
-import { connect, connections, evaluateConnection } from '../starters/connection'
-import type { Position } from '../starters/position'
+import { codes, connect, connections, disconnect, evaluateConnection, isRegulated } from '../starters/connection'
+import { evaluateDrive } from '../starters/drive'
+import type { Step } from '../starters/position'
 import type { Plant } from './plant'
+import { createRegulation } from './regulation'
 
 /** The plant with its network reduced for one driving node, motors in given positions. The run-up works on it in place. */
 export interface System {
@@ -16,18 +18,22 @@ export interface System {
   readonly resting: Uint8Array
   /** Piece of the load curve each motor is on; kept over a step so that the step sees a smooth curve. */
   readonly piece: Int32Array
-  /** Written by `solveAt`: torque in N·m, airgap power in W, square of the bus voltage in V², square of the motor current in A². */
+  /** Written by `solveAt`: torque in N·m, loss in the rotor in W, squares of bus voltage in V², motor and line current in A². */
   readonly torque: Float64Array
-  readonly airgapPower: Float64Array
+  readonly slipLoss: Float64Array
   readonly busSquare: Float64Array
   readonly currentSquare: Float64Array
+  readonly lineSquare: Float64Array
   readonly connection: ReturnType<typeof connections>
   /** Place of each starting motor's two integrals in the state (∫I²dt, then ∫s·P_ag dt), −1 for others. */
   readonly integral: Int32Array
   readonly stateLength: number
   /** Load curves in force. */
   driven: readonly LoadSegments[]
-  move(motor: number, position: Position): void
+  /** Brings a motor into a position of its starting device at case time t, or off the line. */
+  move(motor: number, step: Pick<Step, 'link' | 'rotorResistance'> | null, t: number): void
+  /** Case time that `solveAt` holds for; ramps of starting devices look at it. */
+  setTime(t: number): void
   /** Solves the network with every motor at the given speed (rad/s); false where there is no solution. */
   solveAt(speeds: Float64Array): boolean
   /** Right-hand side of the run-up. State: speed of every motor, then the integrals. */
@@ -35,6 +41,10 @@ export interface System {
   /** Torque left for acceleration after `solveAt`, with the piece looked up by speed; at standstill against the breakaway torque. */
   balance(motor: number, speed: number): number
 }
+
+/** Agreement of the voltages of network and devices, as a part of their squares, and rounds after which there is none. */
+const regulationTolerance = 1e-11
+const mostRounds = 60
 
 /** Nodes that stay after the reduction: motors first, nodes with nonlinear loads last; how many come first. */
 function keptNodes(plant: Plant, driven: number): { nodes: number[]; linear: number } {
@@ -59,11 +69,13 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
   const count = plant.motors.length
   const { machines, synchronous, torqueFactor, inertia } = plant
   const row = Int32Array.from(plant.node, (node) => network.rowOf[node]!)
-  const connection = connections(plant.starters)
+  const connection = connections(count)
+  const ownRotor = Float64Array.from({ length: count }, (_, i) => machines.circuit[8 * i + 4]!)
   const torque = new Float64Array(count)
-  const airgapPower = new Float64Array(count)
-  const busSquare = new Float64Array(count)
+  const slipLoss = new Float64Array(count)
+  const busSquare = Float64Array.from(plant.motors, (motor) => motor.ratedVoltage ** 2)
   const currentSquare = new Float64Array(count)
+  const lineSquare = new Float64Array(count)
   const resting = new Uint8Array(count)
   const piece = new Int32Array(count)
   let length = count
@@ -74,37 +86,98 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
   })
   const { shunt, voltage, driven } = solver
 
+  /** Motors whose devices look at the voltage of their bus; the rest of the work is spared while there are none. */
+  const regulated = new Uint8Array(count)
+  let regulatedMotors = 0
+  let time = 0
+  const regulation = createRegulation(count)
+
+  function squareAt(i: number): number {
+    const at = 2 * row[i]!
+    const re = at < 0 ? driven[0]! : voltage[at]!
+    const im = at < 0 ? driven[1]! : voltage[at + 1]!
+    return re * re + im * im
+  }
+
+  /** What motor i and its device show the bus at this speed, for the square of the voltage there. */
+  function evaluate(i: number, speed: number, square: number): void {
+    if (connection.code[i] === codes.drive) {
+      const load = system.driven[i]!
+      const opposing = resting[i] ? loadTorqueAt(load, 0) : loadTorque(load, piece[i]!, speed)
+      evaluateDrive(connection, i, speed, opposing, square, time)
+      return
+    }
+    evaluateMachine(machines, i, 1 - speed / synchronous[i]!)
+    const atFull = regulated[i] ? (torqueFactor[i]! * machines.airgap[i]! * square) / synchronous[i]! : 0
+    evaluateConnection(connection, machines, i, square, time, atFull)
+  }
+
+  function addShunt(i: number): void {
+    const at = 2 * row[i]!
+    if (at < 0) return
+    shunt[at] = shunt[at]! + connection.admittance[2 * i]!
+    shunt[at + 1] = shunt[at + 1]! + connection.admittance[2 * i + 1]! + connection.shunt[i]!
+  }
+
+  /** Network and devices in turns until the voltages that the devices saw are those of the network. */
+  function regulate(speeds: Float64Array): boolean {
+    regulation.begin()
+    for (let round = 0; round < mostRounds; round++) {
+      shunt.fill(0)
+      for (let i = 0; i < count; i++) {
+        if (connection.code[i] === 0) continue
+        if (regulated[i]) evaluate(i, speeds[i]!, busSquare[i]!)
+        addShunt(i)
+      }
+      if (!solver.solve()) return false
+      let farthest = 0
+      for (let i = 0; i < count; i++) {
+        if (!regulated[i]) continue
+        const found = squareAt(i)
+        const off = Math.abs(found - busSquare[i]!) / found
+        if (!(off <= farthest)) farthest = off
+        busSquare[i] = regulation.next(i, busSquare[i]!, found)
+      }
+      if (farthest < regulationTolerance) return true
+    }
+    return false
+  }
+
   function solveAt(speeds: Float64Array): boolean {
     shunt.fill(0)
     for (let i = 0; i < count; i++) {
       if (connection.code[i] === 0) continue
-      evaluateMachine(machines, i, 1 - speeds[i]! / synchronous[i]!)
-      evaluateConnection(connection, machines, i)
-      const at = 2 * row[i]!
-      if (at < 0) continue
-      shunt[at] = shunt[at]! + connection.admittance[2 * i]!
-      shunt[at + 1] = shunt[at + 1]! + connection.admittance[2 * i + 1]!
+      if (!regulated[i]) evaluate(i, speeds[i]!, 1)
+      addShunt(i)
     }
-    if (!solver.solve()) return false
+    if (!(regulatedMotors > 0 ? regulate(speeds) : solver.solve())) return false
     for (let i = 0; i < count; i++) {
-      const at = 2 * row[i]!
-      const re = at < 0 ? driven[0]! : voltage[at]!
-      const im = at < 0 ? driven[1]! : voltage[at + 1]!
-      const square = re * re + im * im
+      const square = squareAt(i)
       busSquare[i] = square
-      if (connection.code[i] === 0) {
+      const code = connection.code[i]!
+      if (code === 0) {
         torque[i] = 0
-        airgapPower[i] = 0
+        slipLoss[i] = 0
         currentSquare[i] = 0
+        lineSquare[i] = 0
+        continue
+      }
+      if (code === codes.drive) {
+        torque[i] = connection.torque[i]!
+        slipLoss[i] = connection.slipLoss[i]!
+        currentSquare[i] = connection.motorSquare[i]!
+        lineSquare[i] = connection.lineSquare[i]!
         continue
       }
       const power = machines.airgap[i]! * connection.winding[i]! * square
-      airgapPower[i] = power
       torque[i] = (torqueFactor[i]! * power) / synchronous[i]!
+      slipLoss[i] = (1 - speeds[i]! / synchronous[i]!) * power * connection.ownRotor[i]!
       const yRe = connection.admittance[2 * i]!
       const yIm = connection.admittance[2 * i + 1]!
       const share = connection.current[i]!
       currentSquare[i] = ((yRe * yRe + yIm * yIm) * square * share * share) / 3
+      const withCapacitors = yIm + connection.shunt[i]!
+      lineSquare[i] = ((yRe * yRe + withCapacitors * withCapacitors) * square) / 3
     }
     return true
   }
@@ -116,18 +189,31 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     resting,
     piece,
     torque,
-    airgapPower,
+    slipLoss,
     busSquare,
     currentSquare,
+    lineSquare,
     connection,
     integral,
     stateLength: length,
     driven: plant.driven,
-    move(motor, position) {
-      connect(connection, motor, position)
+    move(motor, step, t) {
+      const added = step?.rotorResistance ?? 0
+      const own = ownRotor[motor]!
+      machines.circuit[8 * motor + 4] = own + added
+      connection.ownRotor[motor] = own / (own + added)
+      const { ratedTorque, ratedVoltage } = plant.motors[motor]!
+      if (step === null) disconnect(connection, motor)
+      else connect(connection, motor, step, t, { ratedTorque, ratedVoltage, inertia: inertia[motor]! })
+      regulated[motor] = isRegulated(connection, motor) ? 1 : 0
+      regulatedMotors = regulated.reduce((sum, one) => sum + one, 0)
+    },
+    setTime(t) {
+      time = t
     },
     solveAt,
-    derivative(_t, state, rate) {
+    derivative(t, state, rate) {
+      time = t
       if (!solveAt(state)) return false
       for (let i = 0; i < count; i++) {
         const speed = state[i]!
@@ -135,7 +221,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
         const at = integral[i]!
         if (at < 0) continue
         rate[at] = currentSquare[i]!
-        rate[at + 1] = (1 - speed / synchronous[i]!) * airgapPower[i]!
+        rate[at + 1] = slipLoss[i]!
       }
       return true
     },

@@ -1,4 +1,5 @@
-import type { ChangeOver, Starter } from '../../engine/case-input'
+import type { Starter } from '../../engine/case-input'
+import type { ChangeOver } from '../../engine/starter-input'
 import { ohm, perUnit, radianPerSecond, second } from '../../units/si'
 import type { StarterRecord } from '../document/case-records'
 import type { MotorRecord } from '../document/machine-records'

@@ -14,6 +14,7 @@ export const startOutcomeWords: Record<StartOutcome['kind'], string> = {
   stalled: 'stalled',
   'never-turned': 'never turned',
   'timed-out': 'timed out',
+  tripped: 'tripped',
 }
 
 /** How a start ended, in one sentence about the motor. */
@@ -31,6 +32,8 @@ export const startOutcomeSentence = (outcome: StartOutcome, motor: string): stri
       return `${motor} does not turn; ${torque(outcome.missing)} are missing to break away.`
     case 'timed-out':
       return `${motor} is at ${speed(outcome.speed)} when the time limit ends the start.`
+    case 'tripped':
+      return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}: the line voltage falls below the undervoltage level of its drive.`
   }
 }
 

@@ -22,4 +22,11 @@ export const methodNames: Record<StarterKind, string> = {
   direct: 'direct-on-line',
   autotransformer: 'autotransformer',
   'star-delta': 'star-delta',
+  reactor: 'series reactor',
+  resistor: 'series resistor',
+  'soft-starter': 'soft starter',
+  'part-winding': 'part winding',
+  'rotor-resistance': 'rotor resistance',
+  'captive-transformer': 'captive transformer',
+  drive: 'variable-speed drive',
 }

@@ -2,8 +2,8 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { InductionCircuit, Starter } from '@/lib/engine/case-input'
 import { evaluateMachine, machineTable } from '@/lib/engine/machines/machine-table'
-import { connect, connections, evaluateConnection } from '@/lib/engine/starters/connection'
-import { changeOverOf, firstPosition, gapOf, type Position } from '@/lib/engine/starters/position'
+import { connect, connections, disconnect, evaluateConnection } from '@/lib/engine/starters/connection'
+import { hasGap, type Position, stepsOf } from '@/lib/engine/starters/position'
 import { ohm, perUnit, second } from '@/lib/units/si'
 
 const circuit: InductionCircuit = {
@@ -27,30 +27,36 @@ const tap = (k: number, r = 0, x = 0): Starter => ({
 const starDelta: Starter = { kind: 'star-delta', changeOver: { kind: 'time', at: second(5) }, gap: second(0.05) }
 
 /** The connection of the machine at a slip, on a bus of 1 V. */
-function at(starter: Starter | null, position: Position, slip = 1) {
+function at(starter: Starter, position: Position, slip = 1) {
   const machines = machineTable([circuit])
-  const connection = connections([starter])
-  connect(connection, 0, position)
+  const connection = connections(1)
+  connect(connection, 0, stepsOf(starter).find((step) => step.position === position)!, 0, machine)
   evaluateMachine(machines, 0, slip)
   evaluateConnection(connection, machines, 0)
   const y = { re: machines.admittance[0]!, im: machines.admittance[1]! }
   return { y, line: { re: connection.admittance[0]!, im: connection.admittance[1]! }, connection }
 }
 
+const machine = { ratedTorque: 100, inertia: 2, ratedVoltage: 400 }
+const positions = (starter: Starter) => stepsOf(starter).map((step) => step.position)
+
 const size = ({ re, im }: { re: number; im: number }) => Math.hypot(re, im)
 
 describe('a starting device', () => {
   it('begins on its tap, in star, or at once in the running position', () => {
-    expect(firstPosition({ kind: 'direct' })).toBe('running')
-    expect(firstPosition(tap(0.65))).toBe('tap')
-    expect(firstPosition(starDelta)).toBe('star')
+    expect(positions({ kind: 'direct' })).toEqual(['running'])
+    expect(positions(tap(0.65))).toEqual(['tap', 'open', 'running'])
+    expect(positions(starDelta)).toEqual(['star', 'open', 'running'])
   })
 
-  it('changes over by its condition after its gap; direct-on-line has neither', () => {
-    expect(changeOverOf({ kind: 'direct' })).toBeNull()
-    expect(gapOf({ kind: 'direct' })).toBe(0)
-    expect(changeOverOf(starDelta)).toEqual({ kind: 'time', at: 5 })
-    expect(gapOf(tap(0.5))).toBe(0.1)
+  it('leaves its first position by its condition and the gap after its time; the running position is kept', () => {
+    expect(stepsOf(starDelta).map(({ until }) => until)).toEqual([
+      { kind: 'time', at: 5 },
+      { kind: 'after', time: 0.05 },
+      null,
+    ])
+    expect(hasGap({ kind: 'direct' })).toBe(false)
+    expect(hasGap(tap(0.5))).toBe(true)
   })
 
   it('on an ideal tap k draws k² of the line current of the direct start and gives k² of the torque', () => {
@@ -103,7 +109,7 @@ describe('a starting device', () => {
   })
 
   it('in the running position is not there', () => {
-    for (const starter of [null, { kind: 'direct' as const }, tap(0.65, 0.1, 0.6), starDelta]) {
+    for (const starter of [{ kind: 'direct' as const }, tap(0.65, 0.1, 0.6), starDelta]) {
       const { y, line, connection } = at(starter, 'running')
       expect(line).toEqual(y)
       expect(connection.winding[0]).toBe(1)
@@ -114,13 +120,15 @@ describe('a starting device', () => {
 
   it('draws nothing while off or open, also after it was on', () => {
     const machines = machineTable([circuit])
-    const connection = connections([tap(0.65)])
+    const connection = connections(1)
+    const steps = stepsOf(tap(0.65))
     evaluateMachine(machines, 0, 1)
-    connect(connection, 0, 'tap')
+    connect(connection, 0, steps[0]!, 0, machine)
     evaluateConnection(connection, machines, 0)
     expect(connection.admittance[0]).toBeGreaterThan(0)
     for (const position of ['open', 'off'] as const) {
-      connect(connection, 0, position)
+      if (position === 'open') connect(connection, 0, steps[1]!, 0, machine)
+      else disconnect(connection, 0)
       evaluateConnection(connection, machines, 0)
       expect([...connection.admittance]).toEqual([0, 0])
       expect(connection.winding[0]).toBe(0)

@@ -1,4 +1,5 @@
 import type { ReactElement } from 'react'
+import { changeOverTargetWords } from '@/lib/study/words/change-over-words'
 import { motorTag } from '@/lib/study/words/tags'
 import { dataTable } from '../../paper/data-table'
 import { paragraph } from '../../paper/text-block'
@@ -20,7 +21,7 @@ export const changeOverTable = (context: ReportContext): readonly ReactElement[]
       return [
         { text: record.tag, weight: 'semibold' as const },
         motorTag(input.document, one.motorId),
-        say.positions[one.to],
+        changeOverTargetWords[one.to],
         seconds(one.at),
         rpm(one.speed),
         one.to === 'open' ? dash : current(one.state.lineCurrent),

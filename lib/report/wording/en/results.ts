@@ -76,7 +76,6 @@ export const results = {
       change: (place: string) => `Change at ${place}, %`,
       remark: 'Remark',
     },
-    positions: { open: 'open', running: 'running' },
     tooEarly: 'too early: slip above breakdown',
   },
   running: {
