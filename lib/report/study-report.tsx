@@ -10,6 +10,7 @@ import { assumptions } from './sections/assumptions'
 import { calculationRecord } from './sections/calculation-record'
 import { cases } from './sections/cases'
 import { cautions, glossary } from './sections/cautions'
+import { commissioning } from './sections/commissioning'
 import { conclusions } from './sections/conclusions'
 import { contents } from './sections/contents'
 import { cover } from './sections/cover'
@@ -19,11 +20,14 @@ import { handCheck } from './sections/hand-check'
 import { inputData } from './sections/input-data'
 import { matrix } from './sections/matrix'
 import { method } from './sections/method'
+import { methodComparison } from './sections/method-comparison'
 import { plots } from './sections/plots'
 import { fullTables, results } from './sections/results/results'
 import { scope } from './sections/scope'
 import type { Section } from './sections/section'
+import { startCard } from './sections/start-card'
 import { diagramPages, system } from './sections/system'
+import { utilitySheet } from './sections/utility-sheet'
 import { verdictPage } from './sections/verdict-page'
 import { contentWidth, type PageFormat, portrait } from './theme'
 import { SourceList } from './values/source-list'
@@ -38,11 +42,32 @@ const middle: readonly Section[] = [
   results,
   matrix,
   plots,
+  methodComparison,
   conclusions,
+  commissioning,
   cautions,
 ]
-const appendices: readonly Section[] = [handCheck, fullTables, calculationRecord, decisions, glossary]
-const fresh: ReadonlySet<Section> = new Set([inputData, method, cases, results, matrix, plots, handCheck, fullTables])
+const appendices: readonly Section[] = [
+  handCheck,
+  fullTables,
+  utilitySheet,
+  startCard,
+  calculationRecord,
+  decisions,
+  glossary,
+]
+const fresh: ReadonlySet<Section> = new Set([
+  inputData,
+  method,
+  cases,
+  results,
+  matrix,
+  plots,
+  handCheck,
+  fullTables,
+  utilitySheet,
+  startCard,
+])
 
 const chromeWords = ({ document, revision, draft }: ReportInput, { frame }: Wording): ChromeWords => ({
   headLeft: `${document.head.documentNumber}  ${document.head.title}`,

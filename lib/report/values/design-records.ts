@@ -18,3 +18,9 @@ export const designMotors = (document: StudyDocument): readonly MotorRecord[] =>
   const started = new Set(designStarts(document).map((start) => start.motor))
   return document.plant.motors.filter(({ id }) => started.has(id))
 }
+
+/** Starting methods by which design cases start one motor. */
+export const startersOfMotor = (document: StudyDocument, motorId: string): readonly StarterRecord[] => {
+  const used = new Set(designStarts(document).flatMap(({ motor, starter }) => (motor === motorId ? [starter] : [])))
+  return document.plant.starters.filter(({ id }) => used.has(id))
+}

@@ -5,9 +5,10 @@ import { handCheck } from './en/hand-check'
 import { method } from './en/method'
 import { records } from './en/records'
 import { results } from './en/results'
+import { sheets } from './en/sheets'
 import { verdict } from './en/verdict'
 
 /** All wording of a report in English; another language is another object of this shape. */
-export const english = { language: 'en', cautions, fields, frame, handCheck, method, records, results, verdict }
+export const english = { language: 'en', cautions, fields, frame, handCheck, method, records, results, sheets, verdict }
 
 export type Wording = typeof english

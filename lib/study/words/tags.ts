@@ -10,5 +10,6 @@ export const supplyTag = ({ plant }: StudyDocument, id: string): string => tagIn
 export const loadTag = ({ plant }: StudyDocument, id: string): string => tagIn(plant.loads, id)
 export const transformerTag = ({ plant }: StudyDocument, id: string): string => tagIn(plant.transformers, id)
 export const plantConditionTag = ({ plant }: StudyDocument, id: string): string => tagIn(plant.plantConditions, id)
+export const loadConditionTag = ({ plant }: StudyDocument, id: string): string => tagIn(plant.loadConditions, id)
 export const caseTag = ({ cases }: StudyDocument, id: string): string => tagIn(cases, id)
 export const limitTag = ({ limits }: StudyDocument, id: string): string => tagIn(limits, id)

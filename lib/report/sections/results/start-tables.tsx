@@ -30,7 +30,7 @@ const ratedVoltage = ({ input }: ReportContext, motorId: string): number =>
   input.document.plant.motors.find(({ id }) => id === motorId)?.ratedVoltage.si ?? Number.NaN
 
 /** Deepest change at the bus of the supply, in parts of the voltage before. */
-const changeAtSupply = ({ places, supply }: CaseResult): number | null => {
+export const changeAtSupply = ({ places, supply }: CaseResult): number | null => {
   const place = places.find(({ busId }) => busId === supply?.busId)
   return place ? (place.before - place.deepest.voltage) / place.before : null
 }
