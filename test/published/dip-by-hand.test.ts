@@ -1,6 +1,8 @@
 import { describe, expect, test } from 'vitest'
+import type { InductionCircuit, MotorInput } from '@/lib/engine/case-input'
+import type { SoftStarter } from '@/lib/engine/starter-input'
 import { conductorResistance } from '@/lib/study/nameplate/cable-resistance'
-import { ohm } from '@/lib/units/si'
+import { ampere, ohm, perUnit, second } from '@/lib/units/si'
 import { atSwitchingOn, byRatio, lockedMotor, networkCase } from './support/network-case'
 import { oneMotorCase, startOf } from './support/one-motor-case'
 import { within } from './support/within'
@@ -29,15 +31,15 @@ describe('impedance method with X/R kept (constructed here, not published): 1.2 
   const rated = 1.2e6 / (Math.sqrt(3) * 3300 * 0.95 * 0.86)
   const circuit = lockedMotor(3300 / Math.sqrt(3) / (6 * rated), 0.2)
   const resistance = conductorResistance('copper', 185, 70)!
-  const { part, standstill } = atSwitchingOn(
+  const plant = (motor: InductionCircuit) =>
     networkCase({
       sourceVoltage: 11_000,
       source: byRatio(11_000 ** 2 / 150e6, 10),
       transformer: { from: 11_000, to: 3300, impedance: byRatio((0.07 * 3300 ** 2) / 5e6, 12) },
       cable: { re: ohm(200 * resistance), im: ohm(0.2 * 0.09) },
-      motor: { circuit, voltage: 3300 },
-    }),
-  )
+      motor: { circuit: motor, voltage: 3300 },
+    })
+  const { part, standstill } = atSwitchingOn(plant(circuit))
 
   test('rated current 256.97 A, starting current 1285.8 A', () => {
     expect(rated).toBeCloseTo(256.97, 2)
@@ -53,6 +55,25 @@ describe('impedance method with X/R kept (constructed here, not published): 1.2 
   test('starting torque is 0.6955 of that at rated voltage', () => {
     const atRated = startOf({ circuit, voltage: 3300, frequency: 50, poles: 4 }).standstill.torque
     expect(standstill.torque / atRated).toBeCloseTo(0.6955, 4)
+  })
+
+  test('held at three times rated current with power factor 0.3 at the starter’s line side: 0.90115 remains', () => {
+    // The power factor at the line side fixes the motor's resistance; a third of the voltage is left for its reactance.
+    const size = (0.90115 * 3300) / Math.sqrt(3) / (3 * rated)
+    const input = plant(lockedMotor(0.5 * size, 0.6))
+    const starter: SoftStarter = {
+      kind: 'soft-starter',
+      ramp: { kind: 'voltage', from: perUnit(1), to: perUnit(1) },
+      rampTime: second(0),
+      kick: null,
+      currentLimit: ampere(3 * rated),
+      bypass: null,
+    }
+    const motors = input.motors.map((motor) => ({ ...motor, duty: { ...motor.duty, starter } }) as MotorInput)
+    const held = atSwitchingOn({ ...input, motors })
+    within(held.standstill.lineCurrent, 3 * rated, 1e-9)
+    expect(held.standstill.powerFactor).toBeCloseTo(0.3, 4)
+    expect(held.part('M')).toBeCloseTo(0.90115, 5)
   })
 
   test('constant power of the full six times current would overstate the dip: 19.9 against 16.6 %', () => {

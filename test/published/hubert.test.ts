@@ -5,7 +5,7 @@ import type { QuantityName } from '@/lib/quantity/quantity-name'
 import { codeLetter, kvaPerHorsepower } from '@/lib/study/nameplate/code-letter'
 import { ampere, volt, watt } from '@/lib/units/si'
 import { atTerminals, breakdown, type TextbookMachine } from './support/at-terminals'
-import { direct, inStar, startOf } from './support/one-motor-case'
+import { behind, direct, inStar, startOf } from './support/one-motor-case'
 import { noMagnetising, singleCage } from './support/single-cage'
 import { within } from './support/within'
 
@@ -121,5 +121,22 @@ describe('Hubert, Electric Machines, example 5.19: a star-delta start of 60 hp',
     const kva = kvaPerHorsepower(ampere(lineCurrent), volt(460), watt(read('60 hp', 'active-power')))
     expect(kva).toBeCloseTo(19.34, 2)
     expect(codeLetter(kva)).toBe('T')
+  })
+})
+
+describe('Hubert, Electric Machines, example 5.21: a series reactor for 7.5 hp at 208 V', () => {
+  const motor = { circuit: singleCage(0, 0, noMagnetising, 0.294, 0.809), voltage: 208, frequency: 60, poles: 4 }
+
+  test('locked 0.861 Ω and 139.5 A', () => {
+    expect(Math.hypot(0.294, 0.809)).toBeCloseTo(0.861, 3)
+    within(startOf({ ...motor, starter: direct }).standstill.lineCurrent, 139.5, 1e-3)
+  })
+
+  test('1.6755 Ω (4.44 mH at 60 Hz) hold 48 A with 80.4 V across the reactor', () => {
+    const { lineCurrent, motorVoltage } = startOf({ ...motor, starter: behind('reactor', 1.6755) }).standstill
+    within(lineCurrent, 48, 1e-3)
+    expect((1.6755 / (2 * Math.PI * 60)) * 1e3).toBeCloseTo(4.44, 2)
+    within(lineCurrent * 1.6755, 80.4, 1e-3)
+    within(motorVoltage, Math.sqrt(3) * 48 * 0.861, 1e-3)
   })
 })

@@ -1,6 +1,8 @@
 import { describe, expect, test } from 'vitest'
+import type { Starter } from '@/lib/engine/case-input'
+import { ohm, second } from '@/lib/units/si'
 import { atTerminals, breakdown } from './support/at-terminals'
-import { direct, inStar, onTap, startOf } from './support/one-motor-case'
+import { behind, direct, inStar, onTap, startOf } from './support/one-motor-case'
 import { noMagnetising, singleCage } from './support/single-cage'
 import { statedMotor } from './support/stated-motor'
 import { within } from './support/within'
@@ -51,6 +53,15 @@ describe('Kothari and Nagrath, Electric Machines, example 9.12: ways of starting
     within(torque / motor.ratedTorque, 0.2, 1e-6)
   })
 
+  test('stator resistance that holds the current at 2 pu: 0.2 pu torque', () => {
+    const { resistance, reactance } = motor.circuit.cages[0]!
+    const size = motor.voltage / Math.sqrt(3) / (2 * motor.ratedCurrent)
+    const added = Math.sqrt(size ** 2 - reactance ** 2) - resistance
+    const { lineCurrent, torque } = startOf({ ...motor, starter: behind('resistor', added) }).standstill
+    within(lineCurrent / motor.ratedCurrent, 2, 1e-6)
+    within(torque / motor.ratedTorque, 0.2, 1e-6)
+  })
+
   test('star-delta: 2 pu current, 0.6 pu torque', () => {
     const { lineCurrent, torque } = startOf({ ...motor, starter: inStar }).standstill
     within(lineCurrent / motor.ratedCurrent, 2, 1e-6)
@@ -89,5 +100,33 @@ describe('FOSSEE textbook companion 3745, example 1.44: torques of two cages, st
     const ratio = (slip: number) => cageTorque(1, 1, slip) / cageTorque(0.2, 4, slip)
     within(ratio(1), 40.1, 1e-3)
     within(ratio(0.05), 0.399, 2e-3)
+  })
+})
+
+// Inputs also in a second public companion (Chakrabarti, ex. 10.9); both slip in the last step, answers recomputed.
+describe('Kothari and Nagrath, Electric Machines, example 9.11: slip rings, 3000 V, 50 Hz, 6 poles, turns 3.6', () => {
+  const turns = 3.6 ** 2
+  const motor = {
+    circuit: singleCage(0, 0, noMagnetising, 0.1 * turns, 2 * Math.PI * 50 * 3.61e-3 * turns),
+    voltage: 3000,
+    frequency: 50,
+    poles: 6,
+  }
+
+  test('rings shorted: 117.4 A and 511.6 N·m', () => {
+    const { lineCurrent, torque } = startOf({ ...motor, starter: direct }).standstill
+    within(lineCurrent, 117.4, 1e-3)
+    within(torque, 511.6, 1e-3)
+  })
+
+  test('4.208 Ω in each rotor phase, 54.54 Ω on the stator side: 30 A and 1439.5 N·m', () => {
+    expect(4.208 * turns).toBeCloseTo(54.54, 2)
+    const starter: Starter = {
+      kind: 'rotor-resistance',
+      steps: [{ resistance: ohm(4.208 * turns), changeOver: { kind: 'time', at: second(1e6) } }],
+    }
+    const { lineCurrent, torque } = startOf({ ...motor, starter }).standstill
+    within(lineCurrent, 30, 1e-3)
+    within(torque, 1439.5, 1e-3)
   })
 })

@@ -61,6 +61,10 @@ function capacitorDue(start: StartCourse, capacitor: number): number | null {
   return until?.kind === 'time' ? start.at + until.at : null
 }
 
+/** Whether a start still has a capacitor to switch by time. */
+export const awaitsCapacitor = (start: StartCourse, t: number): boolean =>
+  start.capacitors.some((_, c) => (capacitorDue(start, c) ?? t) > t + sameInstant)
+
 /** Does the switchings that are due at t; returns what moved. */
 export function switchDue(system: System, starts: readonly StartCourse[], t: number): Move[] {
   const moves: Move[] = []

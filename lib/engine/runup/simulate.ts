@@ -11,7 +11,16 @@ import { findBalance, findHang, hangOutcome } from './hang'
 import { busVoltages, motorState, placeOf } from './observation'
 import { createRecorder } from './recorder'
 import type { SampleStore } from './sampler'
-import { advance, type Move, nextInstant, rampEnd, sameInstant, switchCapacitor, switchDue } from './schedule'
+import {
+  advance,
+  awaitsCapacitor,
+  type Move,
+  nextInstant,
+  rampEnd,
+  sameInstant,
+  switchCapacitor,
+  switchDue,
+} from './schedule'
 import type { System } from './system'
 import { tripDrive } from './trip'
 
@@ -199,6 +208,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   /** Whether the run is over: starts resolved and shafts settled, or every open start hanging. */
   function isOver(t: number): boolean {
     if (starts.some((start) => untilOf(start)?.kind === 'after' || !start.switchedOn)) return false
+    if (starts.some((start) => awaitsCapacitor(start, t))) return false
     const torque = restlessness()
     const open = starts.filter((start) => start.outcome === null)
     // A start that was given up goes on turning: there is no settled plant to wait for.

@@ -44,6 +44,13 @@ export const onTap = (tap: number): Starter => ({
 /** A star-delta starter that stays in star. */
 export const inStar: Starter = { kind: 'star-delta', changeOver: { kind: 'time', at: second(1e6) }, gap: second(0) }
 
+/** A series impedance (Ω) that stays in. */
+export const behind = (kind: 'reactor' | 'resistor', size: number): Starter => ({
+  kind,
+  impedance: { re: ohm(kind === 'resistor' ? size : 0), im: ohm(kind === 'reactor' ? size : 0) },
+  changeOver: { kind: 'time', at: second(1e6) },
+})
+
 /** A load that no motor here can move: the rotor stays locked. */
 export const locked: LoadCurve = {
   kind: 'power',
