@@ -11,6 +11,7 @@ import type {
   Volt,
   VoltAmpere,
 } from '../units/si'
+import type { DutyResult } from './starters/duty'
 import type { Position } from './starters/position'
 
 /** How one start ended; every outcome is a result. */
@@ -106,6 +107,8 @@ export interface StartResult {
   slipEnergy: Joule
   kineticEnergy: Joule
   heatUsed: HeatUsed
+  /** Whether the starting device bears this start; left out for devices that carry nothing on the way. */
+  device?: DutyResult
   settledSpeed: RadianPerSecond | null
 }
 
@@ -146,6 +149,7 @@ export interface ChangeOverResult {
 export type Notice =
   | { kind: 'reduced-voltage-torque'; motorId: string; voltage: PerUnit }
   | { kind: 'change-over-too-early'; motorId: string }
+  | { kind: 'starter-duty-exceeded'; motorId: string; time: Second }
   | { kind: 'open-transition-without-transient'; motorId: string }
   | { kind: 'levels-motors-taken-out'; level: VoltAmpere }
   | { kind: 'load-below-floor'; loadId: string; at: Second }

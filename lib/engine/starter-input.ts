@@ -118,4 +118,6 @@ export interface StarterDuty {
   /** Longest time of one start outside the running position; null where the maker is silent. */
   secondsPerStart: Second | null
   startsPerHour: number | null
+  /** Starts in an hour that the plant plans; null where nothing is planned. */
+  plannedPerHour: number | null
 }

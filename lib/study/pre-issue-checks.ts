@@ -139,7 +139,8 @@ const noBypass: Finder = (document) => {
 
 const noDuty: Finder = (document) =>
   document.plant.starters.flatMap((starter, i) =>
-    starter.kind !== 'direct' &&
+    'duty' in starter &&
+    starter.dutyLimits === null &&
     starter.duty.trim() === '' &&
     document.schedules.some(({ starts }) => starts.some((start) => start.starter === starter.id))
       ? [issue(['plant', 'starters', i, 'duty'], `Starting method ${starter.tag}: its duty is not stated.`)]

@@ -1,6 +1,7 @@
 import { perUnit, second } from '../../units/si'
 import type { BusInput, StaticLoadInput } from '../case-input'
 import type { Notice } from '../case-result'
+import { judgeDuty } from '../starters/duty'
 import { hasGap } from '../starters/position'
 import type { BeforeStart } from './before-start'
 import type { Courses } from './course'
@@ -27,6 +28,11 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
     if (courses.changeOvers.some((change) => change.motorId === motor.id && change.tooEarly)) {
       found.push({ kind: 'change-over-too-early', motorId: motor.id })
     }
+    const { duty } = motor
+    const starterDuty = duty.kind === 'starting' ? duty.starterDuty : undefined
+    const device = judgeDuty(start.starter, starterDuty, (start.runningAt ?? record.end.at) - start.at)
+    if (device?.verdict === 'exceeded')
+      found.push({ kind: 'starter-duty-exceeded', motorId: motor.id, time: device.time })
     if (hasGap(start.starter)) found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
   }
   for (const load of plant.input.loads) {

@@ -9,6 +9,7 @@ import {
   second,
   volt,
 } from '../../units/si'
+import type { MotorInput } from '../case-input'
 import type {
   CaseSeries,
   HeatUsed,
@@ -18,6 +19,7 @@ import type {
   RunningResult,
   StartResult,
 } from '../case-result'
+import { type DutyResult, judgeDuty } from '../starters/duty'
 import type { Courses, RunningCourse, StartCourse } from './course'
 import type { Watch } from './extremes'
 import { placeOf } from './observation'
@@ -111,8 +113,15 @@ function startResult(
     slipEnergy: joule(slipEnergy),
     kineticEnergy: joule((motor.inertia * reached ** 2) / 2),
     heatUsed: heatUsed(system, i, i2t + (start.extraAtCriterion ?? start.extraHeat), slipEnergy),
+    ...deviceDuty(start, motor, record),
     settledSpeed: hangs && record.end.kind === 'settled' ? speedAtEnd : settledSpeed,
   }
+}
+
+function deviceDuty(start: StartCourse, { duty }: MotorInput, { end }: RunRecord): { device?: DutyResult } {
+  if (duty.kind !== 'starting') return {}
+  const device = judgeDuty(start.starter, duty.starterDuty, (start.runningAt ?? end.at) - start.at)
+  return device === null ? {} : { device }
 }
 
 /** ∫I²dt (referred to the winding) and slip energy in parts of what the permissible locked-rotor time allows, both at rated voltage and as declared. */

@@ -13,7 +13,7 @@ const touched = ({ input, words }: ReportContext): readonly string[] => {
   return [
     ...when(plant.capacitors.length > 0, say.capacitors),
     ...when(
-      starters.some((one) => one.kind !== 'direct' && one.gap.si > 0),
+      starters.some((one) => 'gap' in one && one.gap.si > 0),
       say.openTransition,
     ),
     ...when(

@@ -17,6 +17,9 @@ import {
 import { noRecords, recordRows, recordSheets } from './record-tables'
 import type { Section } from './section'
 
+/** Methods whose settings fit a row; with any other in the plant each method has a sheet. */
+const fewSettings: readonly string[] = ['direct', 'autotransformer', 'star-delta']
+
 const legend = ({ paper, words, width }: ReportContext) => {
   const { input } = words.records
   const marks = provenanceKinds.map((kind) => `${provenanceMark[kind].mark} ${provenanceMark[kind].meaning}`)
@@ -90,9 +93,11 @@ export const inputData: Section = (context) => {
     ),
     ...part('circuits', plant.motors.length > 0, () => recordSheets(context, circuitFields(fields), plant.motors)),
     ...part('drivenLoads', plant.drivenLoads.length > 0, () => drivenLoads(context)),
-    ...part('starters', plant.starters.length > 0, () => [
-      recordRows(context, starterFields(fields), plant.starters, wide),
-    ]),
+    ...part('starters', plant.starters.length > 0, () =>
+      plant.starters.every(({ kind }) => fewSettings.includes(kind))
+        ? [recordRows(context, starterFields(fields), plant.starters, wide)]
+        : recordSheets(context, starterFields(fields), plant.starters),
+    ),
     ...part('plantConditions', plant.plantConditions.length > 0, () => [
       recordRows(context, plantConditionFields(fields, document), plant.plantConditions, { [fields.running]: 3 }),
     ]),

@@ -1,9 +1,11 @@
-import type { LoadConditionRecord, PlantConditionRecord, StarterRecord } from '@/lib/study/document/case-records'
+import type { LoadConditionRecord, PlantConditionRecord } from '@/lib/study/document/case-records'
+import type { StarterRecord } from '@/lib/study/document/starter-record'
 import type { StudyDocument, StudySettings } from '@/lib/study/document/study-document'
+import { walkEntered } from '@/lib/study/walk-entered'
 import { listedTags } from '@/lib/study/words/list-words'
 import { loadTag, motorTag, transformerTag } from '@/lib/study/words/tags'
 import type { Wording } from '../wording/en'
-import { ofEntered, ofWords, type RecordField } from './record-field'
+import { type FieldValue, ofEntered, ofWords, type RecordField } from './record-field'
 
 type Words = Wording['fields']
 
@@ -30,10 +32,27 @@ export const starterFields = (words: Words): readonly RecordField<StarterRecord>
       return { text: words.values.own(impedance.text, rating.text, xOverR.text), provenance: impedance.provenance }
     },
   },
-  { label: words.changeOver, of: (one) => (one.kind === 'direct' ? null : ofEntered(one.changeOver.at)) },
-  { label: words.gap, of: (one) => (one.kind === 'direct' ? null : ofEntered(one.gap)) },
-  { label: words.duty, of: (one) => (one.kind === 'direct' ? null : ofWords(one.duty)) },
+  { label: words.changeOver, of: (one) => ('changeOver' in one ? ofEntered(one.changeOver.at) : null) },
+  { label: words.gap, of: (one) => ('gap' in one ? ofEntered(one.gap) : null) },
+  { label: words.duty, of: (one) => ('duty' in one ? ofWords(one.duty) : null) },
+  {
+    label: words.dutyStarts,
+    of: (one) => ('dutyLimits' in one ? ofWords(one.dutyLimits?.startsPerHour?.toString() ?? '') : null),
+  },
+  ...Object.entries(words.starterSettings).map(([place, label]) => ({
+    label,
+    of: (one: StarterRecord) => settingAt(one, place),
+  })),
 ]
+
+/** Values of a record at one place; those of a list one after the other, with the source of the first. */
+const settingAt = (record: StarterRecord, place: string): FieldValue | null => {
+  const found = walkEntered(record).filter(
+    ({ path }) => path.filter((key) => typeof key === 'string').join('.') === place,
+  )
+  const first = found[0]?.value
+  return first ? { text: found.map(({ value }) => value.text).join(', '), provenance: first.provenance } : null
+}
 
 const curveName = (document: StudyDocument, motor: string, curve: string): string =>
   document.plant.drivenLoads.find((load) => load.motor === motor)?.curves.find(({ id }) => id === curve)?.name ?? curve

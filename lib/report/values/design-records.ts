@@ -1,5 +1,5 @@
-import type { StarterRecord } from '@/lib/study/document/case-records'
 import type { MotorRecord } from '@/lib/study/document/machine-records'
+import type { StarterRecord } from '@/lib/study/document/starter-record'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 
 const designStarts = (document: StudyDocument) => {

@@ -64,7 +64,11 @@ export const openItems = ({ plant }: StudyDocument, { records }: Wording): reado
     ...lacking(motors, ({ pullUpTorque }) => pullUpTorque === null, say.pullUp),
     ...lacking(motors, (one) => one.permissibleCold === null && one.permissibleHot === null, say.permissible),
     ...lacking(motors, ({ startsCold, startsHot }) => startsCold === null && startsHot === null, say.starts),
-    ...lacking(starters, (one) => one.kind === 'autotransformer' && one.gap.si === 0, say.middleStep),
-    ...lacking(starters, (one) => one.kind !== 'direct' && one.duty.trim() === '', say.duty),
+    ...lacking(
+      starters,
+      (one) => one.kind === 'autotransformer' && one.gap.si === 0 && one.middle === null,
+      say.middleStep,
+    ),
+    ...lacking(starters, (one) => 'duty' in one && one.dutyLimits === null && one.duty.trim() === '', say.duty),
   ]
 }

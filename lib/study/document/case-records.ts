@@ -2,44 +2,6 @@ import * as z from 'zod'
 import { entered } from './entered'
 import { note, recordId, tag } from './identity'
 
-const changeOver = z
-  .discriminatedUnion('kind', [
-    z.strictObject({ kind: z.literal('time'), at: entered('time') }),
-    z.strictObject({ kind: z.literal('speed'), at: entered('speed') }),
-  ])
-  .describe("When the device goes to its running position: a speed, or a time from the motor's switching-on.")
-
-/** A starting method with its settings; several motors and cases may use the same. */
-export const starterRecord = z.discriminatedUnion('kind', [
-  z.strictObject({ id: recordId, tag, kind: z.literal('direct'), note }),
-  z.strictObject({
-    id: recordId,
-    tag,
-    kind: z.literal('autotransformer'),
-    tap: entered('ratio').describe('Voltage of the tap in parts of line voltage, for example 65 %.'),
-    own: z
-      .strictObject({ impedance: entered('ratio'), rating: entered('apparent-power'), xOverR: entered('ratio') })
-      .nullable()
-      .default(null)
-      .describe(
-        "Own impedance in parts of its rating at the motor's rated voltage, line side; null where taken as ideal.",
-      ),
-    changeOver,
-    gap: entered('time').describe('Time without voltage; 0 s for a closed transition.'),
-    duty: z.string().max(200).default('').describe('Starts that the maker of the device allows.'),
-    note,
-  }),
-  z.strictObject({
-    id: recordId,
-    tag,
-    kind: z.literal('star-delta'),
-    changeOver,
-    gap: entered('time'),
-    duty: z.string().max(200).default(''),
-    note,
-  }),
-])
-
 /** What runs before the start, which capacitors are in, where the taps stand. */
 export const plantConditionRecord = z.strictObject({
   id: recordId,
@@ -116,7 +78,6 @@ export const caseRecord = z.strictObject({
     ),
 })
 
-export type StarterRecord = z.infer<typeof starterRecord>
 export type PlantConditionRecord = z.infer<typeof plantConditionRecord>
 export type LoadConditionRecord = z.infer<typeof loadConditionRecord>
 export type CaseRecord = z.infer<typeof caseRecord>

@@ -45,7 +45,20 @@ export const limitRecord = z.strictObject({
       supplies: z.array(recordId).nullable().default(null),
       plantConditions: z.array(recordId).nullable().default(null),
       methods: z
-        .array(z.enum(['direct', 'autotransformer', 'star-delta']))
+        .array(
+          z.enum([
+            'direct',
+            'autotransformer',
+            'star-delta',
+            'reactor',
+            'resistor',
+            'soft-starter',
+            'part-winding',
+            'rotor-resistance',
+            'captive-transformer',
+            'drive',
+          ]),
+        )
         .nullable()
         .default(null),
       motors: z.array(recordId).nullable().default(null),

@@ -1,7 +1,8 @@
-import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord, starterRecord } from './case-records'
+import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord } from './case-records'
 import { limitRecord } from './limit-record'
 import { drivenLoadRecord, motorRecord } from './machine-records'
 import { busRecord, capacitorRecord, lineRecord, loadRecord, supplyRecord, transformerRecord } from './network-records'
+import { starterRecord } from './starter-record'
 
 /** Kinds of plant record and the schema of each; a plant is shared by the studies of its project. */
 export const plantRecordSchemas = {

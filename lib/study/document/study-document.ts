@@ -1,9 +1,10 @@
 import * as z from 'zod'
-import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord, starterRecord } from './case-records'
+import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord } from './case-records'
 import { entered } from './entered'
 import { limitRecord } from './limit-record'
 import { drivenLoadRecord, motorRecord } from './machine-records'
 import { busRecord, capacitorRecord, lineRecord, loadRecord, supplyRecord, transformerRecord } from './network-records'
+import { starterRecord } from './starter-record'
 
 const text = (max: number) => z.string().max(max).default('')
 

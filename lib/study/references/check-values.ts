@@ -4,6 +4,7 @@ import { synchronousSpeed, toRpm } from '../../units/speed'
 import type { Entered } from '../document/entered'
 import type { LoadCurveRecord, MotorRecord } from '../document/machine-records'
 import type { StudyDocument } from '../document/study-document'
+import { checkStarters } from './check-starters'
 import { unless } from './issue'
 
 type Path = FieldIssue['path']
@@ -128,17 +129,6 @@ const curve = (record: LoadCurveRecord, path: Path, tag: string): FieldIssue[] =
         ),
       )
 
-const starters = ({ plant }: StudyDocument): FieldIssue[] =>
-  plant.starters.flatMap((record, i) => {
-    const path = ['plant', 'starters', i] as const
-    if (record.kind !== 'autotransformer') return []
-    return [
-      ...part(record.tap, [...path, 'tap'], `The tap of starting method ${record.tag}`),
-      ...notBelow(record.own?.impedance ?? null, 0, [...path, 'own', 'impedance'], `The impedance of ${record.tag}`),
-      ...notBelow(record.own?.xOverR ?? null, 0, [...path, 'own', 'xOverR'], `X/R of ${record.tag}`),
-    ]
-  })
-
 const cases = ({ cases }: StudyDocument): FieldIssue[] =>
   cases.flatMap(({ changes, tag }, i) =>
     changes.flatMap((change, k) => {
@@ -166,7 +156,7 @@ export const checkValues = (document: StudyDocument): FieldIssue[] => [
   ...document.plant.drivenLoads.flatMap(({ curves, tag }, i) =>
     curves.flatMap((record, k) => curve(record, ['plant', 'drivenLoads', i, 'curves', k], tag)),
   ),
-  ...starters(document),
+  ...checkStarters(document),
   ...cases(document),
   ...settings(document),
 ]

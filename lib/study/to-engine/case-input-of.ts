@@ -7,7 +7,7 @@ import { lineInput, transformerInput } from './branch-inputs'
 import { loadCurveInput } from './load-curve-input'
 import { motorInput } from './motor-input'
 import { capacitorInput, staticLoadInput } from './shunt-inputs'
-import { starterInput } from './starter-input'
+import { startCapacitorInput, starterDutyInput, starterInput } from './starter-input'
 import { supplyInput } from './supply-input'
 
 /** Local error that the run-up is integrated to; tight enough that no printed digit depends on it. */
@@ -26,20 +26,24 @@ const runningDuties = (record: CaseRecord, index: RecordIndex): Duties =>
     duty: { kind: 'running', load: loadCurveInput(found(curveOf(index, motor, curve), record.id)) },
   }))
 
-const startingDuties = (record: CaseRecord, index: RecordIndex): Duties => {
+const startingDuties = ({ settings, frequency }: StudyDocument, record: CaseRecord, index: RecordIndex): Duties => {
   const { curves } = found(index.loadConditions.get(record.loadCondition), record.id)
   return found(index.schedules.get(record.schedule), record.id).starts.map(({ motor, at, starter }) => {
     const { starting, process } = found(
       curves.find((one) => one.motor === motor),
       record.id,
     )
+    const device = found(index.starters.get(starter), record.id)
+    const starterDuty = starterDutyInput(device, settings.startsPerHour.si)
     const curve = (id: string) => loadCurveInput(found(curveOf(index, motor, id), record.id))
     return {
       motorId: motor,
       duty: {
         kind: 'starting',
         at: second(at.si),
-        starter: starterInput(found(index.starters.get(starter), record.id), found(index.motors.get(motor), record.id)),
+        starter: starterInput(device, found(index.motors.get(motor), record.id), frequency.si),
+        ...(device.capacitors.length > 0 && { capacitors: device.capacitors.map(startCapacitorInput) }),
+        ...(starterDuty && { starterDuty }),
         load: curve(starting),
         processLoad: process === null ? null : curve(process),
       },
@@ -73,7 +77,7 @@ export const caseInputOf = (
     lines: plant.lines.map(lineInput),
     loads: plant.loads.filter(({ id }) => !condition.loadsOff.includes(id)).map(staticLoadInput),
     capacitors: plant.capacitors.filter(({ id }) => condition.capacitors.includes(id)).map(capacitorInput),
-    motors: [...runningDuties(record, index), ...startingDuties(record, index)].map(({ motorId, duty }) =>
+    motors: [...runningDuties(record, index), ...startingDuties(document, record, index)].map(({ motorId, duty }) =>
       motorInput({
         motor: found(index.motors.get(motorId), record.id),
         load: found(index.loadOfMotor.get(motorId), record.id),

@@ -63,7 +63,7 @@ const energisation: Rule = ({ plant }) => {
 }
 
 const gaps: Rule = ({ plant }) => ({
-  about: plant.starters.filter((starter) => starter.kind !== 'direct' && starter.gap.si > 0).map(({ tag }) => tag),
+  about: plant.starters.filter((starter) => 'gap' in starter && starter.gap.si > 0).map(({ tag }) => tag),
   sentence:
     'After a gap without voltage the motor still holds a residual voltage. Closing against it can draw more current and torque than a direct start; the change-over must be made by a device meant for it.',
 })

@@ -10,6 +10,8 @@ export const noticeSentence = (notice: Notice, document: StudyDocument): string 
       return `${motorTag(document, notice.motorId)} starts at ${printQuantity(notice.voltage, 'ratio', { unit: '%', digits: 3 })} of its rated voltage: torque taken as the square of voltage is optimistic there; hold the sensitivity with the exponent 2.25 against it.`
     case 'change-over-too-early':
       return `${motorTag(document, notice.motorId)} changes over while its slip is above breakdown: the current and the dip after the change-over are near those of a direct start.`
+    case 'starter-duty-exceeded':
+      return `${motorTag(document, notice.motorId)} asks more of its starting device than its duty allows: ${printQuantity(notice.time, 'time', { unit: 's', decimals: 1 })} outside the running position, or more starts an hour.`
     case 'open-transition-without-transient':
       return `${motorTag(document, notice.motorId)} changes over with a gap; the transient on reclosing is not in this model.`
     case 'levels-motors-taken-out':

@@ -61,7 +61,18 @@ export const method = {
           String.raw`\underline{y}_\mathrm{line} = \frac{1}{\underline{z} + \dfrac{1}{k^2\,\underline{y}}},\qquad I_\mathrm{line} = k\,I_\mathrm{motor},\qquad \underline{y}_\mathrm{star} = \frac{\underline{y}}{3}`,
           'Line admittance of an autotransformer, its line current, and the admittance in star.',
         ),
-        'A change-over follows its speed or time. A gap is without current and torque; the transient on reclosing is not in this model. The state just after each change-over is a result of its own, and a change-over at a slip above breakdown is called too early.',
+        'A reactor or resistor z in series shows y/(1 + z·y). A middle step of a closed transition counts only where its data are stated; otherwise it is taken as instantaneous. Part winding takes the stated shares of current and torque. Rotor resistance is added to each rotor phase of the circuit; its part of the slip loss falls outside the motor. A captive transformer is in series as a ratio and an impedance, before and after the start.',
+        'A soft starter passes the part k of the bus voltage without losses and with the same current on both sides, so it is an adjustable reactance in front of the motor’s resistance R_{m}; k follows the ramp and is held down where the current limit asks for it, with the network solved at that limit. Harmonics are not in it:',
+        formula(
+          String.raw`R_\mathrm{m}^2 + X^2 = \frac{\left|\underline{Z}_\mathrm{m}\right|^2}{k^2},\qquad k \le 1`,
+          'R m squared plus X squared equals the motor impedance squared over k squared, k at most one.',
+        ),
+        'Behind a drive the supply sees shaft power and losses at the drive’s own power factors, whatever the voltage; the magnetising current of the motor stays behind the converter. Losses go with the square of the motor current. The motor follows the ramp of speed as far as the limits of torque and current allow; its torque is taken as proportional to the part of the current that is not magnetising, at constant flux:',
+        formula(
+          String.raw`P = T\,\omega + P_\mathrm{loss}\left(m^2 + (1-m^2)\left(\frac{T}{T_\mathrm{r}}\right)^2\right),\qquad Q = P\tan\varphi_1`,
+          'P is torque times speed plus losses that go with the square of the current; Q is P times the tangent of the displacement angle.',
+        ),
+        'Capacitors of a start are a susceptance at the line side of the device, each by its own rated voltage. A change-over follows its speed, time, current or voltage. A gap is without current and torque; the transient on reclosing is not in this model. The state just after each change-over is a result of its own, and a change-over at a slip above breakdown is called too early.',
       ],
     },
     {
