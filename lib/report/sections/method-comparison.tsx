@@ -1,7 +1,7 @@
 import type { ReactElement } from 'react'
 import { overallVerdict } from '@/lib/engine/criteria/overall'
 import type { RuleInput } from '@/lib/engine/criteria/rule'
-import type { StarterRecord } from '@/lib/study/document/case-records'
+import type { StarterRecord } from '@/lib/study/document/starter-record'
 import { studyRunInput } from '@/lib/study/to-engine/study-run-input'
 import { listedTags } from '@/lib/study/words/list-words'
 import { starterPhrase } from '@/lib/study/words/starter-phrase'
