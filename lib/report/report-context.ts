@@ -3,6 +3,7 @@ import type { StudyVerdict } from '@/lib/engine/study-run'
 import { heading } from './paper/heading'
 import type { Paper } from './paper/paper'
 import type { ReportInput } from './report-input'
+import type { PageFormats } from './theme'
 import type { SourceList } from './values/source-list'
 import type { Wording } from './wording/en'
 
@@ -11,6 +12,7 @@ export interface ReportContext {
   paper: Paper
   input: ReportInput
   words: Wording
+  formats: PageFormats
   /** Width of the text in points. */
   width: number
   /** Verdict over the design cases. */

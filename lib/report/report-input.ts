@@ -62,6 +62,8 @@ export interface HandCheckResult {
 
 export interface ReportInput {
   document: StudyDocument
+  /** The bytes in which it was frozen and hashed, which go into the file as they are; absent: those of `document`. */
+  frozenDocument?: Uint8Array
   /** As `runDocument` computes it: its overall verdict is that of the design cases. */
   result: StudyResult
   revision: ReportRevision

@@ -1,11 +1,13 @@
 import { Document, type DocumentProps, Page } from '@react-pdf/renderer'
 import { createElement, type ReactElement } from 'react'
+import type { ExtensiblePart, OptionalPart } from '@/lib/study/document/study-document'
 import { stack } from './paper/block'
 import { heading } from './paper/heading'
 import { type ChromeWords, pageChrome } from './paper/page-chrome'
 import type { Paper } from './paper/paper'
 import { Numbering, type ReportContext } from './report-context'
 import type { ReportInput } from './report-input'
+import { addedTexts } from './sections/added-texts'
 import { assumptions } from './sections/assumptions'
 import { calculationRecord } from './sections/calculation-record'
 import { cases } from './sections/cases'
@@ -29,45 +31,48 @@ import { startCard } from './sections/start-card'
 import { diagramPages, system } from './sections/system'
 import { utilitySheet } from './sections/utility-sheet'
 import { verdictPage } from './sections/verdict-page'
-import { contentWidth, type PageFormat, portrait } from './theme'
+import { contentWidth, type PageFormat, pageFormats } from './theme'
 import { SourceList } from './values/source-list'
 import type { Wording } from './wording/en'
 
-/** Sections behind the diagram; each starts where the one before ends, those named in `fresh` on a page of their own. */
-const middle: readonly Section[] = [
-  inputData,
-  assumptions,
-  method,
-  cases,
-  results,
-  matrix,
-  plots,
-  methodComparison,
-  conclusions,
-  commissioning,
-  cautions,
+/** A part of the report in its place: what it may be left out as, and what an author's text is added to. */
+interface Part {
+  key: OptionalPart | ExtensiblePart | null
+  section: Section
+  /** Begins on a page of its own. */
+  fresh?: true
+}
+
+const opening: readonly Part[] = [
+  { key: null, section: scope },
+  { key: 'criteria', section: criteria },
+  { key: 'system', section: system },
 ]
-const appendices: readonly Section[] = [
-  handCheck,
-  fullTables,
-  utilitySheet,
-  startCard,
-  calculationRecord,
-  decisions,
-  glossary,
+
+/** Parts behind the diagram; each starts where the one before ends unless it is `fresh`. */
+const middle: readonly Part[] = [
+  { key: 'input', section: inputData, fresh: true },
+  { key: 'assumptions', section: assumptions },
+  { key: 'method', section: method, fresh: true },
+  { key: 'cases', section: cases, fresh: true },
+  { key: 'results', section: results, fresh: true },
+  { key: 'matrix', section: matrix, fresh: true },
+  { key: 'plots', section: plots, fresh: true },
+  { key: 'comparison', section: methodComparison },
+  { key: null, section: conclusions },
+  { key: 'commissioning', section: commissioning },
+  { key: 'cautions', section: cautions },
 ]
-const fresh: ReadonlySet<Section> = new Set([
-  inputData,
-  method,
-  cases,
-  results,
-  matrix,
-  plots,
-  handCheck,
-  fullTables,
-  utilitySheet,
-  startCard,
-])
+
+const appendices: readonly Part[] = [
+  { key: 'hand-check', section: handCheck, fresh: true },
+  { key: 'tables', section: fullTables, fresh: true },
+  { key: 'utility-sheet', section: utilitySheet, fresh: true },
+  { key: 'start-card', section: startCard, fresh: true },
+  { key: null, section: calculationRecord },
+  { key: null, section: decisions },
+  { key: 'glossary', section: glossary },
+]
 
 const chromeWords = ({ document, revision, draft }: ReportInput, { frame }: Wording): ChromeWords => ({
   headLeft: `${document.head.documentNumber}  ${document.head.title}`,
@@ -82,10 +87,14 @@ const chromeWords = ({ document, revision, draft }: ReportInput, { frame }: Word
  * page numbers are looked up when the laid-out pages are painted.
  */
 export const studyReport = (input: ReportInput, words: Wording, paper: Paper): ReactElement<DocumentProps> => {
+  const { texts } = input.document
+  const formats = pageFormats(texts.paper)
+  const { portrait } = formats
   const context: ReportContext = {
     paper,
     input,
     words,
+    formats,
     width: contentWidth(portrait),
     whole: input.result.overall,
     sources: new SourceList(words.records.input.noSourceMark),
@@ -93,9 +102,14 @@ export const studyReport = (input: ReportInput, words: Wording, paper: Paper): R
   }
   const front = cover(context)
   const verdict = verdictPage(context)
-  const written = (sections: readonly Section[]) =>
-    sections.map((section, i) => stack(section(context), { breakBefore: i > 0 && fresh.has(section) }))
-  const opening = written([scope, criteria, system])
+  const left: ReadonlySet<Part['key']> = new Set(texts.leftOut)
+  const written = (parts: readonly Part[]) =>
+    parts
+      .filter(({ key }) => !left.has(key))
+      .map(({ key, section, fresh }, i) =>
+        stack([...section(context), ...addedTexts(context, key)], { breakBefore: i > 0 && fresh === true }),
+      )
+  const first = written(opening)
   const diagram = diagramPages(context)
   const rest = written([...middle, ...appendices])
   const listing = contents(context, paper.headings)
@@ -115,7 +129,7 @@ export const studyReport = (input: ReportInput, words: Wording, paper: Paper): R
     page(portrait, front),
     page(portrait, verdict),
     page(portrait, [contentsHead, ...listing]),
-    page(portrait, opening),
+    page(portrait, first),
     ...diagram.map((one) => page(one.format, one.content)),
     page(portrait, rest),
   )

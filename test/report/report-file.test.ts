@@ -93,6 +93,17 @@ describe('the final report of the demo study', () => {
   })
 })
 
+test('attaches the bytes that were frozen, also where the document was brought up to date since', async () => {
+  const document = example('one-motor')
+  const frozen = new TextEncoder().encode('{"as":"frozen"}')
+  const file = await reportFile('frozen', { ...(await reportInput(document, true)), frozenDocument: frozen })
+  const folder = path.join(path.dirname(file), 'attached-frozen')
+  fs.rmSync(folder, { recursive: true, force: true })
+  fs.mkdirSync(folder)
+  pdfTool('pdfdetach', ['-saveall', '-o', folder, file])
+  expect(fs.readFileSync(path.join(folder, 'study.json'), 'utf8')).toBe('{"as":"frozen"}')
+}, 120_000)
+
 test('Greek, relations and powers print as they are', async () => {
   const document = example('one-motor')
   document.texts.recommendation = 'Ω ≤ ² Δ φ − × ½ ∠'

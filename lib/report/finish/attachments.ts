@@ -13,10 +13,10 @@ export interface Attachment {
  * The study document in its canonical bytes, whose SHA-256 is the document hash that the cover prints, and beside it the
  * results without their curves, with the hashes and the version that they belong to.
  */
-export const attachmentsOf = ({ document, result, revision }: ReportInput): readonly Attachment[] => [
+export const attachmentsOf = ({ document, frozenDocument, result, revision }: ReportInput): readonly Attachment[] => [
   {
     name: 'study.json',
-    bytes: canonicalBytes(document),
+    bytes: frozenDocument ?? canonicalBytes(document),
     description: 'Study document in canonical form (RFC 8785); its SHA-256 is printed on the cover.',
   },
   {

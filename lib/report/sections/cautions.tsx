@@ -35,8 +35,9 @@ const touched = ({ input, words }: ReportContext): readonly string[] => {
 
 /** Limitations, what the report does not contain and why, cautions and the disclaimer. */
 export const cautions: Section = (context) => {
-  const { paper, words, width } = context
+  const { paper, input, words, width } = context
   const { cautions: say } = words
+  const leftOut = input.document.texts.leftOut.map((part) => [say.missing.parts[part], say.missing.leftOut] as const)
   return [
     chapter(context, 'cautions', say.title),
     ...list(paper, say.disclaimer, { width }),
@@ -50,7 +51,7 @@ export const cautions: Section = (context) => {
         { head: say.missing.heads.part, width: 120, fixed: true },
         { head: say.missing.heads.why, width: 1 },
       ],
-      rows: say.missing.items.map(([part, why]) => [{ text: part, weight: 'semibold' as const }, why]),
+      rows: [...leftOut, ...say.missing.items].map(([part, why]) => [{ text: part, weight: 'semibold' as const }, why]),
     }),
   ]
 }

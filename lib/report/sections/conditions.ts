@@ -2,6 +2,7 @@ import { listed, listedTags } from '@/lib/study/words/list-words'
 import { starterPhrase } from '@/lib/study/words/starter-phrase'
 import type { ReportContext } from '../report-context'
 import { designMotors, designStarters } from '../values/design-records'
+import { unknownPlaceholders } from '../values/placeholders'
 import { openItems, statedValues } from '../values/stated-values'
 import { verdictRows } from '../values/verdict-rows'
 import { failingCases } from './findings'
@@ -32,6 +33,7 @@ export const conditions = (context: ReportContext): readonly string[] => {
     if (starts !== '') successive.set(starts, [...(successive.get(starts) ?? []), motor.tag])
   }
   const open = openItems(document, words).length
+  const unknown = unknownPlaceholders(document, result)
   return [
     verdict.startsClass(startsPerDay.text, startsPerHour.text),
     ...(methods === '' ? [] : [verdict.methodsHeld(methods)]),
@@ -44,5 +46,6 @@ export const conditions = (context: ReportContext): readonly string[] => {
     ...(assumed === 0 ? [] : [verdict.assumed(assumed)]),
     ...(unsourced === 0 ? [] : [verdict.noSource(unsourced)]),
     ...(open === 0 ? [] : [verdict.openData(open)]),
+    ...(unknown.length === 0 ? [] : [verdict.unknownNames(listed(unknown.map((name) => `{${name}}`)))]),
   ]
 }

@@ -7,7 +7,7 @@ import { block } from '../paper/block'
 import { sceneScale, scenesBlock } from '../paper/scene-pdf'
 import { caption, paragraph, typedText } from '../paper/text-block'
 import { chapter, type ReportContext, subsection } from '../report-context'
-import { contentHeight, contentWidth, landscape, largeLandscape, type PageFormat, small } from '../theme'
+import { contentHeight, contentWidth, type PageFormat, type PageFormats, small } from '../theme'
 import type { Section } from './section'
 
 /** Description of the system as typed. */
@@ -42,7 +42,10 @@ const fits = (scenes: readonly Scene[], format: PageFormat): boolean => {
 }
 
 /** The plant on one page where it is legible there, else on as few as its boards can be parted into. */
-const chosen = (document: StudyDocument): { format: PageFormat; scenes: readonly Scene[] } => {
+const chosen = (
+  document: StudyDocument,
+  { landscape, largeLandscape }: PageFormats,
+): { format: PageFormat; scenes: readonly Scene[] } => {
   for (const mostRows of [Number.POSITIVE_INFINITY, 30, 24, 19, 15, 12, 10]) {
     const full = singleLineSheets(document, { mostRows })
     for (const format of [landscape, largeLandscape]) if (fits(full, format)) return { format, scenes: full }
@@ -54,14 +57,14 @@ const chosen = (document: StudyDocument): { format: PageFormat; scenes: readonly
 
 /** The single-line diagram, a page a sheet. */
 export const diagramPages = (context: ReportContext): readonly DiagramPage[] => {
-  const { paper, input, words } = context
+  const { paper, input, words, formats } = context
   const { system: say } = words.records
-  const { format, scenes } = chosen(input.document)
+  const { format, scenes } = chosen(input.document, formats)
   const { width, height } = room(format)
   const title = subsection({ ...context, width }, 'diagram', say.diagram)
   const first = input.document.plant.supplies[0]
   if (!first || scenes.length === 0)
-    return [{ format: landscape, content: [title, ...paragraph(paper, say.noDiagram, { width })] }]
+    return [{ format: formats.landscape, content: [title, ...paragraph(paper, say.noDiagram, { width })] }]
   const scale = Math.min(...scenes.map((scene) => sceneScale(scene, width, height)))
   const sheet = { width: width / scale, height: height / scale }
   const sheets = [

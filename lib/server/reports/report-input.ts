@@ -1,7 +1,7 @@
 import 'server-only'
 import type { CaseResult, CaseSeries } from '@/lib/engine/case-result'
 import type { ReportDecision, ReportInput, RevisionTableRow } from '@/lib/report/report-input'
-import type { StudyDocument } from '@/lib/study/document/study-document'
+import { readFrozenStudy } from '@/lib/study/read/read-frozen-study'
 import type { Tx } from '../db'
 import { revisionState } from '../revisions/subject'
 import { unpackSeries } from '../series'
@@ -28,8 +28,8 @@ export async function reportInputOf(tx: Tx, revisionId: string, draft: boolean):
   const nameOf = (id: string | null) => people.find((person) => person.id === id)?.name ?? null
   const since = row.decisions.findLastIndex(({ move }) => move === 'send-for-check')
   return {
-    // canonical bytes of a document that was validated when it was frozen
-    document: JSON.parse(Buffer.from(row.document).toString('utf8')) as StudyDocument,
+    document: readFrozenStudy(row.document),
+    frozenDocument: row.document,
     result: await loadResult(tx, row.run),
     revision: {
       number: String(row.number),

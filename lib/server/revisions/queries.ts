@@ -4,6 +4,7 @@ import type { CaseSeries } from '@/lib/engine/case-result'
 import { DomainError } from '@/lib/errors'
 import { allowedActions, can } from '@/lib/policy/can'
 import type { StudyDocument } from '@/lib/study/document/study-document'
+import { readFrozenStudy } from '@/lib/study/read/read-frozen-study'
 import { idInput } from '../identity'
 import { query } from '../read'
 import { unpackSeries } from '../series'
@@ -64,8 +65,7 @@ export const revisionDocument = query({
   ...readable,
   run: async ({ tx }, { revisionId }): Promise<StudyDocument> => {
     const { document } = await tx.revision.findFirstOrThrow({ where: { id: revisionId }, select: { document: true } })
-    // canonical bytes of a document that was validated when it was frozen
-    return JSON.parse(Buffer.from(document).toString('utf8')) as StudyDocument
+    return readFrozenStudy(document)
   },
 })
 

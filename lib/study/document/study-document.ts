@@ -18,14 +18,50 @@ export const studyHead = z.strictObject({
   documentNumber: z.string().min(1).max(60),
 })
 
-/** Text that the engineer writes; the recommendation stays empty until typed. */
+/** Parts of the report that an author may leave out; all others always print. */
+export const optionalParts = [
+  'plots',
+  'comparison',
+  'commissioning',
+  'hand-check',
+  'tables',
+  'utility-sheet',
+  'start-card',
+  'glossary',
+] as const
+
+/** Chapters that an author may add a text to. */
+export const extensibleParts = [
+  'criteria',
+  'system',
+  'input',
+  'assumptions',
+  'method',
+  'cases',
+  'results',
+  'matrix',
+  'plots',
+  'comparison',
+  'commissioning',
+  'cautions',
+] as const
+
+const addedText = z.strictObject({
+  part: z.enum(extensibleParts),
+  text: text(4000).describe('Printed at the end of that chapter; names in braces are filled with values.'),
+})
+
+/** Text that the engineer writes, and what else the author decides about the report. */
 export const studyTexts = z.strictObject({
   purpose: text(4000),
   scope: text(4000),
   exclusions: text(4000),
   system: text(4000),
-  recommendation: text(4000),
+  recommendation: text(4000).describe('Stays empty until typed; the tool has none of its own.'),
   conclusions: text(4000),
+  paper: z.enum(['A4', 'Letter']).default('A4').describe('Size of the report’s pages.'),
+  leftOut: z.array(z.enum(optionalParts)).max(optionalParts.length).default([]).describe('Parts that do not print.'),
+  added: z.array(addedText).max(40).default([]).describe('Texts of the author in chapters of the tool.'),
 })
 
 /** Settings of the calculation, each with its default stated in the report. */
@@ -75,6 +111,8 @@ export const studyDocument = z.strictObject({
 export type StudyDocument = z.infer<typeof studyDocument>
 export type StudyHead = z.infer<typeof studyHead>
 export type StudyTexts = z.infer<typeof studyTexts>
+export type OptionalPart = (typeof optionalParts)[number]
+export type ExtensiblePart = (typeof extensibleParts)[number]
 export type StudySettings = z.infer<typeof studySettings>
 export type PlantRecords = z.infer<typeof plantRecords>
 /** As written by hand: plain texts where values are meant. */

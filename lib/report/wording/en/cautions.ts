@@ -1,3 +1,5 @@
+import type { OptionalPart } from '@/lib/study/document/study-document'
+
 /** Limitations, cautions, what is missing and the glossary. */
 export const cautions = {
   title: 'Limitations and cautions',
@@ -39,6 +41,17 @@ export const cautions = {
       ['Protection overlay', 'No protection curve is part of the records.'],
       ['Starter failed or bypassed', 'Covered only where a compared case starts the motor direct-on-line.'],
     ] as readonly (readonly [string, string])[],
+    leftOut: 'Left out by the author of this revision.',
+    parts: {
+      plots: 'Plots',
+      comparison: 'Comparison of starting methods',
+      commissioning: 'Measurements that would validate the model',
+      'hand-check': 'Hand check',
+      tables: 'Full tables',
+      'utility-sheet': 'Data sheet for the utility',
+      'start-card': 'Start-count card',
+      glossary: 'Glossary',
+    } satisfies Record<OptionalPart, string>,
     heads: { part: 'Part', why: 'Why it is missing' },
   },
   glossary: {

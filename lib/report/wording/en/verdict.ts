@@ -58,6 +58,7 @@ export const verdict = {
       ...(hot === null ? [] : [`${hot} from hot`]),
       ...(hour === null ? [] : [`at most ${hour} an hour`]),
     ].join(', '),
+  unknownNames: (names: string) => `Texts of the author name values that this study does not have: ${names}.`,
   mustExclude: (tags: string) =>
     `The departures ${tags} fail a limit in use. They must be excluded by the plant or by the order, or accepted by whoever owns the limit.`,
   hangs: (tags: string) =>
