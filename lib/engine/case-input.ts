@@ -76,7 +76,7 @@ export interface InductionCircuit {
   cages: readonly { resistance: Ohm; reactance: Ohm }[]
 }
 
-/** Torque of a driven load at the motor shaft against speed; it opposes motion only. */
+/** Torque of a driven load at the motor shaft against speed; it opposes motion only, unless it is active. */
 export type LoadCurve =
   | {
       kind: 'power'
@@ -89,7 +89,26 @@ export type LoadCurve =
       /** Straight line from this torque at standstill to the curve at `until`; null where there is none. */
       breakaway: { torque: NewtonMetre; until: RadianPerSecond } | null
     }
-  | { kind: 'points'; speeds: readonly RadianPerSecond[]; torques: readonly NewtonMetre[] }
+  | {
+      kind: 'points'
+      speeds: readonly RadianPerSecond[]
+      torques: readonly NewtonMetre[]
+      /** May drive the shaft (inclined conveyor, back-spinning pump): torques hold with their sign, also at speeds below zero. */
+      active?: boolean
+    }
+  | {
+      /** Pump against a static head: as if closed up to where the check valve opens, from there by points. */
+      kind: 'check-valve'
+      /** Torque at zero speed of the closed curve, and at rated speed with the valve shut. */
+      friction: NewtonMetre
+      shut: NewtonMetre
+      ratedSpeed: RadianPerSecond
+      breakaway: { torque: NewtonMetre; until: RadianPerSecond } | null
+      opensAt: RadianPerSecond
+      /** Above `opensAt`, rising; straight lines from the closed curve on. */
+      speeds: readonly RadianPerSecond[]
+      torques: readonly NewtonMetre[]
+    }
 
 export type Starter =
   | { kind: 'direct' }
@@ -131,12 +150,16 @@ export interface MotorInput {
   torqueFactor: PerUnit
   /** Motor plus everything it turns, at the motor shaft. */
   inertia: KilogramSquareMetre
+  /** Motors with the same name here turn one shaft; each brings its own inertia and load. */
+  shaft?: string
   duty:
     | { kind: 'running'; load: LoadCurve }
     | {
         kind: 'starting'
         at: Second
         starter: Starter
+        /** Speed that the load gives the shaft before the start, negative when it turns backwards; 0 where left out. */
+        initialSpeed?: RadianPerSecond
         /** Capacitors switched with this start. */
         capacitors?: readonly StartCapacitor[]
         /** What the starting device may be asked for; left out where nothing is known. */

@@ -21,7 +21,7 @@ export const quantityRange: Record<QuantityName, QuantityRange> = {
   ratio: { sign: 'any', least: 1e-9, most: 1e4 },
   number: { sign: 'any', least: 1e-9, most: 1e9 },
   frequency: { sign: 'positive', least: 1, most: 1e3 },
-  speed: { sign: 'zero-or-positive', least: 1e-3, most: 1e4 },
+  speed: { sign: 'any', least: 1e-3, most: 1e4 },
   torque: { sign: 'any', least: 1e-3, most: 1e8 },
   inertia: { sign: 'zero-or-positive', least: 1e-6, most: 1e7 },
   time: { sign: 'zero-or-positive', least: 1e-6, most: 1e8 },

@@ -1,7 +1,9 @@
+import { loadSegments, loadTorqueAt } from '../engine/driven/load-segments'
 import type { FieldIssue } from '../errors'
 import { assumptions } from './assumptions'
 import type { StudyDocument } from './document/study-document'
 import { fieldPlace } from './field-place'
+import { loadCurveInput } from './to-engine/load-curve-input'
 
 /** A question that reviewers always ask, with what there is to say to it; passed when there is nothing. */
 export interface PreIssueCheck {
@@ -71,9 +73,7 @@ const powerFactorMissing: Finder = ({ plant }) =>
 const noBreakaway: Finder = ({ plant }) =>
   plant.drivenLoads.flatMap(({ tag, curves }, i) =>
     curves.flatMap((curve, j) => {
-      const atStandstill =
-        curve.kind === 'power' ? (curve.breakaway?.torque.si ?? curve.constant.si) : (curve.points[0]?.torque.si ?? 0)
-      return atStandstill > 0
+      return loadTorqueAt(loadSegments(loadCurveInput(curve)), 0) > 0
         ? []
         : [
             issue(

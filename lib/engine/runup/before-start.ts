@@ -70,6 +70,10 @@ function connectRunning(system: System): void {
     system.move(i, running ? direct : null, 0)
     system.resting[i] = running ? 0 : 1
   })
+  // A motor that is not yet on turns with the others of its shaft.
+  for (const mates of system.plant.mates) {
+    if (mates.some((m) => !system.resting[m])) for (const m of mates) system.resting[m] = 0
+  }
 }
 
 /** Load flow with the supply's bus at its stated voltage; the EMF follows from the current through the source. */

@@ -121,6 +121,9 @@ function motorProblem(motor: MotorInput, input: CaseInput): string | null {
   if (!notNegative(at)) return 'the start cannot lie before zero.'
   const device = starterProblem(starter, motor.circuit) ?? capacitorsProblem(capacitors ?? [])
   if (device !== null) return device
+  const { initialSpeed } = motor.duty
+  if (initialSpeed !== undefined && !(Math.abs(initialSpeed) < (8 * Math.PI * input.frequency) / motor.poles))
+    return 'the speed before the start must lie below twice synchronous speed.'
   return curveProblem(load) ?? (processLoad === null ? null : curveProblem(processLoad))
 }
 
@@ -138,16 +141,32 @@ function curveProblem(curve: LoadCurve): string | null {
   if (curve.kind === 'points') {
     if (curve.speeds.length < 1 || curve.speeds.length !== curve.torques.length)
       return 'the load curve needs a torque for each speed.'
-    if (!curve.torques.every(notNegative) || !curve.speeds.every(notNegative))
+    if (curve.active === true && !(curve.torques.every(Number.isFinite) && curve.speeds.every(Number.isFinite)))
+      return 'the active load needs a torque for each speed.'
+    if (curve.active !== true && !(curve.torques.every(notNegative) && curve.speeds.every(notNegative)))
       return 'the load curve needs speeds and torques of zero or more.'
     const rising = curve.speeds.every((speed, index) => index === 0 || speed > curve.speeds[index - 1]!)
     return rising ? null : 'the speeds of the load curve must rise.'
   }
+  if (curve.kind === 'check-valve') return checkValveProblem(curve)
   if (!notNegative(curve.constant) || !notNegative(curve.atRated)) return 'the load needs torques of zero or more.'
-  if (!positive(curve.ratedSpeed) || !notNegative(curve.exponent))
+  // A falling power (constant power: −1) has no value at standstill, where the breakaway line stands in.
+  const falling = Number.isFinite(curve.exponent) && curve.exponent < 0 && curve.breakaway !== null
+  if (!positive(curve.ratedSpeed) || !(notNegative(curve.exponent) || falling))
     return 'the load curve needs a rated speed above zero and an exponent of zero or more.'
   if (curve.breakaway !== null && (!notNegative(curve.breakaway.torque) || !positive(curve.breakaway.until))) {
     return 'the breakaway line needs a torque of zero or more and a speed above zero.'
   }
   return null
+}
+
+function checkValveProblem(curve: Extract<LoadCurve, { kind: 'check-valve' }>): string | null {
+  const { friction, shut, ratedSpeed, breakaway, opensAt, speeds, torques } = curve
+  if (![friction, shut, ...torques].every(notNegative)) return 'the load needs torques of zero or more.'
+  if (!positive(ratedSpeed) || !positive(opensAt)) return 'the pump needs speeds above zero.'
+  if (speeds.length < 1 || speeds.length !== torques.length) return 'the pump needs a torque for each speed.'
+  if (breakaway !== null && !(notNegative(breakaway.torque) && positive(breakaway.until) && breakaway.until < opensAt))
+    return 'the breakaway line must end below the speed at which the check valve opens.'
+  const rising = [opensAt, ...speeds].every((speed, i, all) => i === 0 || speed > all[i - 1]!)
+  return rising ? null : 'the speeds of the pump above the opening of its check valve must rise.'
 }

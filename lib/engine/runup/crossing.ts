@@ -12,6 +12,8 @@ export type CrossingKind =
   | 'corner-up'
   | 'corner-down'
   | 'halt'
+  /** A passive load that turned backwards comes to zero speed. */
+  | 'stand'
   | 'at-95'
   | 'criterion'
   | 'change-over'
@@ -58,7 +60,8 @@ function candidates(system: System, courses: Courses, { state, time }: Integrato
     const { corners } = system.driven[i]!
     const piece = system.piece[i]!
     const speed = state[i]!
-    if (speed < 0) note(i, 'halt', 0)
+    if (speed < 0 && piece >= 0 && !system.driven[i]!.active) note(i, 'halt', 0)
+    if (speed > 0 && piece < 0) note(i, 'stand', 0)
     if (piece < corners.length && speed > corners[piece]!) note(i, 'corner-up', corners[piece]!)
     if (piece > 0 && speed < corners[piece - 1]!) note(i, 'corner-down', corners[piece - 1]!)
   }

@@ -29,8 +29,10 @@ export function runningEquilibrium(
 ): EquilibriumOutcome {
   const { synchronous } = system.plant
   // A drive sets the speed of its motor by itself.
-  const free = moving.filter((i) => system.connection.code[i] !== codes.drive)
-  for (const i of free) speeds[i] = synchronous[i]!
+  const isFirst = (i: number): boolean => system.plant.mates[i]!.find((m) => moving.includes(m)) === i
+  const shafts = moving.filter(isFirst)
+  const free = shafts.filter((i) => system.connection.code[i] !== codes.drive)
+  for (const i of free) setSpeed(system, speeds, i, synchronous[i]!)
   let lacking = -1
   let lackingFor = 0
   for (let round = 0; round < maxRounds; round++) {
@@ -42,14 +44,14 @@ export function runningEquilibrium(
       if (slip === null) without = i
       const speed = slip === null ? system.plant.breakdownSpeed[i]! : synchronous[i]! * (1 - slip)
       change = Math.max(change, Math.abs(speed - speeds[i]!) / synchronous[i]!)
-      speeds[i] = speed
+      setSpeed(system, speeds, i, speed)
     }
     lackingFor = without >= 0 && without === lacking ? lackingFor + 1 : 0
     lacking = without
     if (lackingFor >= 3) return { kind: 'no-equilibrium', motor: lacking }
     if (without < 0 && change < 1e-4) {
       const kept = Float64Array.from(speeds)
-      if (balanceNear(system, moving, speeds)) return { kind: 'found' }
+      if (balanceNear(system, shafts, speeds)) return { kind: 'found' }
       speeds.set(kept)
       if (change < 1e-12) return { kind: 'found' }
     }
@@ -57,17 +59,26 @@ export function runningEquilibrium(
   return lacking >= 0 ? { kind: 'no-equilibrium', motor: lacking } : { kind: 'found' }
 }
 
+/** Sets the speed of a shaft in the entries of all its motors. */
+function setSpeed(system: System, speeds: Float64Array, i: number, speed: number): void {
+  for (const m of system.plant.mates[i]!) speeds[m] = speed
+}
+
 /** Slip between 0 and breakdown at which a motor carries its load at its present bus voltage; null where its torque does not suffice. */
 function runningSlip(system: System, i: number): number | null {
-  const { machines, synchronous, torqueFactor, breakdownSpeed } = system.plant
-  const load = system.driven[i]!
-  const perPower = (torqueFactor[i]! * system.busSquare[i]!) / synchronous[i]!
+  const { machines, synchronous, torqueFactor, breakdownSpeed, mates } = system.plant
   const surplus = (slip: number): number => {
-    evaluateMachine(machines, i, slip)
-    evaluateConnection(system.connection, machines, i, system.busSquare[i]!)
-    return (
-      perPower * machines.airgap[i]! * system.connection.winding[i]! - loadTorqueAt(load, synchronous[i]! * (1 - slip))
-    )
+    const speed = synchronous[i]! * (1 - slip)
+    let left = 0
+    for (const m of mates[i]!) {
+      left -= loadTorqueAt(system.driven[m]!, speed)
+      if (system.connection.code[m] === 0) continue
+      evaluateMachine(machines, m, 1 - speed / synchronous[m]!)
+      evaluateConnection(system.connection, machines, m, system.busSquare[m]!)
+      const perPower = (torqueFactor[m]! * system.busSquare[m]!) / synchronous[m]!
+      left += perPower * machines.airgap[m]! * system.connection.winding[m]!
+    }
+    return left
   }
   const largest = 1 - breakdownSpeed[i]! / synchronous[i]!
   const [idle, most] = [surplus(0), surplus(largest)]
@@ -100,9 +111,9 @@ export function balanceNear(system: System, moving: readonly number[], speeds: F
       const i = moving[column]!
       const kept = speeds[i]!
       const nudge = 1e-7 * synchronous[i]!
-      speeds[i] = kept - nudge
+      setSpeed(system, speeds, i, kept - nudge)
       if (!imbalance(step)) return false
-      speeds[i] = kept
+      setSpeed(system, speeds, i, kept)
       for (let row = 0; row < m; row++) jacobian[row * m + column] = (excess[row]! - step[row]!) / 1e-7
     }
     for (let row = 0; row < m; row++) step[row] = -excess[row]!
@@ -111,7 +122,7 @@ export function balanceNear(system: System, moving: readonly number[], speeds: F
     moving.forEach((i, row) => {
       // A step past a tenth of synchronous speed leaves the neighbourhood the method is good for.
       const limited = Math.max(-0.1, Math.min(0.1, step[row]!))
-      speeds[i] = speeds[i]! + limited * synchronous[i]!
+      setSpeed(system, speeds, i, speeds[i]! + limited * synchronous[i]!)
       change = Math.max(change, Math.abs(limited))
     })
     if (!Number.isFinite(change)) return false
@@ -126,11 +137,11 @@ export function isStable(system: System, moving: readonly number[], speeds: Floa
   for (const i of moving) {
     const kept = speeds[i]!
     const nudge = 1e-5 * system.plant.synchronous[i]!
-    speeds[i] = kept - nudge
+    setSpeed(system, speeds, i, kept - nudge)
     const below = system.solveAt(speeds) ? system.balance(i, speeds[i]!) : -1
-    speeds[i] = kept + nudge
+    setSpeed(system, speeds, i, kept + nudge)
     const above = system.solveAt(speeds) ? system.balance(i, speeds[i]!) : 1
-    speeds[i] = kept
+    setSpeed(system, speeds, i, kept)
     if (!(below > above)) return false
   }
   return true

@@ -39,9 +39,11 @@ export function findHang(system: System, open: readonly StartCourse[], state: Fl
   return speeds
 }
 
-/** Connected motors whose shafts turn. */
+/** Shafts that turn with a connected motor, each by its first motor. */
 export const turningMotors = (system: System): number[] =>
-  system.plant.motors.flatMap((_, i) => (system.connection.code[i] !== 0 && !system.resting[i] ? [i] : []))
+  system.plant.mates.flatMap((mates, i) =>
+    mates[0] === i && mates.some((m) => system.connection.code[m] !== 0) && !system.resting[i] ? [i] : [],
+  )
 
 /** The outcome of a start that hangs at the given speeds. */
 export function hangOutcome(system: System, start: StartCourse, speeds: Float64Array): StartOutcome {

@@ -44,7 +44,7 @@ export function createObserver(system: System): (state: Float64Array, into: Floa
       into[at] = state[i]!
       into[at + 1] = system.torque[i]!
       into[at + 2] = load
-      into[at + 3] = system.torque[i]! - load
+      into[at + 3] = plant.mates[i]!.length > 1 ? system.balance(i, state[i]!) : system.torque[i]! - load
       into[at + 4] = Math.sqrt(system.lineSquare[i]!)
       into[at + 5] = Math.sqrt(system.currentSquare[i]!)
       into[at + 6] = Math.sqrt(square) * connection.terminal[i]!

@@ -29,6 +29,8 @@ export interface Plant {
   ratedTorque: Float64Array
   /** Speed of the first torque maximum at constant terminal voltage, rad/s. */
   breakdownSpeed: Float64Array
+  /** Motors on the shaft of each, itself among them, in the order of the input. */
+  mates: readonly (readonly number[])[]
   /** Curve before and during the start. */
   driven: readonly LoadSegments[]
   /** Curve once the process is on. */
@@ -72,6 +74,9 @@ export function preparePlant(input: CaseInput): Setup<Plant> {
       torqueFactor: Float64Array.from(motors, (motor) => motor.torqueFactor),
       ratedTorque: Float64Array.from(motors, (motor) => motor.ratedTorque),
       breakdownSpeed: Float64Array.from(motors, (motor, i) => synchronous[i]! * (1 - breakdownSlip(motor.circuit))),
+      mates: motors.map((motor, i) =>
+        motor.shaft === undefined ? [i] : [...motors.keys()].filter((m) => motors[m]!.shaft === motor.shaft),
+      ),
       driven: motors.map((motor) => loadSegments(motor.duty.load)),
       process: motors.map((motor) => loadSegments(processCurve(motor))),
     },

@@ -50,6 +50,8 @@ const settledTorque = 1e-5
 const hangingTorque = 4e-3
 /** No run of a plant needs so many steps; a caller is not kept waiting for one that does. */
 const mostSteps = 400_000
+/** Speed in parts of synchronous at which a run ends: the load has run away. */
+const farthest = 3
 const nobody: ReadonlySet<number> = new Set()
 
 /**
@@ -64,6 +66,10 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const { starts } = courses
   const { timeLimit, tolerance } = plant.input.settings
   const state = Float64Array.from(before.speeds)
+  for (const { motor } of starts) {
+    const { duty } = plant.motors[motor]!
+    if (duty.kind === 'starting' && system.resting[motor]) state[motor] = duty.initialSpeed ?? 0
+  }
   const integrator = createIntegrator(state, system.derivative, stepScale(system, tolerance), longest)
   const recorder = createRecorder(system, courses, integrator)
   const { now } = recorder
@@ -79,16 +85,21 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   const collapsed = (t: number): RunRecord => result({ kind: 'collapsed', at: t, busId: weakestBus(system) })
 
-  const held = (i: number): boolean => system.resting[i] === 1 && system.connection.code[i] !== 0
+  const held = (i: number): boolean =>
+    system.resting[i] === 1 && plant.mates[i]!.some((m) => system.connection.code[m] !== 0)
+  /** Shafts that nothing holds at rest: active loads, and those that turn already. */
+  const unheld = (i: number): boolean => system.driven[i]!.active || state[i] !== 0
 
   /** Lets go every resting shaft whose torque exceeds what holds it, but those that have just halted; after `solveAt`. */
   function release(halted: ReadonlySet<number>): void {
     for (let i = 0; i < plant.motors.length; i++) {
-      if (!held(i) || halted.has(i) || system.balance(i, 0) <= 0) continue
-      system.resting[i] = 0
-      system.piece[i] = 0
-      const start = starts.find((each) => each.motor === i)
-      if (start) start.turned = true
+      if (!held(i) || halted.has(i) || (!unheld(i) && system.balance(i, 0) <= 0)) continue
+      for (const m of plant.mates[i]!) {
+        system.resting[m] = 0
+        system.piece[m] = pieceAt(system.driven[m]!, state[m]!)
+        const start = starts.find((each) => each.motor === m)
+        if (start) start.turned = true
+      }
     }
   }
 
@@ -142,16 +153,20 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   /** Acts on crossings at the present instant: the starts that changed over and the shafts that halted. */
-  function act(crossings: readonly Crossing[], t: number): { moved: Move[]; halted: Set<number> } {
+  function act(crossings: readonly Crossing[], t: number): { moved: Move[]; halted: Set<number>; stood: boolean } {
     const moved: Move[] = []
     const halted = new Set<number>()
+    let stood = false
     for (const { motor, kind, capacitor } of crossings) {
       if (kind === 'corner-up') system.piece[motor] = system.piece[motor]! + 1
       if (kind === 'corner-down') system.piece[motor] = system.piece[motor]! - 1
-      if (kind === 'halt') {
-        system.resting[motor] = 1
-        system.piece[motor] = 0
-        halted.add(motor)
+      if (kind === 'halt' || kind === 'stand') {
+        for (const m of plant.mates[motor]!) {
+          system.resting[m] = 1
+          system.piece[m] = 0
+          if (kind === 'halt') halted.add(m)
+        }
+        if (kind === 'stand') stood = true
       }
       const running = courses.running.find((each) => each.motor === motor)
       if (running && kind === 'pull-out') running.pulledOutAt = t
@@ -172,7 +187,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       if (start && kind === 'capacitor') moved.push(switchCapacitor(system, start, capacitor))
       if (start && kind === 'undervoltage') moved.push(tripDrive(system, start, state[motor]!, t))
     }
-    return { moved, halted }
+    return { moved, halted, stood }
   }
 
   /** Instant in the last step at which a resting shaft is let go, or null. */
@@ -244,6 +259,10 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     return integrator.restart(until, 0) && recorder.begin(until)
   }
 
+  /** An active load that the motor cannot hold drives its shaft beyond any speed that its curve means. */
+  const runsAway = (): boolean =>
+    plant.driven.some((load, i) => load.active && Math.abs(state[i]!) > farthest * plant.synchronous[i]!)
+
   system.piece.set(plant.driven.map((load, i) => pieceAt(load, state[i]!)))
   if (!recorder.begin(0)) return collapsed(0)
   if (starts.length === 0) return result({ kind: 'settled', at: 0 })
@@ -255,7 +274,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   for (;;) {
     const from = integrator.time
-    if (from >= horizon || integrator.counters.steps > mostSteps) return result({ kind: 'horizon', at: from })
+    if (from >= horizon || integrator.counters.steps > mostSteps || runsAway())
+      return result({ kind: 'horizon', at: from })
     const until = nextInstant(starts, from, timeLimit, horizon)
     let crossings: Crossing[] = []
     let letGo = false
@@ -271,16 +291,17 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       if (released !== null && letGo) integrator.cutAt(released)
       else if (crossings.length > 0) integrator.cutAt(crossed)
       // The crossed speed itself, so that a shaft that halts stands still exactly.
-      for (const { motor, speed } of crossings) if (speed !== null) state[motor] = speed
+      for (const { motor, speed } of crossings)
+        if (speed !== null) for (const m of plant.mates[motor]!) state[m] = speed
       if (!recorder.follow(!letGo && crossings.length === 0)) return collapsed(integrator.time)
     }
     const t = integrator.time
     for (const start of starts) noteHeat(start, state[system.integral[start.motor]!]!)
-    const { moved, halted } = act(crossings, t)
+    const { moved, halted, stood } = act(crossings, t)
     moved.push(...switchDue(system, starts, t))
     judgeStarted()
     giveUp(t)
-    if (moved.length > 0 || halted.size > 0 || letGo) {
+    if (moved.length > 0 || halted.size > 0 || letGo || stood) {
       if (!afterSwitching(t, moved, halted)) return collapsed(t)
       judgeStarted()
     } else if (starts.some((start) => Math.abs(rampEnd(start) - t) < sameInstant)) {

@@ -38,7 +38,7 @@ export interface System {
   solveAt(speeds: Float64Array): boolean
   /** Right-hand side of the run-up. State: speed of every motor, then the integrals. */
   derivative(t: number, state: Float64Array, rate: Float64Array): boolean
-  /** Torque left for acceleration after `solveAt`, with the piece looked up by speed; at standstill against the breakaway torque. */
+  /** Torque left for acceleration of the shaft after `solveAt`, with the piece looked up by speed; at standstill against the breakaway torque. */
   balance(motor: number, speed: number): number
 }
 
@@ -182,6 +182,20 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     return true
   }
 
+  const shared = plant.mates.filter((mates, i) => mates.length > 1 && mates[0] === i)
+
+  /** One acceleration for the motors of a shaft: all torques over all inertias. */
+  function couple(rate: Float64Array): void {
+    for (const mates of shared) {
+      let [left, mass] = [0, 0]
+      for (const m of mates) {
+        left += rate[m]! * inertia[m]!
+        mass += inertia[m]!
+      }
+      for (const m of mates) rate[m] = left / mass
+    }
+  }
+
   const system: System = {
     plant,
     network,
@@ -223,9 +237,14 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
         rate[at] = currentSquare[i]!
         rate[at + 1] = slipLoss[i]!
       }
+      if (shared.length > 0) couple(rate)
       return true
     },
-    balance: (motor, speed) => torque[motor]! - loadTorqueAt(system.driven[motor]!, speed),
+    balance(motor, speed) {
+      let left = 0
+      for (const m of plant.mates[motor]!) left += torque[m]! - loadTorqueAt(system.driven[m]!, speed)
+      return left
+    },
   }
   return system
 }

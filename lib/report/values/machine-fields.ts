@@ -1,6 +1,8 @@
 import { formatNumber } from '@/lib/quantity/format-number'
-import type { DrivenLoadRecord, LoadCurveRecord, MotorRecord } from '@/lib/study/document/machine-records'
+import type { DrivenLoadRecord, LoadCurveRecord } from '@/lib/study/document/driven-load-record'
+import type { MotorRecord } from '@/lib/study/document/machine-records'
 import type { StudyDocument } from '@/lib/study/document/study-document'
+import { sampledFormula } from '@/lib/study/to-engine/load-curve-input'
 import { busTag, motorTag } from '@/lib/study/words/tags'
 import type { Wording } from '../wording/en'
 import { type FieldValue, ofEntered, ofWords, type RecordField } from './record-field'
@@ -70,12 +72,46 @@ export const circuitFields = (words: Words): readonly RecordField<MotorRecord>[]
 const curveText = (curve: LoadCurveRecord, words: Words): FieldValue => {
   if (curve.kind === 'points') {
     const points = curve.points.map(({ speed, torque }) => words.values.point(speed.text, torque.text)).join('; ')
-    return { text: words.values.points(points), provenance: curve.points[0]?.torque.provenance ?? null }
+    const text = words.values.points(points) + (curve.active ? words.values.active : '')
+    return { text, provenance: curve.points[0]?.torque.provenance ?? null }
   }
-  const { constant, atRated, ratedSpeed, exponent, breakaway } = curve
-  const rise = words.values.powerCurve(constant.text, atRated.text, ratedSpeed.text, exponent.text)
-  const start = breakaway ? words.values.breakaway(breakaway.torque.text, breakaway.until.text) : ''
-  return { text: rise + start, provenance: atRated.provenance }
+  const { values } = words
+  const start = 'breakaway' in curve && curve.breakaway ? curve.breakaway : null
+  const from = start ? values.breakaway(start.torque.text, start.until.text) : ''
+  switch (curve.kind) {
+    case 'power': {
+      const { constant, atRated, ratedSpeed, exponent } = curve
+      const rise = values.powerCurve(constant.text, atRated.text, ratedSpeed.text, exponent.text)
+      return { text: rise + from, provenance: atRated.provenance }
+    }
+    case 'pump-closed': {
+      const { friction, shut, ratedSpeed } = curve
+      return { text: values.shutPump(friction.text, shut.text, ratedSpeed.text) + from, provenance: shut.provenance }
+    }
+    case 'pump-open': {
+      const { friction, shut, ratedSpeed, staticHead, shutHead, points } = curve
+      const list = points.map(({ speed, torque }) => values.point(speed.text, torque.text)).join('; ')
+      const opening = values.checkValve(staticHead.text, shutHead.text, list)
+      const closed = values.shutPump(friction.text, shut.text, ratedSpeed.text)
+      return { text: closed + from + opening, provenance: shut.provenance }
+    }
+    case 'constant-power': {
+      const { power, from: lowest, standstill } = curve
+      return {
+        text: values.constantPower(power.text, lowest.text, standstill?.text ?? null),
+        provenance: power.provenance,
+      }
+    }
+    case 'formula': {
+      const sampled = sampledFormula(curve)
+      const points = sampled?.at.length ?? 0
+      const departure = ((sampled?.departure ?? 0) * 100).toPrecision(1)
+      return {
+        text: values.formula(curve.formula, curve.ratedSpeed.text, curve.upTo.text, points, departure),
+        provenance: curve.ratedSpeed.provenance,
+      }
+    }
+  }
 }
 
 /** Driven loads differ in their parts and curves, so that each has a list of its own. */
@@ -92,6 +128,26 @@ export const drivenLoadFields = (
       of: (one) => ofEntered(one.inertias[i]?.inertia ?? null),
     }),
   ),
+  ...record.inertiaConstants.map(
+    ({ part }, i): RecordField<DrivenLoadRecord> => ({
+      label: words.part(part, null),
+      of: (one) => {
+        const item = one.inertiaConstants[i]
+        if (!item) return null
+        const { constant, power } = item
+        return { text: words.values.inertiaConstant(constant.text, power.text), provenance: constant.provenance }
+      },
+    }),
+  ),
+  {
+    label: words.gear,
+    of: ({ gear }) =>
+      gear && {
+        text: words.values.gear(gear.speedRatio.text, gear.efficiency?.text ?? null),
+        provenance: gear.speedRatio.provenance,
+      },
+  },
+  { label: words.shaft, of: (one) => ofWords(one.shaft) },
   ...record.curves.map(
     ({ name }, i): RecordField<DrivenLoadRecord> => ({
       label: words.curve(name),

@@ -1,6 +1,7 @@
 import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord } from './case-records'
+import { drivenLoadRecord } from './driven-load-record'
 import { limitRecord } from './limit-record'
-import { drivenLoadRecord, motorRecord } from './machine-records'
+import { motorRecord } from './machine-records'
 import { busRecord, capacitorRecord, lineRecord, loadRecord, supplyRecord, transformerRecord } from './network-records'
 import { starterRecord } from './starter-record'
 

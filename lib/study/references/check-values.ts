@@ -2,8 +2,9 @@ import type { FieldIssue } from '../../errors'
 import { hertz } from '../../units/si'
 import { synchronousSpeed, toRpm } from '../../units/speed'
 import type { Entered } from '../document/entered'
-import type { LoadCurveRecord, MotorRecord } from '../document/machine-records'
+import type { MotorRecord } from '../document/machine-records'
 import type { StudyDocument } from '../document/study-document'
+import { checkDrivenLoads } from './check-driven-loads'
 import { checkStarters } from './check-starters'
 import { unless } from './issue'
 
@@ -107,28 +108,6 @@ const motor = (record: MotorRecord, path: Path, frequency: number): FieldIssue[]
   ]
 }
 
-const curve = (record: LoadCurveRecord, path: Path, tag: string): FieldIssue[] =>
-  record.kind === 'power'
-    ? [
-        ...above(record.ratedSpeed, 0, [...path, 'ratedSpeed'], `The speed of a curve of ${tag}`),
-        ...notBelow(record.exponent, 0, [...path, 'exponent'], `The exponent of a curve of ${tag}`),
-        ...above(
-          record.breakaway?.until ?? null,
-          0,
-          [...path, 'breakaway', 'until'],
-          `The end of the breakaway line of ${tag}`,
-        ),
-      ]
-    : record.points.flatMap(({ speed }, k) =>
-        unless(
-          k === 0 ? speed.si === 0 : speed.si > (record.points[k - 1]?.speed.si ?? 0),
-          [...path, 'points', k, 'speed'],
-          k === 0
-            ? `The first point of a curve of ${tag} stands at 0 r/min; add it.`
-            : `The points of a curve of ${tag} must stand at rising speeds.`,
-        ),
-      )
-
 const cases = ({ cases }: StudyDocument): FieldIssue[] =>
   cases.flatMap(({ changes, tag }, i) =>
     changes.flatMap((change, k) => {
@@ -153,9 +132,7 @@ export const checkValues = (document: StudyDocument): FieldIssue[] => [
   ...supplies(document),
   ...branches(document),
   ...document.plant.motors.flatMap((record, i) => motor(record, ['plant', 'motors', i], document.frequency.si)),
-  ...document.plant.drivenLoads.flatMap(({ curves, tag }, i) =>
-    curves.flatMap((record, k) => curve(record, ['plant', 'drivenLoads', i, 'curves', k], tag)),
-  ),
+  ...checkDrivenLoads(document),
   ...checkStarters(document),
   ...cases(document),
   ...settings(document),

@@ -1,4 +1,4 @@
-import type { DrivenLoadRecord, LoadCurveRecord } from '../document/machine-records'
+import type { DrivenLoadRecord, LoadCurveRecord } from '../document/driven-load-record'
 import type { StudyDocument } from '../document/study-document'
 
 interface Identified {

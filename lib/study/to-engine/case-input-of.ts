@@ -23,7 +23,10 @@ type Duties = readonly { motorId: string; duty: MotorInput['duty'] }[]
 const runningDuties = (record: CaseRecord, index: RecordIndex): Duties =>
   found(index.plantConditions.get(record.plantCondition), record.id).running.map(({ motor, curve }) => ({
     motorId: motor,
-    duty: { kind: 'running', load: loadCurveInput(found(curveOf(index, motor, curve), record.id)) },
+    duty: {
+      kind: 'running',
+      load: loadCurveInput(found(curveOf(index, motor, curve), record.id), index.loadOfMotor.get(motor)?.gear),
+    },
   }))
 
 const startingDuties = ({ settings, frequency }: StudyDocument, record: CaseRecord, index: RecordIndex): Duties => {
@@ -35,7 +38,8 @@ const startingDuties = ({ settings, frequency }: StudyDocument, record: CaseReco
     )
     const device = found(index.starters.get(starter), record.id)
     const starterDuty = starterDutyInput(device, settings.startsPerHour.si)
-    const curve = (id: string) => loadCurveInput(found(curveOf(index, motor, id), record.id))
+    const gear = index.loadOfMotor.get(motor)?.gear
+    const curve = (id: string) => loadCurveInput(found(curveOf(index, motor, id), record.id), gear)
     return {
       motorId: motor,
       duty: {

@@ -121,6 +121,8 @@ export const fields = {
     'capacitors.on.at': 'Capacitors in at',
     'capacitors.off.at': 'Capacitors out at',
   },
+  gear: 'Gear',
+  shaft: 'Shared shaft',
   dutyStarts: 'Duty, starts an hour',
   running: 'Motors running before the start',
   capacitors: 'Capacitors in service',
@@ -168,6 +170,18 @@ export const fields = {
       `${constant} rising to ${rated} at ${speed} with exponent ${exponent}`,
     breakaway: (torque: string, until: string) => `, from ${torque} at standstill straight to the curve at ${until}`,
     points: (points: string) => `straight lines through ${points}`,
+    active: ', drives the shaft where its torque is negative',
+    shutPump: (friction: string, shut: string, speed: string) =>
+      `valve shut: ${friction} rising to ${shut} at ${speed} with the square of speed`,
+    checkValve: (statics: string, shut: string, points: string) =>
+      `; check valve opens against ${statics} of ${shut} shut, then straight lines through ${points}`,
+    constantPower: (power: string, from: string, standstill: string | null) =>
+      `${power} above ${from}${standstill === null ? '' : `, from ${standstill} at standstill`}`,
+    formula: (formula: string, rated: string, upTo: string, points: number, departure: string) =>
+      `${formula} N·m (x: over ${rated}) up to ${upTo}; computed with ${points} points, lines within ${departure} % of the largest torque`,
+    inertiaConstant: (constant: string, power: string) => `H = ${constant} on ${power}`,
+    gear: (ratio: string, efficiency: string | null) =>
+      `load at ${ratio} of motor speed${efficiency === null ? '' : `, efficiency ${efficiency}`}; curves at the load`,
     point: (speed: string, torque: string) => `${speed}: ${torque}`,
     machines: {
       'radial-pump': 'radial pump',

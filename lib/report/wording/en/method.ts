@@ -85,6 +85,7 @@ export const method = {
           'J times the derivative of speed is motor torque less load torque; J is the motor’s plus all others by the square of their speed ratio.',
         ),
         'A load curve is T_{0} + (T_{r} − T_{0})(n/n_{r})^{e} with a straight line from breakaway, or straight lines between typed points; no curve is extrapolated.',
+        'A pump against a shut valve is T_{f} + (T_{shut} − T_{f})(n/n_{r})^{2}; against a static head it is as if shut until the check valve opens at n_{r}·√(H_{static}/H_{shut}), and goes by points from there. A typed formula is computed with as points, whose number and departure stand with it. An active load keeps the sign of its torque, may turn the shaft backwards and has an initial speed where one is stated. A gear refers torque, speed and inertia to the motor; two motors on one shaft have one speed, with their torques, loads and inertias added. A rise of torque within less than 0.2 % of the largest speed is spread over that much.',
       ],
     },
     {
