@@ -1,4 +1,4 @@
-import type { CaseInput } from '../engine/case-input'
+import { type CaseInput, circuitOf } from '../engine/case-input'
 
 /**
  * The speed case written out by hand for its one network, as the measure of what a general engine costs: numbers only,
@@ -12,7 +12,7 @@ export function plainRunUp(input: CaseInput, steps: number, seconds: number): nu
   const transformer = input.transformers[0]!
   const cable = input.lines[0]!.impedance
   const load = input.loads[0]!.power
-  const { circuit } = motor
+  const circuit = circuitOf(motor.circuit)
   const [inner, outer] = [circuit.cages[0]!, circuit.cages[1]!]
   if (motor.duty.kind !== 'starting' || motor.duty.load.kind !== 'power') throw new Error('the speed case has changed')
   const curve = motor.duty.load

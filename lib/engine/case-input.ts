@@ -29,7 +29,7 @@ export interface SupplyInput {
   /** What fixes the EMF: the open-circuit voltage, or the bus voltage before the start with running load on and starters off. */
   hold: { kind: 'bus-voltage'; voltage: Volt } | { kind: 'emf'; voltage: Volt }
   /** Plant motors whose contribution the stated level contains; it is taken out before the run. Empty when it contains none. */
-  motorsInLevel: readonly { busId: string; circuit: InductionCircuit }[]
+  motorsInLevel: readonly { busId: string; circuit: MachineModel }[]
 }
 
 /** Two-winding transformer: ratio U_from(1 + tap/100)/U_to, impedance in ohm on the to side, unchanged by the tap. */
@@ -74,6 +74,59 @@ export interface InductionCircuit {
   /** Core-loss resistance beside the magnetising reactance; null where losses are left out. */
   core: Ohm | null
   cages: readonly { resistance: Ohm; reactance: Ohm }[]
+  /** Skin effect in the inner cage, whose values above are then those at synchronous speed; absent for shallow bars. */
+  deepBar?: DeepBar
+  /** How current and torque fall faster than with constant parameters at low voltage; absent for constant parameters. */
+  saturation?: LeakageSaturation
+  /** Typed torque in place of the circuit's, which then gives current and power factor alone. */
+  torqueCurve?: TorqueCurve
+}
+
+/**
+ * Resistance and reactance of a deep-bar cage against slip: linear between synchronous speed and the values at standstill
+ * (held beyond |s| = 1), or by the law of a rectangular bar with its reduced depth ξ at |s| = 1 and the part of the
+ * reactance that lies in the slot.
+ */
+export type DeepBar =
+  | { law: 'linear'; resistance: Ohm; reactance: Ohm }
+  | { law: 'bar'; depth: number; slotShare: number }
+
+/**
+ * Current ∝ u^current and torque ∝ u^torque below rated voltage, in full from the slip `fullFrom` on and fading to 1 and
+ * 2 at the slip `noneBelow`; above rated voltage nothing is raised.
+ */
+export interface LeakageSaturation {
+  current: number
+  torque: number
+  noneBelow: number
+  fullFrom: number
+}
+
+/** How a curve runs between its points: straight, or a cubic that never turns between them. */
+export type Interpolation = 'linear' | 'monotone'
+
+/** Airgap torque against speed at one voltage, for any other with its square. */
+export interface TorqueCurve {
+  voltage: Volt
+  speeds: readonly RadianPerSecond[]
+  torques: readonly NewtonMetre[]
+  interpolation: Interpolation
+}
+
+/** Machine known by its curves alone: torque ∝ U², current ∝ U, power factor unchanged; from standstill to synchronous speed. */
+export interface TabulatedMachine extends TorqueCurve {
+  currents: readonly Ampere[]
+  powerFactors: readonly number[]
+}
+
+export type MachineModel = InductionCircuit | TabulatedMachine
+
+export const isTabulated = (model: MachineModel): model is TabulatedMachine => 'powerFactors' in model
+
+/** The circuit of a machine that has one. Throws a RangeError for a tabulated machine: asking is a bug. */
+export function circuitOf(model: MachineModel): InductionCircuit {
+  if (isTabulated(model)) throw new RangeError('a tabulated machine has no circuit')
+  return model
 }
 
 /** Torque of a driven load at the motor shaft against speed; it opposes motion only, unless it is active. */
@@ -145,8 +198,8 @@ export interface MotorInput {
   ratedSpeed: RadianPerSecond
   ratedTorque: NewtonMetre
   poles: number
-  circuit: InductionCircuit
-  /** Multiplies the circuit's torque only: a named corner such as −15 %, or the saturation sensitivity; 1 otherwise. */
+  circuit: MachineModel
+  /** Multiplies the machine's torque only: a named corner such as −15 %, or the saturation sensitivity; 1 otherwise. */
   torqueFactor: PerUnit
   /** Motor plus everything it turns, at the motor shaft. */
   inertia: KilogramSquareMetre
@@ -173,6 +226,8 @@ export interface MotorInput {
   declared: {
     lockedRotorCurrent: Ampere | null
     lockedRotorTorque: NewtonMetre | null
+    /** Least torque between standstill and breakdown, in parts of rated torque; absent or null where not declared. */
+    pullUpTorque?: PerUnit | null
     /** Permissible locked-rotor time that the heat is judged against (hot unless the start is cold). */
     permissibleTime: { time: Second; state: 'hot' | 'cold' } | null
   }

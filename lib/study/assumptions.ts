@@ -28,6 +28,13 @@ const enteredAssumptions = (document: StudyDocument): Assumption[] =>
     },
   )
 
+const circuitNames = {
+  'single-cage': 'single-cage circuit',
+  'double-cage': 'double-cage circuit',
+  'deep-bar': 'deep-bar circuit',
+  'slot-bar': 'deep-bar circuit',
+}
+
 const circuitAssumptions = ({ plant }: StudyDocument): Assumption[] =>
   plant.motors.flatMap(({ circuit }, i): Assumption[] => {
     const path = ['plant', 'motors', i, 'circuit'] as const
@@ -40,7 +47,8 @@ const circuitAssumptions = ({ plant }: StudyDocument): Assumption[] =>
           reason: 'Fitted to the nameplate by least squares; many circuits fit one plate and differ in run-up time.',
         },
       ]
-    const value = circuit.kind === 'single-cage' ? 'single-cage circuit' : 'double-cage circuit'
+    if (circuit.kind === 'table') return []
+    const value = circuitNames[circuit.kind]
     const { provenance } = circuit
     if (!provenance || provenance.source.trim() === '') return [{ path, kind: 'unsourced', value, reason: noSource }]
     const { kind, source } = provenance

@@ -1,4 +1,12 @@
-import type { CaseInput, InductionCircuit, LoadCurve, MotorInput, Starter } from '@/lib/engine/case-input'
+import type {
+  CaseInput,
+  InductionCircuit,
+  LoadCurve,
+  MachineModel,
+  MotorInput,
+  Starter,
+  TabulatedMachine,
+} from '@/lib/engine/case-input'
 import {
   ampere,
   type Complex,
@@ -8,6 +16,7 @@ import {
   type Ohm,
   ohm,
   perUnit,
+  radianPerSecond,
   second,
   siemens,
   volt,
@@ -68,7 +77,7 @@ interface ReferenceInput {
   motors: readonly ReferenceMotor[]
 }
 
-interface ReferenceMotor {
+export interface ReferenceMotor {
   id: string
   bus: string
   rated_kw: number
@@ -79,15 +88,23 @@ interface ReferenceMotor {
     type: string
     unit: string
     base_kva?: number
-    rs: number
-    xs: number
-    xm: number
+    rs?: number
+    xs?: number
+    xm?: number
     r1?: number
     x1?: number
     r2?: number
     x2?: number
     rr?: number
     xr?: number
+    rr_running?: number
+    rr_locked?: number
+    xr_running?: number
+    xr_locked?: number
+    speed_pu?: readonly number[]
+    torque_nm?: readonly number[]
+    current_a?: readonly number[]
+    power_factor?: readonly number[]
   }
   inertia_kgm2: number
   load?: {
@@ -189,7 +206,7 @@ function toMotor(motor: ReferenceMotor, frequency: number): MotorInput {
     ratedSpeed,
     ratedTorque: newtonMetre((motor.rated_kw * 1e3) / ratedSpeed),
     poles: motor.poles,
-    circuit: toCircuit(motor),
+    circuit: toMachine(motor, frequency),
     torqueFactor: perUnit(1),
     inertia: kilogramSquareMetre(motor.inertia_kgm2),
     duty:
@@ -206,17 +223,39 @@ function toMotor(motor: ReferenceMotor, frequency: number): MotorInput {
   }
 }
 
+function toTable({ model, rated_kv, poles }: ReferenceMotor, frequency: number): TabulatedMachine {
+  const synchronous = synchronousSpeed(hertz(frequency), poles)
+  return {
+    voltage: volt(rated_kv * 1e3),
+    speeds: model.speed_pu!.map((part) => radianPerSecond(part * synchronous)),
+    torques: model.torque_nm!.map(newtonMetre),
+    currents: model.current_a!.map(ampere),
+    powerFactors: model.power_factor!,
+    interpolation: 'linear',
+  }
+}
+
+/** The machine of a reference case alone. */
+export const toMachine = (motor: ReferenceMotor, frequency: number): MachineModel =>
+  motor.model.type === 'table' ? toTable(motor, frequency) : toCircuit(motor)
+
 function toCircuit({ model, rated_kv }: ReferenceMotor): InductionCircuit {
   const base = model.unit === 'pu' ? (rated_kv * 1e3) ** 2 / (model.base_kva! * 1e3) : 1
   const cage = (r: number, x: number) => ({ resistance: ohm(r * base), reactance: ohm(x * base) })
   const shared = {
-    stator: { re: ohm(model.rs * base), im: ohm(model.xs * base) },
-    magnetising: ohm(model.xm * base),
+    stator: { re: ohm(model.rs! * base), im: ohm(model.xs! * base) },
+    magnetising: ohm(model.xm! * base),
     core: null,
   }
   if (model.type === 'single_cage') return { ...shared, cages: [cage(model.rr!, model.xr!)] }
   if (model.type === 'double_cage')
     return { ...shared, cages: [cage(model.r1!, model.x1!), cage(model.r2!, model.x2!)] }
+  if (model.type === 'deep_bar')
+    return {
+      ...shared,
+      cages: [cage(model.rr_running!, model.xr_running!)],
+      deepBar: { law: 'linear', ...cage(model.rr_locked!, model.xr_locked!) },
+    }
   throw new Error(`no adapter for a motor model of type ${model.type}`)
 }
 

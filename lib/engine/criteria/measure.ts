@@ -1,5 +1,5 @@
 import { type Second, second } from '../../units/si'
-import type { CaseInput, MotorInput } from '../case-input'
+import { type CaseInput, isTabulated, type MotorInput } from '../case-input'
 import type { CaseResult, MotorResult, PlaceResult } from '../case-result'
 import { runningUnder, startsUnder } from './applies'
 import type { NotAssessedReason, RuleInput, RuleInstant, RuleReference } from './rule'
@@ -107,6 +107,10 @@ function startFigure(rule: RuleInput, motor: MotorInput, result: MotorResult | u
     return { kind: 'value', value: start.outcome.at, ...where, at: second(start.switchedOnAt + start.outcome.at) }
   }
   if (rule.quantity === 'accelerating-torque') {
+    // A circuit cannot show a saddle below breakdown: with one declared, only typed torque can be held against the limit.
+    const typed = isTabulated(motor.circuit) || motor.circuit.torqueCurve !== undefined
+    if (!typed && (motor.declared.pullUpTorque ?? null) !== null)
+      return { kind: 'unknown', reason: 'no-pull-up-data', ...where }
     return { kind: 'value', value: start.leastAccelerating.ofRated, ...where, at: null }
   }
   const { figure } = start.heatUsed

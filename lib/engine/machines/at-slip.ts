@@ -1,5 +1,5 @@
 import { type Complex, type RadianPerSecond, type Siemens, siemens } from '../../units/si'
-import type { InductionCircuit } from '../case-input'
+import type { MachineModel } from '../case-input'
 import { evaluateMachine, machineTable } from './machine-table'
 
 /** What a machine is at one slip, for any voltage: currents are linear in it, power and torque quadratic. */
@@ -10,9 +10,13 @@ export interface MachineAtSlip {
   airgapPerVoltSquared: number
 }
 
-/** The exact circuit at slip s (1 at standstill, 0 at synchronous speed, negative when driven faster). */
-export function atSlip(circuit: InductionCircuit, slip: number): MachineAtSlip {
-  const table = machineTable([circuit])
+/**
+ * A machine at slip s (1 at standstill, 0 at synchronous speed, negative when driven faster).
+ *
+ * @param synchronous synchronous speed, rad/s; typed curves need it, but not for the admittance at standstill
+ */
+export function atSlip(model: MachineModel, slip: number, synchronous = 1): MachineAtSlip {
+  const table = machineTable([model], [synchronous])
   evaluateMachine(table, 0, slip)
   return {
     admittance: { re: siemens(table.admittance[0]!), im: siemens(table.admittance[1]!) },

@@ -1,4 +1,4 @@
-import type { InductionCircuit } from '../case-input'
+import type { MachineModel } from '../case-input'
 import { findMinimum } from '../numeric/minimum'
 import { evaluateMachine, machineTable } from './machine-table'
 
@@ -9,9 +9,11 @@ const points = 400
  *
  * A machine runs steadily on the side of smaller slip only. 1 where torque rises all the way to standstill.
  * A second, higher maximum nearer to standstill (a strong outer cage) does not count.
+ *
+ * @param synchronous synchronous speed, rad/s; needed for a machine with typed curves
  */
-export function breakdownSlip(circuit: InductionCircuit): number {
-  const table = machineTable([circuit])
+export function breakdownSlip(model: MachineModel, synchronous = Number.NaN): number {
+  const table = machineTable([model], [synchronous])
   const negativeTorque = (slip: number): number => {
     evaluateMachine(table, 0, slip)
     return -table.airgap[0]!

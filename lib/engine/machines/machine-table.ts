@@ -1,12 +1,19 @@
-import type { InductionCircuit } from '../case-input'
+import { isTabulated, type MachineModel } from '../case-input'
+import { type CurveMachine, curveMachine } from './curve-machine'
+import { type DeepBarLaw, deepBarLaw } from './deep-bar'
 
 /**
- * Circuits of many machines in one array, for the hot loop. Row of `stride` numbers a machine:
+ * Machines in arrays, for the hot loop. Row of `stride` numbers a circuit:
  * 0 r_s, 1 x_s, 2 1/x_m, 3 1/r_c (0 without core loss), 4 r_1, 5 x_1, 6 r_2, 7 x_2 (r_2 = 0: no second cage), in ohm or siemens.
  */
 export interface MachineTable {
   count: number
   circuit: Float64Array
+  /** 1 where a machine is more than the circuit in its row. */
+  special: Uint8Array
+  deepBars: readonly (DeepBarLaw | null)[]
+  /** Machines, or their torque alone, by typed curves. */
+  curves: readonly (CurveMachine | null)[]
   /** Star admittance seen at the terminals, S: re, im of each machine; written by `evaluateMachine`. */
   admittance: Float64Array
   /** Airgap power at one volt line to line, W/V². */
@@ -15,37 +22,69 @@ export interface MachineTable {
 
 const stride = 8
 
-export function machineTable(circuits: readonly InductionCircuit[]): MachineTable {
+/** The numbers of a circuit; a machine known by its curves has none, and a resistance of one that is never looked at. */
+const rowOf = (model: MachineModel): readonly number[] => {
+  if (isTabulated(model)) return [0, 0, 0, 0, 1, 0, 0, 0]
+  const { stator, magnetising, core, cages } = model
+  return [
+    stator.re,
+    stator.im,
+    1 / magnetising,
+    core === null ? 0 : 1 / core,
+    cages[0]!.resistance,
+    cages[0]!.reactance,
+    cages[1]?.resistance ?? 0,
+    cages[1]?.reactance ?? 0,
+  ]
+}
+
+/**
+ * Lays machines out for calculation.
+ *
+ * @param synchronous synchronous speed of each, rad/s; needed where a machine has typed curves
+ */
+export function machineTable(models: readonly MachineModel[], synchronous: ArrayLike<number> = []): MachineTable {
+  const curves = models.map((model, i) => {
+    const curve = isTabulated(model) ? model : model.torqueCurve
+    return curve ? curveMachine(curve, synchronous[i] ?? Number.NaN) : null
+  })
+  const deepBars = models.map((model) => (isTabulated(model) ? null : deepBarLaw(model)))
   return {
-    count: circuits.length,
-    circuit: Float64Array.from(
-      circuits.flatMap((circuit) => [
-        circuit.stator.re,
-        circuit.stator.im,
-        1 / circuit.magnetising,
-        circuit.core === null ? 0 : 1 / circuit.core,
-        circuit.cages[0]!.resistance,
-        circuit.cages[0]!.reactance,
-        circuit.cages[1]?.resistance ?? 0,
-        circuit.cages[1]?.reactance ?? 0,
-      ]),
-    ),
-    admittance: new Float64Array(2 * circuits.length),
-    airgap: new Float64Array(circuits.length),
+    count: models.length,
+    circuit: Float64Array.from(models.flatMap(rowOf)),
+    special: Uint8Array.from(models, (_, i) => (curves[i] || deepBars[i] ? 1 : 0)),
+    deepBars,
+    curves,
+    admittance: new Float64Array(2 * models.length),
+    airgap: new Float64Array(models.length),
   }
 }
 
 /**
- * Admittance y and airgap power of machine i at slip s, any s including 0 and negative (generator).
+ * Admittance y and airgap power of machine i at slip s, any s including 0 and negative (generator) for circuits.
  *
  * Y_r = Σ s/(R + jsX); Y_e = Y_r + 1/(jX_m) + 1/R_c; k = 1/(1 + Z_s·Y_e); y = Y_e·k; P_ag/V² = |k|²·Re Y_r.
- * Source: the exact T circuit of any textbook on induction machines.
+ * Source: the exact T circuit of any textbook on induction machines. Typed curves hold their end values outside their
+ * range; the run-up looks whether a machine has left it (`isOutside`).
  */
 export function evaluateMachine(table: MachineTable, i: number, slip: number): void {
   const c = table.circuit
   const at = stride * i
-  const r1 = c[at + 4]!
-  const sx1 = slip * c[at + 5]!
+  let r1 = c[at + 4]!
+  let x1 = c[at + 5]!
+  if (table.special[i] === 1) {
+    const curve = table.curves[i]!
+    if (curve?.current) {
+      curve.write(table.admittance, table.airgap, i, slip)
+      return
+    }
+    const law = table.deepBars[i]
+    if (law) {
+      r1 += law.addedResistance(slip)
+      x1 = law.reactance(slip)
+    }
+  }
+  const sx1 = slip * x1
   const part1 = slip / (r1 * r1 + sx1 * sx1)
   let rotorRe = part1 * r1
   let rotorIm = -part1 * sx1
@@ -65,5 +104,10 @@ export function evaluateMachine(table: MachineTable, i: number, slip: number): v
   const inverse = 1 / (dRe * dRe + dIm * dIm)
   table.admittance[2 * i] = (innerRe * dRe + innerIm * dIm) * inverse
   table.admittance[2 * i + 1] = (innerIm * dRe - innerRe * dIm) * inverse
-  table.airgap[i] = inverse * rotorRe
+  const curve = table.special[i] === 1 ? table.curves[i] : null
+  table.airgap[i] = curve ? curve.airgap(slip) : inverse * rotorRe
 }
+
+/** Whether a machine with typed curves is at a slip that they do not reach. */
+export const isOutside = (table: MachineTable, i: number, slip: number): boolean =>
+  table.special[i] === 1 && table.curves[i] !== null && !table.curves[i]!.reaches(slip)

@@ -1,4 +1,5 @@
-import type { CaseInput, InductionCircuit, LoadCurve, MotorInput } from '../case-input'
+import { type CaseInput, isTabulated, type LoadCurve, type MotorInput } from '../case-input'
+import { circuitProblem, machineProblem } from '../machines/check-machine'
 import { type Refusal, refuse } from '../network/refusal'
 import { isZero } from '../numeric/complex'
 import { capacitorsProblem, starterProblem } from '../starters/check-starter'
@@ -41,7 +42,7 @@ function checkSupply(input: CaseInput): Refusal | null {
   }
   if (!positive(supply.hold.voltage)) return bad([supply.busId], 'The voltage of the supply must be above zero.')
   for (const motor of supply.motorsInLevel) {
-    const problem = circuitProblem(motor.circuit)
+    const problem = isTabulated(motor.circuit) ? null : circuitProblem(motor.circuit)
     if (problem !== null) return bad([motor.busId], `A motor in the stated level: ${problem}`)
     if (!input.buses.some((bus) => bus.id === motor.busId))
       return bad([motor.busId], 'A motor in the stated level stands at a bus that is not in the case.')
@@ -114,8 +115,8 @@ function motorProblem(motor: MotorInput, input: CaseInput): string | null {
     return 'the rated speed must lie below synchronous speed.'
   if (!positive(motor.inertia)) return 'the inertia must be above zero.'
   if (!positive(motor.torqueFactor)) return 'the torque factor must be above zero.'
-  const circuit = circuitProblem(motor.circuit)
-  if (circuit !== null) return circuit
+  const machine = machineProblem(motor.circuit, (4 * Math.PI * input.frequency) / motor.poles)
+  if (machine !== null) return machine
   if (motor.duty.kind === 'running') return curveProblem(motor.duty.load)
   const { at, starter, capacitors, load, processLoad } = motor.duty
   if (!notNegative(at)) return 'the start cannot lie before zero.'
@@ -125,16 +126,6 @@ function motorProblem(motor: MotorInput, input: CaseInput): string | null {
   if (initialSpeed !== undefined && !(Math.abs(initialSpeed) < (8 * Math.PI * input.frequency) / motor.poles))
     return 'the speed before the start must lie below twice synchronous speed.'
   return curveProblem(load) ?? (processLoad === null ? null : curveProblem(processLoad))
-}
-
-function circuitProblem(circuit: InductionCircuit): string | null {
-  const { stator, magnetising, core, cages } = circuit
-  if (!finite(stator) || stator.re < 0 || stator.im < 0) return 'the stator impedance must not be negative.'
-  if (!positive(magnetising)) return 'the magnetising reactance must be above zero.'
-  if (core !== null && !positive(core)) return 'the core resistance must be above zero.'
-  if (cages.length < 1 || cages.length > 2) return 'the circuit needs one or two cages.'
-  const sound = cages.every((cage) => positive(cage.resistance) && notNegative(cage.reactance))
-  return sound ? null : 'each cage needs a resistance above zero and a reactance of zero or more.'
 }
 
 function curveProblem(curve: LoadCurve): string | null {

@@ -7,6 +7,7 @@ import type { Courses } from './course'
 import { watch } from './extremes'
 import { notices } from './notices'
 import { createObserver, motorState, observationLength, placeOf } from './observation'
+import { motorOutsideItsCurves } from './outside-curves'
 import { preparePlant } from './plant'
 import { caseSeries, motorResults, placeResults } from './results'
 import { settledStates } from './settled'
@@ -49,6 +50,8 @@ export function computeCase(input: CaseInput): CaseResult {
   const record = simulate(before, courses)
   const settled = settledStates(system, courses, record)
   const collapsed = record.end.kind === 'collapsed'
+  const left = motorOutsideItsCurves(system, record.samples)
+  if (left !== null) return nothing(input, left)
   return {
     caseId: input.id,
     model: 'quasi-static',

@@ -66,14 +66,20 @@ export function preparePlant(input: CaseInput): Setup<Plant> {
       supplyNode: nodeOf(input.supply.busId),
       loads: nonlinearLoads(input.loads, topology.nodeOf),
       motors,
-      machines: machineTable(motors.map((motor) => motor.circuit)),
+      machines: machineTable(
+        motors.map((motor) => motor.circuit),
+        synchronous,
+      ),
       starters: motors.map((motor) => (motor.duty.kind === 'starting' ? motor.duty.starter : null)),
       node: Int32Array.from(motors, (motor) => nodeOf(motor.busId)),
       synchronous,
       inertia: Float64Array.from(motors, (motor) => motor.inertia),
       torqueFactor: Float64Array.from(motors, (motor) => motor.torqueFactor),
       ratedTorque: Float64Array.from(motors, (motor) => motor.ratedTorque),
-      breakdownSpeed: Float64Array.from(motors, (motor, i) => synchronous[i]! * (1 - breakdownSlip(motor.circuit))),
+      breakdownSpeed: Float64Array.from(
+        motors,
+        (motor, i) => synchronous[i]! * (1 - breakdownSlip(motor.circuit, synchronous[i]!)),
+      ),
       mates: motors.map((motor, i) =>
         motor.shaft === undefined ? [i] : [...motors.keys()].filter((m) => motors[m]!.shaft === motor.shaft),
       ),

@@ -1,4 +1,5 @@
 import { type Complex, ohm, radianPerSecond, second } from '../../units/si'
+import { isTabulated } from '../case-input'
 import { pieceAt } from '../driven/load-segments'
 import { breakdownSlip } from '../machines/breakdown-slip'
 import { evaluateMachine } from '../machines/machine-table'
@@ -316,9 +317,10 @@ function breakdownSpeedNow(system: System, motor: number): number {
   const { plant } = system
   if (system.connection.ownRotor[motor] === 1) return plant.breakdownSpeed[motor]!
   const { circuit } = plant.motors[motor]!
+  if (isTabulated(circuit)) return plant.breakdownSpeed[motor]!
   const share = system.connection.ownRotor[motor]!
   const cages = circuit.cages.map((cage) => ({ ...cage, resistance: ohm(cage.resistance / share) }))
-  return plant.synchronous[motor]! * (1 - breakdownSlip({ ...circuit, cages }))
+  return plant.synchronous[motor]! * (1 - breakdownSlip({ ...circuit, cages }, plant.synchronous[motor]!))
 }
 
 /** Adds what the last stretch heated the winding beyond the integral of the terminal current. */

@@ -1,5 +1,6 @@
 import { type LoadSegments, loadTorque, loadTorqueAt } from '../driven/load-segments'
 import { evaluateMachine } from '../machines/machine-table'
+import { saturate, saturationOf } from '../machines/saturation'
 import type { AdmittanceMatrix } from '../network/admittance'
 import { type ReducedNetwork, reduceNetwork } from '../network/reduce'
 import { createSolver, type NetworkSolver } from '../network/solver'
@@ -84,6 +85,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     length += 2
     return length - 2
   })
+  const saturations = plant.motors.map(({ circuit }) => saturationOf(circuit))
   const { shunt, voltage, driven } = solver
 
   /** Motors whose devices look at the voltage of their bus; the rest of the work is spared while there are none. */
@@ -107,7 +109,14 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       evaluateDrive(connection, i, speed, opposing, square, time)
       return
     }
-    evaluateMachine(machines, i, 1 - speed / synchronous[i]!)
+    const slip = 1 - speed / synchronous[i]!
+    evaluateMachine(machines, i, slip)
+    const saturation = saturations[i]
+    if (saturation) {
+      // Behind an impedance the winding's share of the voltage is that of the round before.
+      const winding = Math.sqrt(connection.winding[i]! * square) / plant.motors[i]!.ratedVoltage
+      saturate(machines, i, saturation, slip, winding)
+    }
     const atFull = regulated[i] ? (torqueFactor[i]! * machines.airgap[i]! * square) / synchronous[i]! : 0
     evaluateConnection(connection, machines, i, square, time, atFull)
   }
@@ -219,7 +228,8 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       const { ratedTorque, ratedVoltage } = plant.motors[motor]!
       if (step === null) disconnect(connection, motor)
       else connect(connection, motor, step, t, { ratedTorque, ratedVoltage, inertia: inertia[motor]! })
-      regulated[motor] = isRegulated(connection, motor) ? 1 : 0
+      const looks = isRegulated(connection, motor) || (saturations[motor] !== null && connection.code[motor] !== 0)
+      regulated[motor] = looks ? 1 : 0
       regulatedMotors = regulated.reduce((sum, one) => sum + one, 0)
     },
     setTime(t) {

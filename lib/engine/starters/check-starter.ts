@@ -1,4 +1,4 @@
-import type { InductionCircuit, Starter } from '../case-input'
+import { isTabulated, type MachineModel, type Starter } from '../case-input'
 import type { ChangeOver, DriveStarter, SoftStarter, StartCapacitor } from '../starter-input'
 
 const positive = (value: number): boolean => Number.isFinite(value) && value > 0
@@ -16,7 +16,7 @@ function changeOverProblem(changeOver: ChangeOver | null): string | null {
 }
 
 /** What makes a starting device impossible to compute, or null. Slip rings need a circuit with one rotor branch. */
-export function starterProblem(starter: Starter, circuit: InductionCircuit): string | null {
+export function starterProblem(starter: Starter, circuit: MachineModel): string | null {
   switch (starter.kind) {
     case 'direct':
       return null
@@ -50,7 +50,8 @@ export function starterProblem(starter: Starter, circuit: InductionCircuit): str
       return changeOverProblem(starter.changeOver)
     }
     case 'rotor-resistance': {
-      if (circuit.cages.length !== 1) return 'a motor with slip rings has one rotor branch in its circuit.'
+      if (isTabulated(circuit) || circuit.cages.length !== 1)
+        return 'a motor with slip rings has one rotor branch in its circuit.'
       if (!starter.steps.every(({ resistance }) => positive(resistance)))
         return 'each rotor step needs a resistance above zero.'
       return starter.steps.reduce<string | null>((found, one) => found ?? changeOverProblem(one.changeOver), null)

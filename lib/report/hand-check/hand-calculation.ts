@@ -106,7 +106,7 @@ export const handCalculation = (
   const supply = document.plant.supplies.find(({ id }) => id === record.supply)
   const path = supply ? supplyPath(document.plant, supply.bus, motor.bus) : null
   const circuit = circuitInput(motor, circuitEstimator(document.frequency.si))
-  if (!supply || !path || !circuit.ok) return null
+  if (!supply || !path || !circuit.ok || circuit.circuit === null || motor.saturation !== null) return null
   const first = supplyPart(supply, words)
   const { parts: between, ratio } = pathParts(path, record, document, words)
   const own = standstillImpedance(circuit.circuit)

@@ -41,11 +41,13 @@ const number = (value: number) =>
     .replace(/\.$/, '')
 const pair = ({ r, x }: { r: number; x: number }) => `${number(r)}, ${number(x)}`
 
+type TypedCircuit = Exclude<MotorRecord['circuit'], { kind: 'estimated' | 'table' }>
+
 /** The typed circuit has one source for all its numbers. */
 const ofCircuit =
-  (text: (circuit: Exclude<MotorRecord['circuit'], { kind: 'estimated' }>) => string | null) =>
+  (text: (circuit: TypedCircuit) => string | null) =>
   ({ circuit }: MotorRecord): FieldValue | null => {
-    if (circuit.kind === 'estimated') return null
+    if (circuit.kind === 'estimated' || circuit.kind === 'table') return null
     const words = text(circuit)
     return words === null ? null : { text: words, provenance: circuit.provenance }
   }
@@ -55,7 +57,7 @@ export const circuitFields = (words: Words): readonly RecordField<MotorRecord>[]
   {
     label: words.circuitScale,
     of: ({ circuit, ratedVoltage }) => {
-      if (circuit.kind === 'estimated') return null
+      if (circuit.kind === 'estimated' || circuit.kind === 'table') return null
       const { scale } = circuit
       return ofWords(scale.unit === 'ohm' ? words.values.ohm : words.values.perUnit(scale.base.text, ratedVoltage.text))
     },
@@ -63,9 +65,43 @@ export const circuitFields = (words: Words): readonly RecordField<MotorRecord>[]
   { label: words.stator, of: ofCircuit(({ stator }) => pair(stator)) },
   { label: words.magnetising, of: ofCircuit(({ magnetising }) => number(magnetising)) },
   { label: words.core, of: ofCircuit(({ core }) => (core === null ? null : number(core))) },
-  { label: words.cage, of: ofCircuit((circuit) => (circuit.kind === 'single-cage' ? pair(circuit.cage) : null)) },
+  { label: words.cage, of: ofCircuit((circuit) => ('cage' in circuit ? pair(circuit.cage) : null)) },
+  { label: words.lockedCage, of: ofCircuit((circuit) => ('locked' in circuit ? pair(circuit.locked) : null)) },
+  {
+    label: words.barDepth,
+    of: ofCircuit((circuit) =>
+      'depth' in circuit ? words.values.barDepth(number(circuit.depth), number(circuit.slotShare)) : null,
+    ),
+  },
   { label: words.innerCage, of: ofCircuit((circuit) => (circuit.kind === 'double-cage' ? pair(circuit.inner) : null)) },
   { label: words.outerCage, of: ofCircuit((circuit) => (circuit.kind === 'double-cage' ? pair(circuit.outer) : null)) },
+  {
+    label: words.machineCurves,
+    of: ({ circuit }) => {
+      if (circuit.kind !== 'table') return null
+      const points = circuit.points.map(({ speed, torque, current, powerFactor }) =>
+        words.values.machinePoint(speed.text, torque.text, current.text, powerFactor.text),
+      )
+      const text = `${points.join('; ')} (${words.values.interpolation[circuit.interpolation]})`
+      return { text, provenance: circuit.points[0]?.torque.provenance ?? null }
+    },
+  },
+  {
+    label: words.torquePoints,
+    of: ({ torquePoints, torqueInterpolation }) => {
+      if (torquePoints.length === 0) return null
+      const points = torquePoints.map(({ speed, torque }) => words.values.point(speed.text, torque.text))
+      const text = `${points.join('; ')} (${words.values.interpolation[torqueInterpolation]})`
+      return { text, provenance: torquePoints[0]?.torque.provenance ?? null }
+    },
+  },
+  {
+    label: words.saturation,
+    of: ({ saturation }) =>
+      saturation === null
+        ? null
+        : ofWords(words.values.saturation(number(saturation.current), number(saturation.torque))),
+  },
 ]
 
 /** A load curve in words, as typed. */

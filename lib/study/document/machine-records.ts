@@ -1,42 +1,7 @@
 import * as z from 'zod'
 import { entered } from './entered'
 import { note, recordId, tag } from './identity'
-
-const perUnitBase = z.discriminatedUnion('unit', [
-  z
-    .strictObject({ unit: z.literal('pu'), base: entered('apparent-power') })
-    .describe("Per unit on this power and the motor's rated voltage."),
-  z.strictObject({ unit: z.literal('ohm') }),
-])
-
-/** Equivalent circuit, star, rotor referred to the stator; plain numbers in the unit of `scale`. */
-const circuitValues = {
-  scale: perUnitBase,
-  stator: z.strictObject({ r: z.number().min(0), x: z.number().positive() }),
-  magnetising: z.number().positive().describe('Magnetising reactance.'),
-  core: z
-    .number()
-    .positive()
-    .nullable()
-    .describe('Core-loss resistance beside the magnetising reactance; null where losses are left out.'),
-  provenance: z
-    .strictObject({
-      kind: z.enum(['test', 'guaranteed', 'typical', 'derived', 'assumed']),
-      source: z.string().max(500),
-    })
-    .nullable(),
-}
-const cage = z.strictObject({ r: z.number().positive(), x: z.number().min(0) })
-
-export const motorCircuit = z
-  .discriminatedUnion('kind', [
-    z.strictObject({ kind: z.literal('single-cage'), ...circuitValues, cage }),
-    z.strictObject({ kind: z.literal('double-cage'), ...circuitValues, inner: cage, outer: cage }),
-    z.strictObject({ kind: z.literal('estimated') }),
-  ])
-  .describe(
-    'Star-equivalent circuit, rotor referred to the stator: typed, or estimated from the nameplate each time the study is computed.',
-  )
+import { curveInterpolation, motorCircuit, saturationExponents, torquePoint } from './motor-circuit'
 
 export const motorRecord = z.strictObject({
   id: recordId,
@@ -63,6 +28,18 @@ export const motorRecord = z.strictObject({
   breakdownTorque: entered('ratio').nullable().default(null).describe('As a multiple of rated torque.'),
   lockedRotorPowerFactor: entered('ratio').nullable().default(null),
   circuit: motorCircuit,
+  torquePoints: z
+    .array(torquePoint)
+    .max(200)
+    .default([])
+    .describe(
+      'Torque of the motor against speed at rated voltage, from standstill on, in place of the torque of the circuit; empty where the circuit gives it.',
+    ),
+  torqueInterpolation: curveInterpolation,
+  saturation: saturationExponents
+    .nullable()
+    .default(null)
+    .describe('Fall of locked-rotor current and torque with voltage; null for current ∝ U and torque ∝ U².'),
   inertia: entered('inertia').describe('Inertia J of the rotor alone.'),
   permissibleCold: entered('time')
     .nullable()
@@ -79,4 +56,3 @@ export const motorRecord = z.strictObject({
 })
 
 export type MotorRecord = z.infer<typeof motorRecord>
-export type MotorCircuit = z.infer<typeof motorCircuit>

@@ -121,9 +121,9 @@ export const checkStarters = ({ plant, schedules }: StudyDocument): FieldIssue[]
       const method = plant.starters.find(({ id }) => id === starter)
       const circuit = plant.motors.find(({ id }) => id === motor)?.circuit.kind
       return unless(
-        method?.kind !== 'rotor-resistance' || circuit !== 'double-cage',
+        method?.kind !== 'rotor-resistance' || circuit === 'single-cage',
         ['schedules', i, 'starts', k, 'starter'],
-        `Schedule ${tag}: rotor resistance needs slip rings, and the motor has a double cage.`,
+        `Schedule ${tag}: rotor resistance needs slip rings: type the circuit of the motor with one rotor branch.`,
       )
     }),
   ),

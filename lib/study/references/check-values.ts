@@ -96,6 +96,7 @@ const motor = (record: MotorRecord, path: Path, frequency: number): FieldIssue[]
     ...above(record.inertia, 0, [...path, 'inertia'], `Inertia of motor ${tag}`),
     ...above(record.permissibleCold, 0, [...path, 'permissibleCold'], `Permissible time of motor ${tag}`),
     ...above(record.permissibleHot, 0, [...path, 'permissibleHot'], `Permissible time of motor ${tag}`),
+    ...machineCurves(record, path),
     ...(record.circuit.kind !== 'estimated'
       ? []
       : needed.flatMap(([key, name]) =>
@@ -105,6 +106,24 @@ const motor = (record: MotorRecord, path: Path, frequency: number): FieldIssue[]
             `The circuit of motor ${tag} is estimated from its nameplate, which needs its ${name}; enter it or type the circuit.`,
           ),
         )),
+  ]
+}
+
+/** Typed curves of a motor begin at standstill, rise in speed and end at synchronous speed or before it. */
+const machineCurves = (record: MotorRecord, path: Path): FieldIssue[] => {
+  const table = record.circuit.kind === 'table' ? record.circuit.points : []
+  const sound = (points: readonly { speed: { si: number } }[], at: Path, what: string): FieldIssue[] => {
+    if (points.length === 0) return []
+    const rises = points.every(({ speed }, k) => k === 0 || speed.si > points[k - 1]!.speed.si)
+    return [
+      ...unless(points.length >= 3, at, `${what} of motor ${record.tag} needs three points or more.`),
+      ...unless(points[0]!.speed.si === 0, at, `${what} of motor ${record.tag} begins at standstill: 0 r/min.`),
+      ...unless(rises, at, `The speeds of ${what.toLowerCase()} of motor ${record.tag} must rise.`),
+    ]
+  }
+  return [
+    ...sound(table, [...path, 'circuit', 'points'], 'The curve'),
+    ...sound(record.torquePoints, [...path, 'torquePoints'], 'The torque curve'),
   ]
 }
 

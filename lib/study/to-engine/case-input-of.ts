@@ -1,4 +1,4 @@
-import type { CaseInput, InductionCircuit, MotorInput } from '../../engine/case-input'
+import type { CaseInput, MachineModel, MotorInput } from '../../engine/case-input'
 import { hertz, perUnit, second, volt } from '../../units/si'
 import type { CaseRecord } from '../document/case-records'
 import type { StudyDocument } from '../document/study-document'
@@ -60,7 +60,7 @@ export const caseInputOf = (
   document: StudyDocument,
   record: CaseRecord,
   index: RecordIndex,
-  circuits: ReadonlyMap<string, InductionCircuit>,
+  circuits: ReadonlyMap<string, MachineModel>,
 ): CaseInput => {
   const { plant, settings, frequency } = document
   const condition = found(index.plantConditions.get(record.plantCondition), record.id)

@@ -1,4 +1,4 @@
-import type { InductionCircuit, MotorInput } from '../../engine/case-input'
+import type { MachineModel, MotorInput } from '../../engine/case-input'
 import { ampere, kilogramSquareMetre, newtonMetre, perUnit, radianPerSecond, second, volt, watt } from '../../units/si'
 import type { CaseRecord } from '../document/case-records'
 import type { DrivenLoadRecord } from '../document/driven-load-record'
@@ -25,6 +25,7 @@ const declaredValues = (motor: MotorRecord, state: StudySettings['thermalState']
   return {
     lockedRotorCurrent: lockedRotorCurrent && ampere(lockedRotorCurrent.si),
     lockedRotorTorque: lockedRotorTorque && newtonMetre(lockedRotorTorque.si * ratedTorqueOf(motor)),
+    pullUpTorque: motor.pullUpTorque && perUnit(motor.pullUpTorque.si),
     permissibleTime: permissible && { time: second(permissible.si), state },
   }
 }
@@ -33,7 +34,7 @@ const declaredValues = (motor: MotorRecord, state: StudySettings['thermalState']
 export const motorInput = (parts: {
   motor: MotorRecord
   load: DrivenLoadRecord
-  circuit: InductionCircuit
+  circuit: MachineModel
   duty: MotorInput['duty']
   record: CaseRecord
   settings: StudySettings

@@ -1,4 +1,4 @@
-import type { InductionCircuit } from '../../engine/case-input'
+import type { MachineModel } from '../../engine/case-input'
 import type { StudyRunInput } from '../../engine/study-run'
 import { DomainError, type FieldIssue } from '../../errors'
 import { perUnit } from '../../units/si'
@@ -7,6 +7,7 @@ import { checkReferences } from '../references/check-references'
 import { type RecordIndex, recordIndex } from '../references/record-index'
 import { caseInputOf } from './case-input-of'
 import { circuitEstimator, circuitInput } from './circuit-input'
+import { machineModel } from './machine-model'
 import { ruleInputOf } from './rule-input-of'
 
 /** Motors whose circuit some case needs: connected ones, and all where a level contains the plant's motors. */
@@ -23,12 +24,12 @@ const neededMotors = (document: StudyDocument, index: RecordIndex): ReadonlySet<
 const circuitsOf = (document: StudyDocument, index: RecordIndex) => {
   const estimate = circuitEstimator(document.frequency.si)
   const needed = neededMotors(document, index)
-  const circuits = new Map<string, InductionCircuit>()
+  const circuits = new Map<string, MachineModel>()
   const issues: FieldIssue[] = []
   document.plant.motors.forEach((motor, i) => {
     if (!needed.has(motor.id)) return
     const outcome = circuitInput(motor, estimate)
-    if (outcome.ok) circuits.set(motor.id, outcome.circuit)
+    if (outcome.ok) circuits.set(motor.id, machineModel(motor, outcome.circuit, document.frequency.si))
     else
       issues.push({
         path: ['plant', 'motors', i, 'circuit'],

@@ -1,4 +1,4 @@
-import type { InductionCircuit, SupplyInput } from '../../engine/case-input'
+import type { MachineModel, SupplyInput } from '../../engine/case-input'
 import { type Complex, type Ohm, ohm, volt } from '../../units/si'
 import type { CaseRecord } from '../document/case-records'
 import type { SupplyRecord } from '../document/network-records'
@@ -28,7 +28,7 @@ const sourceImpedance = (supply: SupplyRecord, factor: number): Complex<Ohm> => 
 export const supplyInput = (
   supply: SupplyRecord,
   record: CaseRecord,
-  plantMotors: readonly { busId: string; circuit: InductionCircuit }[],
+  plantMotors: readonly { busId: string; circuit: MachineModel }[],
 ): SupplyInput => {
   const factor = changesOf(record, 'voltage-factor').at(-1)?.value.si ?? voltageFactorOf(supply)
   const changed = changesOf(record, 'voltage-before').at(-1)?.voltage.si

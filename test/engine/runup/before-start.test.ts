@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import type { CaseInput } from '@/lib/engine/case-input'
+import { type CaseInput, circuitOf } from '@/lib/engine/case-input'
 import { atSlip } from '@/lib/engine/machines/at-slip'
 import { runCase } from '@/lib/engine/run-case'
 import { beforeStart } from '@/lib/engine/runup/before-start'
@@ -137,7 +137,7 @@ describe('running motors before the start', () => {
 describe('a stated level that contains the plant’s motors', () => {
   const withMotors = (count: number): CaseInput => {
     const input = velmoorCase('level', 'weakest', lastPump(direct))
-    const { circuit } = pump(1, running(valveOpen))
+    const circuit = circuitOf(pump(1, running(valveOpen)).circuit)
     return {
       ...input,
       supply: {
@@ -160,7 +160,7 @@ describe('a stated level that contains the plant’s motors', () => {
   })
 
   it('is lowered by their locked-rotor admittance behind cable and transformer: of one motor on paper', () => {
-    const motor = atSlip(pump(1, running(valveOpen)).circuit, 1).admittance
+    const motor = atSlip(circuitOf(pump(1, running(valveOpen)).circuit), 1).admittance
     const zm = 1 / Math.hypot(motor.re, motor.im)
     const { impedance, takenOut } = source(1)
     // 7.446 MVA at 6.6 kV; 33 kV at the PCC stand for 6.9 kV, less what cable, transformer and line take.

@@ -95,7 +95,7 @@ test.each<[string, (file: Json) => void, string]>([
   [
     'a kind that does not exist',
     (file) => Object.assign(plant(file, 'motors'), { circuit: { kind: 'guess' } }),
-    'plant.motors.0.circuit.kind: Give “single-cage”, “double-cage” or “estimated” here.',
+    'plant.motors.0.circuit.kind: Give “single-cage”, “double-cage”, “deep-bar”, “slot-bar”, “table” or “estimated” here.',
   ],
   [
     'an odd number of poles',

@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest'
+import { circuitOf } from '@/lib/engine/case-input'
 import { DomainError } from '@/lib/errors'
 import { circuitInput, scaleAdmittance } from '@/lib/study/to-engine/circuit-input'
 import { studyRunInput } from '@/lib/study/to-engine/study-run-input'
@@ -69,7 +70,7 @@ test('a load that turns at half speed counts with a quarter of its inertia', () 
 })
 
 test('a nameplate gives an estimated circuit with two cages, in ohm', () => {
-  const { circuit } = first(example('one-motor')).motors[0]!
+  const circuit = circuitOf(first(example('one-motor')).motors[0]!.circuit)
   expect(circuit.cages).toHaveLength(2)
   // At standstill the circuit draws the declared current: |Z| = U/(√3·I), to the size of leakage and cages in parallel.
   const bar = 400 / (Math.sqrt(3) * 2950)
@@ -112,7 +113,8 @@ test('a single cage typed in ohm needs no base', () => {
       cages: [{ resistance: 0.32, reactance: 3.4 }],
     },
   })
-  if (outcome.ok) expect(scaleAdmittance(outcome.circuit, 2).cages[0]).toEqual({ resistance: 0.16, reactance: 1.7 })
+  if (outcome.ok)
+    expect(circuitOf(scaleAdmittance(outcome.circuit!, 2)).cages[0]).toEqual({ resistance: 0.16, reactance: 1.7 })
 })
 
 test('a limit that names a supply applies to the cases with that supply', () => {

@@ -46,6 +46,43 @@ const common: readonly Field[] = [
 
 const source: Field = { kind: 'source', name: 'provenance', label: 'Source of the circuit' }
 
+/** How a curve runs between its points. */
+export const interpolationField = (name: string): Field => ({
+  kind: 'choice',
+  name,
+  label: 'Between points',
+  initial: 'linear',
+  options: [
+    { value: 'linear', label: 'straight' },
+    { value: 'monotone', label: 'a cubic that never turns' },
+  ],
+})
+
+/** Torque that replaces the circuit's. */
+export const torquePointsField: Field = {
+  kind: 'list',
+  name: 'torquePoints',
+  label: 'Torque curve of the maker',
+  item: 'point',
+  hint: 'At rated voltage, from standstill on; the circuit then gives current and power factor alone. Without points the circuit gives the torque too. Needed where a pull-up torque is declared.',
+  fields: [
+    { kind: 'quantity', name: 'speed', label: 'Speed', quantity: 'speed' },
+    { kind: 'quantity', name: 'torque', label: 'Torque', quantity: 'torque' },
+  ],
+}
+
+/** Powers of the voltage that current and torque follow. */
+export const saturationField: Field = {
+  kind: 'group',
+  name: 'saturation',
+  label: 'Leakage saturation',
+  absent: 'none: current with the voltage, torque with its square',
+  fields: [
+    { kind: 'decimal', name: 'current', label: 'Power of the voltage for the current', hint: 'Typical 1.05 to 1.15.' },
+    { kind: 'decimal', name: 'torque', label: 'Power of the voltage for the torque', hint: 'Typical 2.1 to 2.3.' },
+  ],
+}
+
 /** Typed parameters, or estimated from the nameplate whenever the study is computed. */
 export const circuitField: VariantsField = {
   kind: 'variants',
@@ -60,6 +97,46 @@ export const circuitField: VariantsField = {
       value: 'double-cage',
       label: 'double cage, typed',
       fields: [...common, cage('inner', 'Inner cage'), cage('outer', 'Outer cage'), source],
+    },
+    {
+      value: 'deep-bar',
+      label: 'deep bars, linear in slip, typed',
+      fields: [...common, cage('cage', 'Cage at synchronous speed'), cage('locked', 'Cage at standstill'), source],
+    },
+    {
+      value: 'slot-bar',
+      label: 'deep bars by their depth, typed',
+      fields: [
+        ...common,
+        cage('cage', 'Cage at synchronous speed'),
+        {
+          kind: 'decimal',
+          name: 'depth',
+          label: 'Reduced depth at standstill',
+          hint: 'Height of a bar in parts of the depth to which the current penetrates at line frequency.',
+        },
+        { kind: 'decimal', name: 'slotShare', label: 'Part of the cage reactance in the slot' },
+        source,
+      ],
+    },
+    {
+      value: 'table',
+      label: 'curves of the maker',
+      fields: [
+        {
+          kind: 'list',
+          name: 'points',
+          label: 'Points at rated voltage, from standstill on',
+          item: 'point',
+          fields: [
+            { kind: 'quantity', name: 'speed', label: 'Speed', quantity: 'speed' },
+            { kind: 'quantity', name: 'torque', label: 'Torque', quantity: 'torque' },
+            { kind: 'quantity', name: 'current', label: 'Current', quantity: 'current' },
+            { kind: 'quantity', name: 'powerFactor', label: 'Power factor', quantity: 'ratio' },
+          ],
+        },
+        interpolationField('interpolation'),
+      ],
     },
   ],
 }

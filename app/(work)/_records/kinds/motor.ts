@@ -1,6 +1,6 @@
 import { column, type KindDescription } from '../kind-description'
 import { busField, noteField, tagField } from './fields-for-all'
-import { circuitField } from './motor-circuit'
+import { circuitField, interpolationField, saturationField, torquePointsField } from './motor-circuit'
 
 export const motor: KindDescription = {
   kind: 'motor',
@@ -58,6 +58,9 @@ export const motor: KindDescription = {
       hint: 'Multiple of rated torque.',
     },
     circuitField,
+    torquePointsField,
+    interpolationField('torqueInterpolation'),
+    saturationField,
     {
       kind: 'quantity',
       name: 'inertia',

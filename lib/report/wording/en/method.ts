@@ -49,6 +49,12 @@ export const method = {
           'Torque is the airgap power over synchronous speed.',
         ),
         'The torque is that of the airgap power; friction, windage and stray losses are not taken off it, and the losses that are not in a winding lie in R_{c}. Torque is proportional to the square of the voltage and current to the voltage. Saturation of the leakage paths makes the square optimistic at low voltage; where a motor starts below 0.85 of its rated voltage this is noted with the case.',
+        'A deep-bar cage has a resistance and a reactance that depend on slip: linear between the values at synchronous speed and those at standstill, or by the law of a bar of reduced depth ξ. A motor known by its curves has torque ∝ U², current ∝ U and the typed power factor, straight between points unless a monotone cubic is chosen; the curves are never extended beyond standstill or synchronous speed, and those that end at rated speed are closed with zero torque and the reactive part of their last current. Typed torque may replace that of a circuit, which then gives current and power factor alone.',
+        formula(
+          String.raw`k_R = \xi\,\frac{\sinh 2\xi + \sin 2\xi}{\cosh 2\xi - \cos 2\xi},\qquad k_X = \frac{3}{2\xi}\,\frac{\sinh 2\xi - \sin 2\xi}{\cosh 2\xi - \cos 2\xi},\qquad \xi = \xi_1\sqrt{|s|}`,
+          'Factors on resistance and slot reactance of a bar against its reduced depth, which goes with the root of slip.',
+        ),
+        'Where exponents of saturation are stated, current and torque follow their powers of the voltage from breakdown slip on, fading to 1 and 2 at rated slip and never above rated voltage; the input covers airgap power and the losses that go with the square of the current.',
         'Motors that run before the start are the same circuits, with their own speed, not constant loads: they slow down in the dip, draw more and deepen it. “Per cent speed” is of rated speed unless synchronous speed is named.',
       ],
     },
