@@ -13,6 +13,7 @@ import type {
   VoltAmpere,
   Watt,
 } from '../units/si'
+import type { Attempt, Contactor, Disturbance, StartAfter } from './schedule-input'
 import type { ChangeOver, FurtherStarter, StartCapacitor, StarterDuty } from './starter-input'
 
 /** A node of the network; every rating elsewhere converts with its own voltage, never with this nominal. */
@@ -206,13 +207,17 @@ export interface MotorInput {
   /** Motors with the same name here turn one shaft; each brings its own inertia and load. */
   shaft?: string
   duty:
-    | { kind: 'running'; load: LoadCurve }
+    | { kind: 'running'; load: LoadCurve; contactor?: Contactor }
     | {
         kind: 'starting'
         at: Second
         starter: Starter
         /** Speed that the load gives the shaft before the start, negative when it turns backwards; 0 where left out. */
         initialSpeed?: RadianPerSecond
+        /** The start that this one waits for; `at` is then the earliest instant. */
+        after?: StartAfter
+        /** Attempts before the one that counts, each switched off again. */
+        attempts?: readonly Attempt[]
         /** Capacitors switched with this start. */
         capacitors?: readonly StartCapacitor[]
         /** What the starting device may be asked for; left out where nothing is known. */
@@ -254,5 +259,7 @@ export interface CaseInput {
   capacitors: readonly CapacitorInput[]
   /** Connected motors only: running before the start, or started in it. */
   motors: readonly MotorInput[]
+  /** What the supply does during the run; left out where it stands still. */
+  disturbance?: Disturbance
   settings: RunSettings
 }

@@ -27,11 +27,20 @@ export type StartOutcome =
   | { kind: 'never-turned'; missing: NewtonMetre }
   /** Still on its way at the time limit, or when the network collapsed. */
   | { kind: 'timed-out'; speed: RadianPerSecond }
+  /** Switched off before it had started, as its schedule asks; from this motor's own switching-on. */
+  | { kind: 'abandoned'; at: Second; speed: RadianPerSecond }
   /** Switched itself off: the drive's undervoltage level; from this motor's own switching-on. */
   | { kind: 'tripped'; cause: 'undervoltage'; at: Second; speed: RadianPerSecond }
 
 /** How a machine that was running before the start came through it. */
-export type RunningOutcome = { kind: 'rode-through' } | { kind: 'pulled-out'; at: Second } | { kind: 'no-equilibrium' }
+export type RunningOutcome =
+  | { kind: 'rode-through' }
+  | { kind: 'pulled-out'; at: Second }
+  | { kind: 'no-equilibrium' }
+  /** Its contactor dropped out and stayed open. */
+  | { kind: 'dropped-out'; at: Second }
+  /** Its contactor dropped out and came back, and the motor is above breakdown speed again. */
+  | { kind: 're-accelerated'; droppedAt: Second; reclosedAt: Second }
 
 export type CaseOutcome =
   | { kind: 'complete' }
@@ -125,6 +134,8 @@ export interface MotorResult {
   motorId: string
   /** Exactly one of the two is present. */
   start: StartResult | null
+  /** Attempts before the start that counts, the first one first; left out where there were none. */
+  earlierAttempts?: readonly StartResult[]
   running: RunningResult | null
   speedAtEnd: RadianPerSecond
 }
@@ -149,6 +160,9 @@ export interface ChangeOverResult {
 export type Notice =
   | { kind: 'reduced-voltage-torque'; motorId: string; voltage: PerUnit }
   | { kind: 'change-over-too-early'; motorId: string }
+  /** A start waited for another that never came. */
+  | { kind: 'not-switched-on'; motorId: string; waitsFor: string }
+  | { kind: 'residual-voltage-not-modelled' }
   | { kind: 'starter-duty-exceeded'; motorId: string; time: Second }
   | { kind: 'open-transition-without-transient'; motorId: string }
   | { kind: 'levels-motors-taken-out'; level: VoltAmpere }

@@ -15,6 +15,8 @@ interface Running {
 const outcomes: Record<RunningResult['outcome']['kind'], string> = {
   'rode-through': 'rode through',
   'pulled-out': 'pulled out',
+  'dropped-out': 'dropped out, stays off',
+  're-accelerated': 'dropped out, re-accelerates',
   'no-equilibrium': 'no steady speed before the start',
 }
 

@@ -3,10 +3,18 @@ import { circuitProblem, machineProblem } from '../machines/check-machine'
 import { type Refusal, refuse } from '../network/refusal'
 import { isZero } from '../numeric/complex'
 import { capacitorsProblem, starterProblem } from '../starters/check-starter'
+import { checkSchedule } from './check-schedule'
 
 /** The first thing in a case that no calculation can be made of, or null. Values are SI. */
 export function checkCase(input: CaseInput): Refusal | null {
-  return checkBuses(input) ?? checkSupply(input) ?? checkBranches(input) ?? checkShunts(input) ?? checkMotors(input)
+  return (
+    checkBuses(input) ??
+    checkSupply(input) ??
+    checkBranches(input) ??
+    checkShunts(input) ??
+    checkMotors(input) ??
+    checkSchedule(input)
+  )
 }
 
 const bad = (buses: readonly string[], detail: string): Refusal => refuse('bad-value', buses, detail).outcome

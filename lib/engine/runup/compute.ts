@@ -1,9 +1,10 @@
 import { ohm, radianPerSecond, second, volt, voltAmpere } from '../../units/si'
-import type { CaseInput } from '../case-input'
+import type { CaseInput, MotorInput } from '../case-input'
 import type { CaseOutcome, CaseResult, Counters } from '../case-result'
 import { stepsOf } from '../starters/position'
 import { beforeStart, type NoStart, runningMotors } from './before-start'
-import type { Courses } from './course'
+import { type ContactorCourse, contactorCourse } from './contactor'
+import type { Courses, StartCourse } from './course'
 import { watch } from './extremes'
 import { notices } from './notices'
 import { createObserver, motorState, observationLength, placeOf } from './observation'
@@ -109,48 +110,62 @@ function withoutStart(input: CaseInput, { outcome, motor }: NoStart): CaseResult
 function prepareCourses(system: System, before: Float64Array): Courses {
   const { plant } = system
   const { speedCriterion } = plant.input.settings
-  return {
-    starts: plant.motors.flatMap((motor, i) => {
-      if (motor.duty.kind !== 'starting') return []
-      const { starter, capacitors } = motor.duty
-      return [
-        {
-          motor: i,
-          starter,
-          at: motor.duty.at,
-          steps: stepsOf(starter),
-          step: -1,
-          position: 'off' as const,
-          since: 0,
-          switchedOn: false,
-          turned: false,
-          undervoltage: starter.kind === 'drive' ? starter.undervoltage : null,
-          capacitors: (capacitors ?? []).map((item) => ({ item, state: 'waiting' as const })),
-          runningAt: null,
-          at95: null,
-          atCriterion: null,
-          i2t: null,
-          slipEnergy: null,
-          extraHeat: 0,
-          i2tSeen: 0,
-          extraAtCriterion: null,
-          standstill: null,
-          outcome: null,
-          speed95: 0.95 * motor.ratedSpeed,
-          speedCriterion: speedCriterion * motor.ratedSpeed,
-          watches: {
-            line: watch(placeOf(system, i, 'lineCurrent'), -1, false),
-            motor: watch(placeOf(system, i, 'motorCurrent'), -1, false),
-            voltage: watch(placeOf(system, i, 'motorVoltage'), 1, false),
-            accelerating: watch(placeOf(system, i, 'accelerating'), 1, false),
-          },
+  const starts = plant.motors.flatMap((motor, i): StartCourse[] => {
+    if (motor.duty.kind !== 'starting') return []
+    const { starter, capacitors, attempts } = motor.duty
+    return [
+      {
+        motor: i,
+        starter,
+        at: motor.duty.at,
+        steps: stepsOf(starter),
+        step: -1,
+        position: 'off' as const,
+        since: 0,
+        switchedOn: false,
+        turned: false,
+        former: null,
+        interval: 0,
+        attempts: attempts ?? [],
+        attempt: 0,
+        undervoltage: starter.kind === 'drive' ? starter.undervoltage : null,
+        capacitors: (capacitors ?? []).map((item) => ({ item, state: 'waiting' as const })),
+        runningAt: null,
+        at95: null,
+        atCriterion: null,
+        i2t: null,
+        slipEnergy: null,
+        extraHeat: 0,
+        i2tSeen: 0,
+        extraAtCriterion: null,
+        standstill: null,
+        outcome: null,
+        speed95: 0.95 * motor.ratedSpeed,
+        speedCriterion: speedCriterion * motor.ratedSpeed,
+        watches: {
+          line: watch(placeOf(system, i, 'lineCurrent'), -1, false),
+          motor: watch(placeOf(system, i, 'motorCurrent'), -1, false),
+          voltage: watch(placeOf(system, i, 'motorVoltage'), 1, false),
+          accelerating: watch(placeOf(system, i, 'accelerating'), 1, false),
         },
-      ]
-    }),
+      },
+    ]
+  })
+  for (const start of starts) {
+    const { duty } = plant.motors[start.motor]!
+    if (duty.kind !== 'starting' || !duty.after) continue
+    const { motorId, interval } = duty.after
+    start.former = starts.find(({ motor }) => plant.motors[motor]!.id === motorId) ?? null
+    start.interval = interval
+  }
+  return {
+    starts,
+    earlier: [],
     running: runningMotors(plant).map((i) => ({
       motor: i,
       before: motorState(system, before, i),
       pulledOutAt: null,
+      contactor: contactorOf(plant.motors[i]!),
       watches: {
         voltage: watch(placeOf(system, i, 'motorVoltage'), 1, true),
         speed: watch(placeOf(system, i, 'speed'), 1, true),
@@ -161,3 +176,6 @@ function prepareCourses(system: System, before: Float64Array): Courses {
     changeOvers: [],
   }
 }
+
+const contactorOf = ({ duty }: MotorInput): ContactorCourse | null =>
+  duty.kind === 'running' && duty.contactor ? contactorCourse(duty.contactor) : null

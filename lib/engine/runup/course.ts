@@ -1,7 +1,9 @@
 import type { Starter } from '../case-input'
 import type { ChangeOverResult, MotorState, StartOutcome } from '../case-result'
+import type { Attempt } from '../schedule-input'
 import type { StartCapacitor } from '../starter-input'
 import type { Position, Step, Until } from '../starters/position'
+import type { ContactorCourse } from './contactor'
 import type { Watch } from './extremes'
 
 /** How far one start has come. Instants are case time, s; null until reached. */
@@ -18,6 +20,12 @@ export interface StartCourse {
   switchedOn: boolean
   turned: boolean
   runningAt: number | null
+  /** The start that this one waits for and the least time after its switching-on. */
+  former: StartCourse | null
+  interval: number
+  /** Attempts before the one that counts, and which one this is. */
+  attempts: readonly Attempt[]
+  attempt: number
   /** Line voltage in V below which its drive switches itself off; null for other devices. */
   undervoltage: number | null
   /** Capacitors switched with the start: null while they wait, then whether they are in. */
@@ -48,6 +56,7 @@ export interface RunningCourse {
   before: MotorState
   /** Instant of the last fall below breakdown speed; null while above it. */
   pulledOutAt: number | null
+  contactor: ContactorCourse | null
   watches: { voltage: Watch; speed: Watch; current: Watch }
 }
 
@@ -59,6 +68,8 @@ export interface BusWatches {
 /** Everything noted on the way through a run. */
 export interface Courses {
   starts: readonly StartCourse[]
+  /** Attempts that are over. */
+  earlier: StartCourse[]
   running: readonly RunningCourse[]
   buses: readonly BusWatches[]
   changeOvers: ChangeOverResult[]

@@ -3,6 +3,7 @@ import { findRoot } from '../numeric/root'
 import { codes } from '../starters/connection'
 import type { Until } from '../starters/position'
 import { excessOf, isElectrical } from './condition'
+import { contactorExcess } from './contactor'
 import { type Courses, type StartCourse, untilOf } from './course'
 import { rampEnd } from './schedule'
 import type { System } from './system'
@@ -19,6 +20,8 @@ export type CrossingKind =
   | 'change-over'
   | 'capacitor'
   | 'undervoltage'
+  /** The voltage that the contactor of a running motor waits for. */
+  | 'contactor'
   | 'pull-out'
   | 'recovery'
 
@@ -66,13 +69,14 @@ function candidates(system: System, courses: Courses, { state, time }: Integrato
     if (piece > 0 && speed < corners[piece - 1]!) note(i, 'corner-down', corners[piece - 1]!)
   }
   for (const start of courses.starts) {
-    if (system.resting[start.motor]) continue
+    if (system.resting[start.motor] || !start.switchedOn) continue
     const speed = state[start.motor]!
     if (start.at95 === null && speed >= start.speed95) note(start.motor, 'at-95', start.speed95)
     if (start.atCriterion === null && speed >= start.speedCriterion)
       note(start.motor, 'criterion', start.speedCriterion)
   }
   for (const start of courses.starts) found.push(...conditionsMet(system, start, state, time))
+  found.push(...contactorsMoved(system, courses, state, time))
   for (const { motor, pulledOutAt } of courses.running) {
     if (system.resting[motor]) continue
     const limit = system.plant.breakdownSpeed[motor]!
@@ -114,6 +118,28 @@ function conditionsMet(system: System, start: StartCourse, state: Float64Array, 
     if (excess(state) > 0) found.push({ motor, kind: 'undervoltage', speed: null, excess, capacitor: -1, at: 0 })
   }
   return found
+}
+
+/** Contactors of running motors whose voltage the end of a step meets. */
+function contactorsMoved(system: System, courses: Courses, state: Float64Array, t: number): Crossing[] {
+  const watched = courses.running.filter(({ contactor }) => contactor !== null)
+  if (watched.length === 0) return []
+  const excessOfCourse =
+    ({ motor, contactor }: Courses['running'][number]) =>
+    (at: Float64Array): number =>
+      system.solveAt(at) ? contactorExcess(contactor!, Math.sqrt(system.busSquare[motor]!)) : Number.NEGATIVE_INFINITY
+  system.setTime(t)
+  if (!system.solveAt(state)) return []
+  return watched
+    .filter(({ motor, contactor }) => contactorExcess(contactor!, Math.sqrt(system.busSquare[motor]!)) > 0)
+    .map((course) => ({
+      motor: course.motor,
+      kind: 'contactor' as const,
+      speed: null,
+      excess: excessOfCourse(course),
+      capacitor: -1,
+      at: 0,
+    }))
 }
 
 function locate(system: System, integrator: Integrator, crossing: Crossing, scratch: Float64Array): number {

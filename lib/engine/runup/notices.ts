@@ -17,7 +17,15 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
   const { plant } = system
   const found: Notice[] = []
   if (source.takenOut !== null) found.push({ kind: 'levels-motors-taken-out', level: source.takenOut })
+  if (plant.input.disturbance?.remaining === 0) found.push({ kind: 'residual-voltage-not-modelled' })
   for (const start of courses.starts) {
+    const former = start.switchedOn ? null : start.former
+    if (former !== null)
+      found.push({
+        kind: 'not-switched-on',
+        motorId: plant.motors[start.motor]!.id,
+        waitsFor: plant.motors[former.motor]!.id,
+      })
     const motor = plant.motors[start.motor]!
     if (start.standstill !== null && start.starter.kind !== 'drive') {
       const share = start.starter.kind === 'star-delta' ? Math.sqrt(1 / 3) : 1

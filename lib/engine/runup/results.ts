@@ -16,6 +16,7 @@ import type {
   MotorResult,
   MotorSeries,
   PlaceResult,
+  RunningOutcome,
   RunningResult,
   StartResult,
 } from '../case-result'
@@ -43,7 +44,7 @@ export function placeResults(
   const before = sampleAt(record.samples, 0)
   const first = record.first ?? (courses.starts.length === 0 ? before : null)
   if (first === null) return []
-  const none = courses.starts.length === 0
+  const none = courses.starts.length === 0 && record.first === null
   return buses.map((bus, b) => {
     const { deepest, highest } = courses.buses[b]!
     return {
@@ -75,9 +76,23 @@ export function motorResults(
     const shared = { motorId: motor.id, speedAtEnd: speedOf(i) }
     if (running) return [{ ...shared, start: null, running: runningResult(running, record, settledSpeed(i)) }]
     if (!start || start.standstill === null) return []
-    return [{ ...shared, start: startResult(system, start, record, speedOf(i), settledSpeed(i)), running: null }]
+    const earlier = courses.earlier
+      .filter((each) => each.motor === i && each.standstill !== null)
+      .map((each) => startResult(system, each, record, speedWhenOff(each, speedOf(i)), null))
+    return [
+      {
+        ...shared,
+        start: startResult(system, start, record, speedOf(i), settledSpeed(i)),
+        ...(earlier.length > 0 && { earlierAttempts: earlier }),
+        running: null,
+      },
+    ]
   })
 }
+
+/** Speed at which an earlier attempt ended short of the criterion. */
+const speedWhenOff = ({ outcome }: StartCourse, otherwise: RadianPerSecond): RadianPerSecond =>
+  outcome !== null && 'speed' in outcome ? outcome.speed : otherwise
 
 function startResult(
   system: System,
@@ -136,11 +151,20 @@ function heatUsed(system: System, i: number, i2t: number, slipEnergy: number): H
   return { byCurrent, byRotor, figure, state }
 }
 
+function runningOutcome({ pulledOutAt, contactor }: RunningCourse): RunningOutcome {
+  const { droppedAt, reclosedAt } = contactor ?? { droppedAt: null, reclosedAt: null }
+  if (droppedAt !== null && (reclosedAt === null || reclosedAt < droppedAt))
+    return { kind: 'dropped-out', at: second(droppedAt) }
+  if (pulledOutAt !== null) return { kind: 'pulled-out', at: second(pulledOutAt) }
+  if (droppedAt === null || reclosedAt === null) return { kind: 'rode-through' }
+  return { kind: 're-accelerated', droppedAt: second(droppedAt), reclosedAt: second(reclosedAt) }
+}
+
 function runningResult(running: RunningCourse, record: RunRecord, settledSpeed: RadianPerSecond | null): RunningResult {
-  const { watches, before, motor, pulledOutAt } = running
+  const { watches, before, motor } = running
   const none = Number.isNaN(watches.voltage.value)
   return {
-    outcome: pulledOutAt === null ? { kind: 'rode-through' } : { kind: 'pulled-out', at: second(pulledOutAt) },
+    outcome: runningOutcome(running),
     before,
     lowestVoltage: none ? { voltage: before.motorVoltage, at: second(0) } : voltageAt(watches.voltage),
     lowestSpeed: none

@@ -9,6 +9,8 @@ export const sameInstant = 1e-12
 export interface Move {
   start: StartCourse
   capacitor: number | null
+  /** The motor was taken off the line. */
+  off?: true
 }
 
 /** Brings a starting device into its next position, and the watches of its motor with it. */
@@ -46,7 +48,10 @@ function setCapacitors(system: System, start: StartCourse): void {
 
 /** When the present position of a start is left by time; null when it waits for something else or is kept. */
 function dueAt(start: StartCourse): number | null {
-  if (!start.switchedOn) return start.at
+  if (!start.switchedOn) {
+    if (start.former === null) return start.at
+    return start.former.outcome?.kind === 'started' ? Math.max(start.at, start.former.at + start.interval) : null
+  }
   const until = untilOf(start)
   if (until?.kind === 'after') return start.since + until.time
   return until?.kind === 'time' ? Math.max(start.since, start.at + until.at) : null
@@ -72,6 +77,7 @@ export function switchDue(system: System, starts: readonly StartCourse[], t: num
   for (const start of starts) {
     const fresh = !start.switchedOn
     if (isDue(dueAt(start))) {
+      if (fresh) start.at = t
       start.switchedOn = true
       moves.push(advance(system, start, t))
     }
@@ -90,8 +96,20 @@ export const rampEnd = (start: StartCourse): number => {
   return step === undefined || rampOf(step) === 0 ? Number.NEGATIVE_INFINITY : start.since + rampOf(step)
 }
 
-/** Earliest switching, end of a ramp or time limit after t, or the horizon. */
-export function nextInstant(starts: readonly StartCourse[], t: number, timeLimit: number, horizon: number): number {
+/** Whether a start waits for one that has ended without starting, or that waits so itself. */
+export const isForlorn = ({ former, switchedOn }: StartCourse): boolean =>
+  !switchedOn &&
+  former !== null &&
+  (isForlorn(former) || (former.outcome !== null && former.outcome.kind !== 'started'))
+
+/** Earliest switching, end of a ramp, of an attempt or time limit after t, one of the others given, or the horizon. */
+export function nextInstant(
+  starts: readonly StartCourse[],
+  others: readonly (number | null)[],
+  t: number,
+  timeLimit: number,
+  horizon: number,
+): number {
   let next = horizon
   const consider = (instant: number | null): void => {
     if (instant !== null && instant > t + sameInstant && instant < next) next = instant
@@ -100,7 +118,8 @@ export function nextInstant(starts: readonly StartCourse[], t: number, timeLimit
     consider(dueAt(start))
     for (let c = 0; c < start.capacitors.length; c++) consider(capacitorDue(start, c))
     consider(rampEnd(start))
-    if (start.outcome === null) consider(start.at + timeLimit)
+    if (start.outcome === null && start.switchedOn) consider(start.at + timeLimit)
   }
+  for (const other of others) consider(other)
   return next
 }

@@ -5,9 +5,12 @@ import { breakdownSlip } from '../machines/breakdown-slip'
 import { evaluateMachine } from '../machines/machine-table'
 import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
+import { attemptEnd, endAttempts } from './attempts'
 import { type BeforeStart, supplyPower, weakestBus } from './before-start'
+import { contactorDue, noteVoltage, switchContactors } from './contactor'
 import { type Courses, type StartCourse, untilOf } from './course'
 import { type Crossing, firstCrossings } from './crossing'
+import { createDisturbance } from './disturbance'
 import { findBalance, findHang, hangOutcome } from './hang'
 import { busVoltages, motorState, placeOf } from './observation'
 import { createRecorder } from './recorder'
@@ -15,6 +18,7 @@ import type { SampleStore } from './sampler'
 import {
   advance,
   awaitsCapacitor,
+  isForlorn,
   type Move,
   nextInstant,
   rampEnd,
@@ -75,6 +79,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const recorder = createRecorder(system, courses, integrator)
   const { now } = recorder
   const scratch = new Float64Array(system.stateLength)
+  const disturbance = createDisturbance(system)
   let first: Float64Array | null = null
   let firstPower: Complex | null = null
   let lastHangTorque = Number.POSITIVE_INFINITY
@@ -117,7 +122,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     }
     for (const move of moved) {
       const { start } = move
-      if (start.standstill === null) start.standstill = motorState(system, now, start.motor)
+      if (start.standstill === null && !move.off) start.standstill = motorState(system, now, start.motor)
       else noteChangeOver(move, t)
     }
     return integrator.restart(t, 0)
@@ -146,7 +151,9 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   }
 
   function giveUp(t: number): void {
-    const late = starts.filter((start) => start.outcome === null && t >= start.at + timeLimit - sameInstant)
+    const late = starts.filter(
+      (start) => start.switchedOn && start.outcome === null && t >= start.at + timeLimit - sameInstant,
+    )
     if (late.length === 0) return
     judgeHanging(late)
     for (const start of late) if (system.resting[start.motor]) start.outcome ??= hangOutcome(system, start, state)
@@ -170,6 +177,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
         if (kind === 'stand') stood = true
       }
       const running = courses.running.find((each) => each.motor === motor)
+      if (running?.contactor && kind === 'contactor') noteVoltage(running.contactor, t)
       if (running && kind === 'pull-out') running.pulledOutAt = t
       if (running && kind === 'recovery') running.pulledOutAt = null
       const start = starts.find((each) => each.motor === motor)
@@ -223,10 +231,13 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   /** Whether the run is over: starts resolved and shafts settled, or every open start hanging. */
   function isOver(t: number): boolean {
-    if (starts.some((start) => untilOf(start)?.kind === 'after' || !start.switchedOn)) return false
+    if (starts.some((start) => untilOf(start)?.kind === 'after' || (!start.switchedOn && !isForlorn(start))))
+      return false
+    if (starts.some((start) => attemptEnd(start) !== null) || disturbance.nextAt() !== null) return false
+    if (courses.running.some(({ contactor }) => contactor !== null && contactorDue(contactor) !== null)) return false
     if (starts.some((start) => awaitsCapacitor(start, t))) return false
     const torque = restlessness()
-    const open = starts.filter((start) => start.outcome === null)
+    const open = starts.filter((start) => start.outcome === null && start.switchedOn)
     // A start that was given up goes on turning: there is no settled plant to wait for.
     const givenUp = starts.some(({ outcome }) => outcome?.kind === 'timed-out' || outcome?.kind === 'tripped')
     if (open.length === 0) return givenUp || torque < settledTorque
@@ -260,24 +271,34 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     return integrator.restart(until, 0) && recorder.begin(until)
   }
 
+  const otherInstants = (): (number | null)[] => [
+    disturbance.nextAt(),
+    ...starts.map(attemptEnd),
+    ...courses.running.map(({ contactor }) => (contactor === null ? null : contactorDue(contactor))),
+  ]
+
   /** An active load that the motor cannot hold drives its shaft beyond any speed that its curve means. */
   const runsAway = (): boolean =>
     plant.driven.some((load, i) => load.active && Math.abs(state[i]!) > farthest * plant.synchronous[i]!)
 
   system.piece.set(plant.driven.map((load, i) => pieceAt(load, state[i]!)))
   if (!recorder.begin(0)) return collapsed(0)
-  if (starts.length === 0) return result({ kind: 'settled', at: 0 })
-  const firstAt = Math.min(...starts.map((start) => start.at))
-  const horizon = Math.max(...starts.map((start) => start.at)) + 2 * timeLimit
+  if (starts.length === 0 && disturbance.nextAt() === null) return result({ kind: 'settled', at: 0 })
+  const firstAt = Math.min(
+    disturbance.nextAt() ?? Number.POSITIVE_INFINITY,
+    ...starts.filter(({ former }) => former === null).map((start) => start.at),
+  )
+  const horizon = latestEnd(starts, disturbance.endsAt, timeLimit)
   if (firstAt > 0 && !recorder.begin(firstAt)) return collapsed(firstAt)
   for (const bus of courses.buses) bus.deepest.active = true
+  disturbance.act(firstAt)
   if (!afterSwitching(firstAt, switchDue(system, starts, firstAt))) return collapsed(firstAt)
 
   for (;;) {
     const from = integrator.time
     if (from >= horizon || integrator.counters.steps > mostSteps || runsAway())
       return result({ kind: 'horizon', at: from })
-    const until = nextInstant(starts, from, timeLimit, horizon)
+    const until = nextInstant(starts, otherInstants(), from, timeLimit, horizon)
     let crossings: Crossing[] = []
     let letGo = false
     let stride = 0
@@ -299,10 +320,15 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     const t = integrator.time
     for (const start of starts) noteHeat(start, state[system.integral[start.motor]!]!)
     const { moved, halted, stood } = act(crossings, t)
+    moved.push(...endAttempts(system, courses, state, t))
     moved.push(...switchDue(system, starts, t))
     judgeStarted()
+    // A start that another waited for lets it go at the same instant.
+    moved.push(...switchDue(system, starts, t))
+    const disturbed = disturbance.act(t)
+    const contactors = switchContactors(system, courses.running, t)
     giveUp(t)
-    if (moved.length > 0 || halted.size > 0 || letGo || stood) {
+    if (moved.length > 0 || halted.size > 0 || letGo || stood || disturbed || contactors) {
       if (!afterSwitching(t, moved, halted)) return collapsed(t)
       judgeStarted()
     } else if (starts.some((start) => Math.abs(rampEnd(start) - t) < sameInstant)) {
@@ -310,6 +336,17 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     } else if (crossings.length > 0 && !integrator.restart(t, stride)) return collapsed(t)
     if (isOver(t)) return result({ kind: 'settled', at: t })
   }
+}
+
+/** An instant after which nothing can be pending: every start after the other, every attempt, the disturbance. */
+function latestEnd(starts: readonly StartCourse[], disturbed: number, timeLimit: number): number {
+  let end = disturbed
+  for (const { at, interval, former, attempts } of starts) {
+    end = Math.max(end, at)
+    if (former !== null) end += interval + timeLimit
+    for (const { runFor, rest } of attempts) end += runFor + rest
+  }
+  return end + 2 * timeLimit
 }
 
 /** Breakdown speed of a motor with what is in its rotor circuit now, rad/s. */

@@ -33,6 +33,8 @@ export interface System {
   driven: readonly LoadSegments[]
   /** Brings a motor into a position of its starting device at case time t, or off the line. */
   move(motor: number, step: Pick<Step, 'link' | 'rotorResistance'> | null, t: number): void
+  /** EMF in parts of that before the start; 0 takes the plant off its supply. */
+  setSource(part: number): void
   /** Case time that `solveAt` holds for; ramps of starting devices look at it. */
   setTime(t: number): void
   /** Solves the network with every motor at the given speed (rad/s); false where there is no solution. */
@@ -152,7 +154,22 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     return false
   }
 
+  /** EMF before a disturbance, and the last voltages with supply: from them the search goes on afterwards. */
+  let emf: readonly [number, number] | null = null
+  let dead = false
+  const lastVoltage = new Float64Array(voltage.length)
+
+  /** A plant without supply: no voltage, no current, no torque. Residual voltages of motors are left out. */
+  function withoutSupply(): void {
+    voltage.fill(0)
+    for (const each of [torque, slipLoss, busSquare, currentSquare, lineSquare]) each.fill(0)
+  }
+
   function solveAt(speeds: Float64Array): boolean {
+    if (dead) {
+      withoutSupply()
+      return true
+    }
     shunt.fill(0)
     for (let i = 0; i < count; i++) {
       if (connection.code[i] === 0) continue
@@ -234,6 +251,19 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     },
     setTime(t) {
       time = t
+    },
+    setSource(part) {
+      emf ??= [driven[0]!, driven[1]!]
+      if (dead) {
+        voltage.set(lastVoltage)
+        plant.motors.forEach((motor, i) => {
+          busSquare[i] = motor.ratedVoltage ** 2
+        })
+        solver.resume()
+      }
+      dead = part === 0
+      if (dead) lastVoltage.set(voltage)
+      driven.set([part * emf[0], part * emf[1]])
     },
     solveAt,
     derivative(t, state, rate) {

@@ -10,6 +10,10 @@ export const noticeSentence = (notice: Notice, document: StudyDocument): string 
       return `${motorTag(document, notice.motorId)} starts at ${printQuantity(notice.voltage, 'ratio', { unit: '%', digits: 3 })} of its rated voltage: torque taken as the square of voltage is optimistic there; hold the sensitivity with the exponent 2.25 against it.`
     case 'change-over-too-early':
       return `${motorTag(document, notice.motorId)} changes over while its slip is above breakdown: the current and the dip after the change-over are near those of a direct start.`
+    case 'not-switched-on':
+      return `${motorTag(document, notice.motorId)} is not switched on: it waits for ${motorTag(document, notice.waitsFor)}, which does not start.`
+    case 'residual-voltage-not-modelled':
+      return 'The supply is away for a time. Motors that still turn hold a voltage of their own when it comes back; closing on it is not in this model and can draw more current and torque than a start.'
     case 'starter-duty-exceeded':
       return `${motorTag(document, notice.motorId)} asks more of its starting device than its duty allows: ${printQuantity(notice.time, 'time', { unit: 's', decimals: 1 })} outside the running position, or more starts an hour.`
     case 'open-transition-without-transient':

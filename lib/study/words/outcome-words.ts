@@ -15,6 +15,7 @@ export const startOutcomeWords: Record<StartOutcome['kind'], string> = {
   'never-turned': 'never turned',
   'timed-out': 'timed out',
   tripped: 'tripped',
+  abandoned: 'abandoned',
 }
 
 /** How a start ended, in one sentence about the motor. */
@@ -32,6 +33,8 @@ export const startOutcomeSentence = (outcome: StartOutcome, motor: string): stri
       return `${motor} does not turn; ${torque(outcome.missing)} are missing to break away.`
     case 'timed-out':
       return `${motor} is at ${speed(outcome.speed)} when the time limit ends the start.`
+    case 'abandoned':
+      return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}, before it has started.`
     case 'tripped':
       return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}: the line voltage falls below the undervoltage level of its drive.`
   }
@@ -46,6 +49,10 @@ export const runningOutcomeSentence = (outcome: RunningOutcome, motor: string): 
       return `${motor} pulls out ${seconds(outcome.at)} after the first switching-on.`
     case 'no-equilibrium':
       return `${motor} has no steady speed before the start.`
+    case 'dropped-out':
+      return `${motor} loses its contactor ${seconds(outcome.at)} into the run and stays off.`
+    case 're-accelerated':
+      return `${motor} loses its contactor at ${seconds(outcome.droppedAt)}, is back on at ${seconds(outcome.reclosedAt)} and re-accelerates.`
   }
 }
 
