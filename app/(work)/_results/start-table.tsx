@@ -8,12 +8,22 @@ import { type FigureRow, FigureTable } from './figure-table'
 import * as print from './print'
 
 interface Item {
+  key: string
   motorId: string
+  /** Which attempt, from 1; null where there was one only. */
+  attempt: number | null
   start: StartResult
   ratedVoltage: number
 }
 
 const { current, energy, orDash, percent, seconds, speed, torque, voltage } = print
+
+const dutyWords = {
+  within: 'within its limits',
+  exceeded: 'exceeded',
+  'not-assessed': 'not assessed: not stated',
+  none: '–',
+}
 
 const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
   { label: 'Outcome', print: ({ start }) => startOutcomeWords[start.outcome.kind] },
@@ -58,6 +68,11 @@ const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
     label: `Time to ${document.settings.speedCriterion.text} of rated speed, from switching on`,
     print: ({ start }) => orDash(start.timeToCriterion, seconds),
   },
+  {
+    label: 'Starting device, time outside its running position',
+    print: ({ start }) => orDash(start.device?.time ?? null, seconds),
+  },
+  { label: 'Duty of the starting device', print: ({ start }) => dutyWords[start.device?.verdict ?? 'none'] },
   { label: 'Settled speed', print: ({ start }) => orDash(start.settledSpeed, speed) },
   {
     label: 'I²t of the motor current to the speed criterion',
@@ -81,16 +96,23 @@ const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
 
 /** Everything about the motors that are started in the case. */
 export function StartTable({ document, result }: { document: StudyDocument; result: CaseSummary }) {
-  const items = result.motors.flatMap(({ motorId, start }): Item[] => {
+  const items = result.motors.flatMap(({ motorId, start, earlierAttempts }): Item[] => {
     const ratedVoltage = document.plant.motors.find(({ id }) => id === motorId)?.ratedVoltage.si ?? Number.NaN
-    return start ? [{ motorId, start, ratedVoltage }] : []
+    const all = [...(earlierAttempts ?? []), ...(start ? [start] : [])]
+    return all.map((each, i) => ({
+      key: `${motorId}-${i}`,
+      motorId,
+      attempt: all.length > 1 ? i + 1 : null,
+      start: each,
+      ratedVoltage,
+    }))
   })
   return (
     <FigureTable
       caption="Starting motors"
       items={items}
-      itemId={({ motorId }) => motorId}
-      name={({ motorId }) => motorTag(document, motorId)}
+      itemId={({ key }) => key}
+      name={({ motorId, attempt }) => `${motorTag(document, motorId)}${attempt === null ? '' : `, attempt ${attempt}`}`}
       rows={rowsFor(document)}
     />
   )

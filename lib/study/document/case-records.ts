@@ -25,17 +25,6 @@ export const plantConditionRecord = z.strictObject({
   note,
 })
 
-export const scheduleRecord = z.strictObject({
-  id: recordId,
-  tag,
-  starts: z
-    .array(z.strictObject({ motor: recordId, at: entered('time'), starter: recordId }))
-    .min(1)
-    .max(50)
-    .describe('Which motors start, when, and by which method.'),
-  note,
-})
-
 /** Curve of each driven load while its motor starts and once the process is on. */
 export const loadConditionRecord = z.strictObject({
   id: recordId,

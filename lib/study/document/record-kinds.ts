@@ -1,8 +1,9 @@
-import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord } from './case-records'
+import { caseRecord, loadConditionRecord, plantConditionRecord } from './case-records'
 import { drivenLoadRecord } from './driven-load-record'
 import { limitRecord } from './limit-record'
 import { motorRecord } from './machine-records'
 import { busRecord, capacitorRecord, lineRecord, loadRecord, supplyRecord, transformerRecord } from './network-records'
+import { scheduleRecord } from './schedule-record'
 import { starterRecord } from './starter-record'
 
 /** Kinds of plant record and the schema of each; a plant is shared by the studies of its project. */

@@ -1,10 +1,11 @@
 import * as z from 'zod'
-import { caseRecord, loadConditionRecord, plantConditionRecord, scheduleRecord } from './case-records'
+import { caseRecord, loadConditionRecord, plantConditionRecord } from './case-records'
 import { drivenLoadRecord } from './driven-load-record'
 import { entered } from './entered'
 import { limitRecord } from './limit-record'
 import { motorRecord } from './machine-records'
 import { busRecord, capacitorRecord, lineRecord, loadRecord, supplyRecord, transformerRecord } from './network-records'
+import { scheduleRecord } from './schedule-record'
 import { starterRecord } from './starter-record'
 
 const text = (max: number) => z.string().max(max).default('')

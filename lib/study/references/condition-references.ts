@@ -1,7 +1,8 @@
 import type { FieldIssue } from '../../errors'
 import type { StudyDocument } from '../document/study-document'
-import { known, repeated, unless } from './issue'
+import { known, once, unless } from './issue'
 import { curveOf, type RecordIndex } from './record-index'
+import { scheduleReferences } from './schedule-references'
 
 type Path = FieldIssue['path']
 
@@ -18,12 +19,6 @@ const motorAndCurve = (index: RecordIndex, who: string, motor: string, curve: st
     `${who} asks for curve “${curve}” of motor ${tag}, which its driven load does not have; choose one of its curves.`,
   )
 }
-
-const once = (entries: readonly { motor: string }[], path: Path, who: string): FieldIssue[] =>
-  repeated(entries, ({ motor }) => motor).map((i) => ({
-    path: [...path, i, 'motor'],
-    message: `Motor “${entries[i]?.motor}” stands twice in ${who}; remove one of the two.`,
-  }))
 
 const plantConditions = ({ plant }: StudyDocument, index: RecordIndex): FieldIssue[] =>
   plant.plantConditions.flatMap((condition, i) => {
@@ -57,18 +52,9 @@ const loadConditions = ({ plant }: StudyDocument, index: RecordIndex): FieldIssu
     ]
   })
 
-const schedules = ({ schedules }: StudyDocument, index: RecordIndex): FieldIssue[] =>
-  schedules.flatMap(({ tag, starts }, i) => [
-    ...once(starts, ['schedules', i, 'starts'], `Schedule ${tag}`),
-    ...starts.flatMap(({ motor, starter }, k) => [
-      ...known(index.motors, motor, ['schedules', i, 'starts', k, 'motor'], `Schedule ${tag}`, 'motor'),
-      ...known(index.starters, starter, ['schedules', i, 'starts', k, 'starter'], `Schedule ${tag}`, 'starting method'),
-    ]),
-  ])
-
 /** References of what runs, what starts and what is driven. */
 export const conditionReferences = (document: StudyDocument, index: RecordIndex): FieldIssue[] => [
   ...plantConditions(document, index),
   ...loadConditions(document, index),
-  ...schedules(document, index),
+  ...scheduleReferences(document, index),
 ]

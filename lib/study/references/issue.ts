@@ -29,3 +29,10 @@ export const repeated = <T>(entries: readonly T[], keyOf: (entry: T) => string):
     return []
   })
 }
+
+/** Each motor once in a list. */
+export const once = (entries: readonly { motor: string }[], path: FieldIssue['path'], who: string): FieldIssue[] =>
+  repeated(entries, ({ motor }) => motor).map((i) => ({
+    path: [...path, i, 'motor'],
+    message: `Motor “${entries[i]?.motor}” stands twice in ${who}; remove one of the two.`,
+  }))

@@ -6,6 +6,7 @@ import { curveOf, type RecordIndex } from '../references/record-index'
 import { lineInput, transformerInput } from './branch-inputs'
 import { loadCurveInput } from './load-curve-input'
 import { motorInput } from './motor-input'
+import { contactorInput, disturbanceInput, startOrderInput } from './schedule-input'
 import { capacitorInput, staticLoadInput } from './shunt-inputs'
 import { startCapacitorInput, starterDutyInput, starterInput } from './starter-input'
 import { supplyInput } from './supply-input'
@@ -25,13 +26,15 @@ const runningDuties = (record: CaseRecord, index: RecordIndex): Duties =>
     motorId: motor,
     duty: {
       kind: 'running',
+      ...contactorInput(index.schedules.get(record.schedule), index.motors.get(motor)),
       load: loadCurveInput(found(curveOf(index, motor, curve), record.id), index.loadOfMotor.get(motor)?.gear),
     },
   }))
 
 const startingDuties = ({ settings, frequency }: StudyDocument, record: CaseRecord, index: RecordIndex): Duties => {
   const { curves } = found(index.loadConditions.get(record.loadCondition), record.id)
-  return found(index.schedules.get(record.schedule), record.id).starts.map(({ motor, at, starter }) => {
+  return found(index.schedules.get(record.schedule), record.id).starts.map((start) => {
+    const { motor, at, starter } = start
     const { starting, process } = found(
       curves.find((one) => one.motor === motor),
       record.id,
@@ -45,6 +48,7 @@ const startingDuties = ({ settings, frequency }: StudyDocument, record: CaseReco
       duty: {
         kind: 'starting',
         at: second(at.si),
+        ...startOrderInput(start),
         starter: starterInput(device, found(index.motors.get(motor), record.id), frequency.si),
         ...(device.capacitors.length > 0 && { capacitors: device.capacitors.map(startCapacitorInput) }),
         ...(starterDuty && { starterDuty }),
@@ -65,6 +69,7 @@ export const caseInputOf = (
   const { plant, settings, frequency } = document
   const condition = found(index.plantConditions.get(record.plantCondition), record.id)
   const supply = found(index.supplies.get(record.supply), record.id)
+  const disturbance = disturbanceInput(index.schedules.get(record.schedule))
   const circuitOf = (motorId: string) => found(circuits.get(motorId), `motor ${motorId}`)
   return {
     id: record.id,
@@ -91,6 +96,7 @@ export const caseInputOf = (
         settings,
       }),
     ),
+    ...(disturbance && { disturbance }),
     settings: {
       speedCriterion: perUnit(settings.speedCriterion.si),
       timeLimit: second(settings.timeLimit.si),

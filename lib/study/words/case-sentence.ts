@@ -11,15 +11,28 @@ const unique = (words: readonly string[]): string[] => [...new Set(words)]
 const starts = (record: CaseRecord, document: StudyDocument): string => {
   const schedule = document.schedules.find(({ id }) => id === record.schedule)
   const groups = new Map<string, string[]>()
-  for (const { motor, starter, at } of schedule?.starts ?? []) {
+  for (const { motor, starter, at, after, attempts } of schedule?.starts ?? []) {
     const method = document.plant.starters.find(({ id }) => id === starter)
-    const when = at.si === 0 ? '' : `, ${at.text} later`
+    const fixed = at.si === 0 ? '' : `, ${at.text} later`
+    const waiting = after && `, after ${motorTag(document, after.motor)} and at least ${after.interval.text} later`
+    const again =
+      attempts.length === 0 ? '' : `, with ${attempts.length} earlier ${attempts.length === 1 ? 'attempt' : 'attempts'}`
+    const when = (waiting ?? fixed) + again
     const key = `${method ? starterPhrase(method) : starter}${when}`
     groups.set(key, [...(groups.get(key) ?? []), motorTag(document, motor)])
   }
   return listed(
     [...groups].map(([how, tags]) => `${listedTags(tags)} started ${tags.length > 1 ? 'together ' : ''}${how}`),
   )
+}
+
+/** A dip of the supply in words; empty where there is none. */
+const dip = (record: CaseRecord, document: StudyDocument): string => {
+  const disturbance = document.schedules.find(({ id }) => id === record.schedule)?.disturbance
+  if (!disturbance) return ''
+  const { at, duration, remaining } = disturbance
+  const what = remaining.si === 0 ? 'supply away' : `supply at ${remaining.text}`
+  return `${what} for ${duration.text}${at.si === 0 ? '' : `, beginning at ${at.text}`}`
 }
 
 const running = (record: CaseRecord, document: StudyDocument): string => {
@@ -51,8 +64,9 @@ const loads = (record: CaseRecord, document: StudyDocument): string => {
 export const caseSentence = (record: CaseRecord, document: StudyDocument): string => {
   const changes = record.changes.map((change) => changePhrase(change, document))
   const load = loads(record, document)
+  const happening = [starts(record, document), dip(record, document)].filter((part) => part !== '')
   return [
-    `${starts(record, document)} on the ${supplyTag(document, record.supply)} supply ${running(record, document)}`,
+    `${listed(happening)} on the ${supplyTag(document, record.supply)} supply ${running(record, document)}`,
     ...(load === '' ? [] : [load]),
     ...(changes.length === 0 ? [] : [listed(changes)]),
   ].join('; ')

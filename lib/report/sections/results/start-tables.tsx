@@ -12,6 +12,8 @@ import { computedRuns, roles, runsOf } from '../../values/roles'
 
 interface Start {
   record: CaseRecord
+  /** Which attempt, from 1; null where there was one only. */
+  attempt: number | null
   result: CaseResult
   motor: MotorResult
   start: StartResult
@@ -21,7 +23,10 @@ interface Start {
 const byRole = (context: ReportContext, row: (start: Start) => Row): readonly Row[] =>
   roles.flatMap((role): readonly Row[] => {
     const starts = computedRuns(runsOf(context.input, [role])).flatMap(({ record, result }) =>
-      result.motors.flatMap((motor) => (motor.start ? [{ record, result, motor, start: motor.start }] : [])),
+      result.motors.flatMap((motor) => {
+        const all = [...(motor.earlierAttempts ?? []), ...(motor.start ? [motor.start] : [])]
+        return all.map((start, i) => ({ record, result, motor, start, attempt: all.length > 1 ? i + 1 : null }))
+      }),
     )
     return starts.length === 0 ? [] : [{ title: context.words.records.cases.roles[role] }, ...starts.map(row)]
   })
@@ -42,6 +47,10 @@ export const supplyPlace = ({ input, words }: ReportContext): string => {
   return only === undefined ? words.results.supplyBus : busTag(input.document, only)
 }
 
+/** The motor of a start, with its attempt where there were several. */
+const whose = ({ motor, attempt }: Start, { input }: ReportContext): string =>
+  motorTag(input.document, motor.motorId) + (attempt === null ? '' : ` · ${attempt}`)
+
 const title = ({ record }: Start) => ({ text: record.tag, weight: 'semibold' as const })
 
 export const startTable = (context: ReportContext): readonly ReactElement[] => {
@@ -53,7 +62,7 @@ export const startTable = (context: ReportContext): readonly ReactElement[] => {
     const { standstill, leastAccelerating, outcome } = start
     return [
       title(one),
-      motorTag(input.document, motor.motorId),
+      whose(one, context),
       startOutcomeWords[outcome.kind],
       percent(changeAtSupply(result)),
       percent(standstill.motorVoltage / ratedVoltage(context, motor.motorId), 1),
@@ -93,7 +102,7 @@ export const startTable = (context: ReportContext): readonly ReactElement[] => {
 }
 
 export const energyTable = (context: ReportContext): ReactElement => {
-  const { paper, input, words, width } = context
+  const { paper, words, width } = context
   const { energyHeads: heads } = words.results.starts
   const right = 'right' as const
   const at = (figure: string, time: number) => `${figure} (${seconds(time)})`
@@ -103,7 +112,7 @@ export const energyTable = (context: ReportContext): ReactElement => {
     const lowest = lowestMotorVoltage.voltage / ratedVoltage(context, motor.motorId)
     return [
       title(one),
-      motorTag(input.document, motor.motorId),
+      whose(one, context),
       at(current(peakLineCurrent.current), peakLineCurrent.at),
       at(current(peakMotorCurrent.current), peakMotorCurrent.at),
       at(percent(lowest, 1), lowestMotorVoltage.at),
