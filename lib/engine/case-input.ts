@@ -262,4 +262,6 @@ export interface CaseInput {
   /** What the supply does during the run; left out where it stands still. */
   disturbance?: Disturbance
   settings: RunSettings
+  /** Motors whose machine is estimated, each with others that meet the same plate; absent or empty for none. */
+  samePlate?: readonly { motorId: string; models: readonly MachineModel[] }[]
 }

@@ -216,4 +216,15 @@ export interface CaseResult {
   notices: readonly Notice[]
   counters: Counters
   series: CaseSeries
+  /** The case once more with what the records leave open put otherwise, without curves; absent where nothing is open. */
+  variants?: readonly CaseVariant[]
+}
+
+/**
+ * `same-plate`: estimated machines replaced by others that meet the same plate; the verdict is that of the worst.
+ * `low-voltage-torque`: torque falls with the power 2.25 of a voltage below rated, for starts below 0.85 of it.
+ */
+export interface CaseVariant {
+  kind: 'same-plate' | 'low-voltage-torque'
+  result: Omit<CaseResult, 'series' | 'variants'>
 }

@@ -1,9 +1,9 @@
 import type { CaseInput } from './case-input'
 import type { CaseResult } from './case-result'
-import { judge } from './criteria/judge'
+import { judgeOverPlate } from './criteria/judge-over-plate'
 import { overallVerdict } from './criteria/overall'
 import type { Verdict } from './criteria/rule'
-import { runCase } from './run-case'
+import { runWithVariants } from './run-variants'
 import type { StudyResult, StudyRunInput } from './study-run'
 import { ENGINE_VERSION } from './version'
 
@@ -19,14 +19,14 @@ export function runStudy(input: StudyRunInput, onProgress?: (done: number, of: n
 
 /** Computes cases one after the other, so that a caller can stop, report or yield between them. */
 export function* computeCases(cases: readonly CaseInput[]): Generator<CaseResult, void, undefined> {
-  for (const each of cases) yield runCase(each)
+  for (const each of cases) yield runWithVariants(each)
 }
 
 /** Holds the limits of a study against cases already computed, in the order of its cases. */
 export function judgeStudy(input: StudyRunInput, results: readonly CaseResult[]): StudyResult {
   const verdicts = input.rules.flatMap((rule) =>
     input.cases.flatMap((each, index): Verdict[] => {
-      const verdict = judge(rule, each, results[index]!, input.starts, input.margins)
+      const verdict = judgeOverPlate(rule, each, results[index]!, input.starts, input.margins)
       return verdict === null ? [] : [verdict]
     }),
   )

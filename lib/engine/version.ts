@@ -1,11 +1,15 @@
 /** Rises whenever a number of the engine moves, so that stored results say what computed them. */
-export const ENGINE_VERSION = '1.0.1'
+export const ENGINE_VERSION = '1.1.0'
 
 /**
  * What changed in the numbers and why, newest first.
  * @public
  */
 export const ENGINE_LOG: readonly { version: string; change: string }[] = [
+  {
+    version: '1.1.0',
+    change: 'Verdicts on an estimated circuit come from the worst of the circuits that meet its plate.',
+  },
   { version: '1.0.1', change: 'A voltage collapse during a start fails limits on voltage, run-up and torque.' },
   { version: '1.0.0', change: 'First numbers: quasi-static run-up with the network solved at every instant.' },
 ]

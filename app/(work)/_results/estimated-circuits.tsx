@@ -58,8 +58,8 @@ export function EstimatedCircuits({ document }: { document: StudyDocument }) {
         ]}
       />
       <p className="m-0 max-w-4xl text-label text-soft">
-        A nameplate does not fix the run-up: circuits that meet the same plate differ in run-up time by a fifth and
-        more. Ask the maker for the torque-speed curve.
+        A nameplate does not fix the run-up. Each start is computed with every circuit that meets the plate; the range
+        stands with the starting motors, and the verdict is that of the worst. Ask the maker for the torque-speed curve.
       </p>
     </section>
   )

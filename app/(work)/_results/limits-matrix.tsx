@@ -133,6 +133,7 @@ function Cell({ results, rule, row, governs }: CellProps) {
           </span>
         )}
       </span>
+      {row.circuits ? <span className="block text-soft">worst of {row.circuits} circuits</span> : null}
       {governs ? <span className="block font-semibold">governs</span> : null}
     </>
   )

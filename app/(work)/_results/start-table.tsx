@@ -2,6 +2,7 @@ import type { StartResult } from '@/lib/engine/case-result'
 import { formatNumber } from '@/lib/quantity/format-number'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import type { CaseSummary } from '@/lib/study/summary'
+import { type Range, type VariantRange, variantRanges } from '@/lib/study/variant-ranges'
 import { startOutcomeWords } from '@/lib/study/words/outcome-words'
 import { motorTag } from '@/lib/study/words/tags'
 import { type FigureRow, FigureTable } from './figure-table'
@@ -9,6 +10,7 @@ import * as print from './print'
 
 interface Item {
   key: string
+  ranges: readonly VariantRange[]
   motorId: string
   /** Which attempt, from 1; null where there was one only. */
   attempt: number | null
@@ -94,17 +96,43 @@ const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
   },
 ]
 
+const between = ({ from, to }: Range, show: (value: number) => string): string =>
+  show(from) === show(to) ? show(from) : `${show(from)} to ${show(to)}`
+
+const rangeText = (range: VariantRange | undefined): string => {
+  if (!range) return '–'
+  const time =
+    range.runUp === null
+      ? `speed not reached with ${range.missed} of ${range.count}`
+      : `run-up ${between(range.runUp, seconds)}`
+  return `${time}, least torque ${between(range.leastAccelerating, (value) => percent(value, 1))}`
+}
+
+const rangeRows: readonly FigureRow<Item>[] = [
+  {
+    label: 'Over all circuits that meet the nameplate',
+    print: ({ ranges }) => rangeText(ranges.find(({ kind }) => kind === 'same-plate')),
+  },
+  {
+    label: 'With torque ∝ U^2.25 below rated voltage',
+    print: ({ ranges }) => rangeText(ranges.find(({ kind }) => kind === 'low-voltage-torque')),
+  },
+]
+
 /** Everything about the motors that are started in the case. */
 export function StartTable({ document, result }: { document: StudyDocument; result: CaseSummary }) {
   const items = result.motors.flatMap(({ motorId, start, earlierAttempts }): Item[] => {
     const ratedVoltage = document.plant.motors.find(({ id }) => id === motorId)?.ratedVoltage.si ?? Number.NaN
     const all = [...(earlierAttempts ?? []), ...(start ? [start] : [])]
+    const ranges = variantRanges(result).filter((range) => range.motorId === motorId)
     return all.map((each, i) => ({
       key: `${motorId}-${i}`,
       motorId,
       attempt: all.length > 1 ? i + 1 : null,
       start: each,
       ratedVoltage,
+      // Variants tell of the last attempt.
+      ranges: i === all.length - 1 ? ranges : [],
     }))
   })
   return (
@@ -113,7 +141,7 @@ export function StartTable({ document, result }: { document: StudyDocument; resu
       items={items}
       itemId={({ key }) => key}
       name={({ motorId, attempt }) => `${motorTag(document, motorId)}${attempt === null ? '' : `, attempt ${attempt}`}`}
-      rows={rowsFor(document)}
+      rows={[...rowsFor(document), ...(items.some(({ ranges }) => ranges.length > 0) ? rangeRows : [])]}
     />
   )
 }

@@ -89,6 +89,8 @@ export interface Verdict {
   busId: string | null
   motorId: string | null
   at: Second | null
+  /** So many machines that meet the same plate stand behind the word, the worst speaking; absent for one alone. */
+  circuits?: number
 }
 
 export interface StartFrequency {

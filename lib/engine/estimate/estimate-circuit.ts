@@ -1,17 +1,8 @@
 import type { InductionCircuit } from '../case-input'
-import {
-  highest,
-  looseness,
-  lowest,
-  plainGuess,
-  toCircuit,
-  type UnknownName,
-  type Unknowns,
-  unknownNames,
-} from './circuit-unknowns'
-import { dampedLeastSquares } from './damped-least-squares'
+import { highest, lowest, plainGuess, toCircuit, type UnknownName, unknownNames } from './circuit-unknowns'
+import { type Fit, fading, fitFrom } from './fit-circuit'
 import { inPerUnit, type Nameplate, type PlateInPerUnit, plateBase } from './nameplate'
-import { fitResiduals, type PlateQuantity, plateFigures, relativeMismatch, stated } from './plate-mismatch'
+import { type PlateQuantity, stated } from './plate-mismatch'
 import { type PlateContradiction, type PlateRefusal, plateContradictions, refusePlate } from './plate-problems'
 
 /** How far the circuit is from one quantity of the plate: figure over plate minus one. */
@@ -39,9 +30,6 @@ export type EstimateOutcome =
     }
   | { kind: 'refused'; cause: PlateRefusal; detail: string }
 
-/** Weights of the priors, from a firm hand to one that only picks among equals. */
-const fading = [0.1, 0.03, 0.01, 3e-3, 1e-3, 1e-4, 1e-5, 1e-6]
-
 /** Residual at which a start is good enough that no other one is tried. */
 const goodEnough = 1e-5
 
@@ -56,40 +44,14 @@ const otherStarts: readonly (readonly number[])[] = [
   [-1.8, 0, 0, -0.8, 0.1, -1.5, 0.2, 0.4],
 ]
 
-interface Fit {
-  unknowns: Unknowns
-  residuals: readonly number[]
-  largest: number
-}
-
-const fitFrom = (plate: PlateInPerUnit, start: Unknowns, weights: readonly number[]): Fit => {
-  const wanted = stated(plate)
-  const guess = plainGuess(plate)
-  let unknowns = start
-  for (const weight of weights) {
-    const problem = {
-      low: lowest,
-      high: highest,
-      residuals: (x: Unknowns) => [
-        ...fitResiduals(toCircuit(x, 1), plate.slip, wanted),
-        ...Array.from(x, (value, i) => (weight * (value - guess[i]!)) / looseness[i]!),
-      ],
-    }
-    unknowns = dampedLeastSquares(problem, unknowns).x
-  }
-  const { figures } = plateFigures(toCircuit(unknowns, 1), plate.slip)
-  const residuals = relativeMismatch(figures, wanted)
-  return { unknowns, residuals, largest: Math.max(...residuals.map(Math.abs)) }
-}
-
 /** The first start that meets the plate, else the nearest of all. */
 const bestFit = (plate: PlateInPerUnit): Fit => {
   const guess = plainGuess(plate)
-  let best = fitFrom(plate, guess, fading)
+  let best = fitFrom(plate, guess, fading, guess)
   for (const shift of otherStarts) {
     if (best.largest <= goodEnough) break
     const start = guess.map((value, i) => Math.min(highest[i]!, Math.max(lowest[i]!, value + shift[i]!)))
-    const other = fitFrom(plate, start, fading.slice(3))
+    const other = fitFrom(plate, start, fading.slice(3), guess)
     if (other.largest < best.largest) best = other
   }
   return best

@@ -4,6 +4,8 @@ import type { CaseRecord } from '../document/case-records'
 import type { StudyDocument } from '../document/study-document'
 import { curveOf, type RecordIndex } from '../references/record-index'
 import { lineInput, transformerInput } from './branch-inputs'
+import { factorOn } from './case-changes'
+import { scaleAdmittance } from './circuit-input'
 import { loadCurveInput } from './load-curve-input'
 import { motorInput } from './motor-input'
 import { contactorInput, disturbanceInput, startOrderInput } from './schedule-input'
@@ -65,12 +67,19 @@ export const caseInputOf = (
   record: CaseRecord,
   index: RecordIndex,
   circuits: ReadonlyMap<string, MachineModel>,
+  others: (motorId: string) => readonly MachineModel[],
 ): CaseInput => {
   const { plant, settings, frequency } = document
   const condition = found(index.plantConditions.get(record.plantCondition), record.id)
   const supply = found(index.supplies.get(record.supply), record.id)
   const disturbance = disturbanceInput(index.schedules.get(record.schedule))
   const circuitOf = (motorId: string) => found(circuits.get(motorId), `motor ${motorId}`)
+  const starts = startingDuties(document, record, index)
+  const samePlate = starts.flatMap(({ motorId }) => {
+    const factor = factorOn(record, 'motor-admittance', motorId)
+    const models = others(motorId).map((model) => scaleAdmittance(model, factor))
+    return models.length === 0 ? [] : [{ motorId, models }]
+  })
   return {
     id: record.id,
     frequency: hertz(frequency.si),
@@ -86,7 +95,7 @@ export const caseInputOf = (
     lines: plant.lines.map(lineInput),
     loads: plant.loads.filter(({ id }) => !condition.loadsOff.includes(id)).map(staticLoadInput),
     capacitors: plant.capacitors.filter(({ id }) => condition.capacitors.includes(id)).map(capacitorInput),
-    motors: [...runningDuties(record, index), ...startingDuties(document, record, index)].map(({ motorId, duty }) =>
+    motors: [...runningDuties(record, index), ...starts].map(({ motorId, duty }) =>
       motorInput({
         motor: found(index.motors.get(motorId), record.id),
         load: found(index.loadOfMotor.get(motorId), record.id),
@@ -102,5 +111,6 @@ export const caseInputOf = (
       timeLimit: second(settings.timeLimit.si),
       tolerance,
     },
+    ...(samePlate.length > 0 && { samePlate }),
   }
 }

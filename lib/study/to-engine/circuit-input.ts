@@ -1,5 +1,6 @@
 import { type InductionCircuit, isTabulated, type MachineModel } from '../../engine/case-input'
 import { type EstimateOutcome, estimateCircuit } from '../../engine/estimate/estimate-circuit'
+import { circuitsOnPlate } from '../../engine/estimate/same-plate'
 import { ampere, newtonMetre, type Ohm, ohm } from '../../units/si'
 import type { MotorRecord } from '../document/machine-records'
 import type { MotorCircuit } from '../document/motor-circuit'
@@ -51,6 +52,19 @@ export const circuitInput = (
     return { ok: true, circuit: typedCircuit(motor.circuit, motor.ratedVoltage.si) }
   const outcome = estimate(motor)
   return outcome.kind === 'estimated' ? { ok: true, circuit: outcome.circuit } : { ok: false, detail: outcome.detail }
+}
+
+/** Other circuits that meet the plate of a motor whose circuit is estimated; motors with the same plate are searched once. */
+export const plateCircuits = (frequency: number): ((motor: MotorRecord) => readonly InductionCircuit[]) => {
+  const known = new Map<string, readonly InductionCircuit[]>()
+  return (motor) => {
+    const plate = motor.circuit.kind === 'estimated' ? nameplateOf(motor, frequency) : null
+    if (!plate) return []
+    const key = JSON.stringify(plate)
+    const circuits = known.get(key) ?? circuitsOnPlate(plate)
+    known.set(key, circuits)
+    return circuits
+  }
 }
 
 /** The machine with every admittance multiplied, for example by 1.2 for a locked-rotor current at +20 %. */

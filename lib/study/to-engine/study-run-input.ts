@@ -6,7 +6,7 @@ import type { StudyDocument } from '../document/study-document'
 import { checkReferences } from '../references/check-references'
 import { type RecordIndex, recordIndex } from '../references/record-index'
 import { caseInputOf } from './case-input-of'
-import { circuitEstimator, circuitInput } from './circuit-input'
+import { circuitEstimator, circuitInput, plateCircuits } from './circuit-input'
 import { machineModel } from './machine-model'
 import { ruleInputOf } from './rule-input-of'
 
@@ -52,9 +52,14 @@ export const studyRunInput = (document: StudyDocument): StudyRunInput => {
   const index = recordIndex(document)
   const { circuits, issues } = circuitsOf(document, index)
   if (issues.length > 0) throw refuse(issues)
-  const { settings, cases, limits } = document
+  const { settings, cases, limits, frequency } = document
+  const onPlate = plateCircuits(frequency.si)
+  const others = (motorId: string): readonly MachineModel[] => {
+    const motor = index.motors.get(motorId)
+    return motor ? onPlate(motor).map((circuit) => machineModel(motor, circuit, frequency.si)) : []
+  }
   return {
-    cases: cases.map((record) => caseInputOf(document, record, index, circuits)),
+    cases: cases.map((record) => caseInputOf(document, record, index, circuits, others)),
     rules: limits.map((limit) => ruleInputOf(limit, cases)),
     starts: { perDay: settings.startsPerDay.si, perHour: settings.startsPerHour.si },
     margins: { ofLimit: perUnit(settings.closeOfLimit.si), voltage: perUnit(settings.closeVoltage.si) },

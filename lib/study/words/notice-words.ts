@@ -7,7 +7,7 @@ import { loadTag, motorTag } from './tags'
 export const noticeSentence = (notice: Notice, document: StudyDocument): string => {
   switch (notice.kind) {
     case 'reduced-voltage-torque':
-      return `${motorTag(document, notice.motorId)} starts at ${printQuantity(notice.voltage, 'ratio', { unit: '%', digits: 3 })} of its rated voltage: torque taken as the square of voltage is optimistic there; hold the sensitivity with the exponent 2.25 against it.`
+      return `${motorTag(document, notice.motorId)} starts at ${printQuantity(notice.voltage, 'ratio', { unit: '%', digits: 3 })} of its rated voltage: torque taken as the square of voltage is optimistic there; the start was computed again with the exponent 2.25.`
     case 'change-over-too-early':
       return `${motorTag(document, notice.motorId)} changes over while its slip is above breakdown: the current and the dip after the change-over are near those of a direct start.`
     case 'not-switched-on':

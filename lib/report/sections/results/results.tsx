@@ -5,6 +5,7 @@ import { computedRuns, runsOf } from '../../values/roles'
 import type { Section } from '../section'
 import { changeOverTable } from './change-over-table'
 import { notices } from './notices'
+import { openRanges } from './open-ranges'
 import { runningTable } from './running-table'
 import { energyTable, startTable } from './start-tables'
 import { supplyTable } from './supply-table'
@@ -27,6 +28,8 @@ export const results: Section = (context) => {
     ...design.map((run) => voltageTable(context, run)),
     subsection(context, 'results-running', say.running.title),
     ...runningTable(context, ['design']),
+    subsection(context, 'results-ranges', say.ranges.title),
+    ...openRanges(context),
     subsection(context, 'results-notices', say.notices.title),
     ...notices(context),
   ]

@@ -84,7 +84,7 @@ export const records = {
         `**Supply ${tags}**: it is unknown whether the level contains the plant's own motors; it is taken as not.`,
       date: (tags: string) => `**Supply ${tags}**: the level has no date.`,
       estimated: (tags: string) =>
-        `**${tags}**: the equivalent circuit is estimated from the nameplate. A nameplate does not fix the run-up: circuits that meet the same plate differ by 14 to 29 % in run-up time. Ask the maker for the torque-speed curve.`,
+        `**${tags}**: the equivalent circuit is estimated from the nameplate. A nameplate does not fix the run-up: the range over circuits that meet it stands with the results. Ask the maker for the torque-speed curve.`,
       pullUp: (tags: string) =>
         `**${tags}**: no pull-up torque is declared; a saddle in the torque below breakdown would not be seen.`,
       lockedRotorPowerFactor: (tags: string) => `**${tags}**: the power factor with locked rotor is not declared.`,

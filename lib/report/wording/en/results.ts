@@ -93,12 +93,30 @@ export const results = {
       outcome: 'Outcome',
     },
   },
+  ranges: {
+    title: 'What the records leave open',
+    intro:
+      'A nameplate does not fix the run-up: circuits that meet the same plate differ. Each start with an estimated circuit was computed with every such circuit, and the verdicts are those of the worst; limits with an envelope in time are held against the estimated circuit alone. A start below 0.85 of rated voltage was computed once more with torque falling with the power 2.25 of the voltage instead of its square; that is printed here and is not in the verdicts.',
+    none: 'No started motor has an estimated circuit, and none starts below 0.85 of its rated voltage.',
+    heads: {
+      case: 'Case',
+      motor: 'Motor',
+      what: 'Left open',
+      runUp: 'Run-up, s',
+      torque: 'Least acc. torque, %',
+    },
+    kinds: {
+      'same-plate': (count: number) => `circuit: ${count} that meet the nameplate`,
+      'low-voltage-torque': () => 'torque ∝ U^2.25 below rated voltage',
+    },
+    missed: (missed: number, count: number) => `not reached with ${missed} of ${count}`,
+  },
   notices: {
     title: 'What the calculation noticed',
     none: 'Nothing out of the ordinary.',
     range: (low: string, high: string) => `${low} to ${high}`,
     reducedVoltage: (motor: string, range: string) =>
-      `${motor} starts at ${range}\u2009% of its rated voltage. Torque taken as the square of voltage is optimistic there; hold the sensitivity with the exponent 2.25 against it.`,
+      `${motor} starts at ${range}\u2009% of its rated voltage. Torque taken as the square of voltage is optimistic there; see what the records leave open for the exponent 2.25.`,
     heads: { case: 'Case', notice: 'Notice' },
   },
   plots: {

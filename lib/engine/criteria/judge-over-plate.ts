@@ -1,0 +1,35 @@
+import type { CaseInput } from '../case-input'
+import type { CaseResult } from '../case-result'
+import { judge } from './judge'
+import type { CloseMargins, RuleInput, StartFrequency, Verdict, VerdictWord } from './rule'
+
+const weight: Record<VerdictWord, number> = { fails: 0, 'not-assessed': 1, close: 2, meets: 3 }
+
+/** The worse first; among equals the one with less margin, a limit that nothing reached having least. */
+const byWorse = (a: Verdict, b: Verdict): number =>
+  weight[a.word] - weight[b.word] ||
+  (a.margin ?? Number.NEGATIVE_INFINITY) - (b.margin ?? Number.NEGATIVE_INFINITY) ||
+  0
+
+/**
+ * Holds one rule against a case and against all its machines that meet the same plates; the worst speaks.
+ *
+ * Envelopes need the curve in time, which is kept for the case itself alone: they are held against it alone.
+ */
+export function judgeOverPlate(
+  rule: RuleInput,
+  input: CaseInput,
+  result: CaseResult,
+  starts: StartFrequency,
+  margins: CloseMargins,
+): Verdict | null {
+  const own = judge(rule, input, result, starts, margins)
+  const others = (result.variants ?? []).filter(({ kind }) => kind === 'same-plate')
+  if (own === null || others.length === 0 || rule.limit.kind === 'envelope') return own
+  const all = others.flatMap(({ result: other }) => {
+    const verdict = judge(rule, input, { ...other, series: result.series }, starts, margins)
+    return verdict === null ? [] : [verdict]
+  })
+  const worst = [own, ...all].reduce((least, each) => (byWorse(each, least) < 0 ? each : least))
+  return { ...worst, circuits: 1 + others.length }
+}

@@ -1,0 +1,54 @@
+import { synchronousSpeed } from '../units/speed'
+import { type CaseInput, isTabulated, type MachineModel } from './case-input'
+import type { CaseResult, CaseVariant } from './case-result'
+import { breakdownSlip } from './machines/breakdown-slip'
+import { runCase } from './run-case'
+
+/** Power of the voltage that torque follows in the low-voltage variant (upper half of the typical 2.1 to 2.3). */
+export const lowVoltageExponent = 2.25
+
+const withoutCurves = ({ series: _, variants: __, ...result }: CaseResult): CaseVariant['result'] => result
+
+const withModels = (input: CaseInput, models: ReadonlyMap<string, MachineModel>): CaseInput => ({
+  ...input,
+  motors: input.motors.map((motor) => ({ ...motor, circuit: models.get(motor.id) ?? motor.circuit })),
+})
+
+/** The case with the k-th machine of every estimated motor; a motor with fewer goes round them again. */
+const samePlate = (input: CaseInput): readonly CaseInput[] => {
+  const open = (input.samePlate ?? []).filter(({ models }) => models.length > 0)
+  const most = Math.max(0, ...open.map(({ models }) => models.length))
+  return Array.from({ length: most }, (_, k) =>
+    withModels(input, new Map(open.map(({ motorId, models }) => [motorId, models[k % models.length]!]))),
+  )
+}
+
+/** The case with the torque of every motor that started at low voltage falling faster; null where none did. */
+const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput | null => {
+  const low = new Set(notices.flatMap((one) => (one.kind === 'reduced-voltage-torque' ? [one.motorId] : [])))
+  const models = new Map<string, MachineModel>()
+  for (const motor of input.motors) {
+    const { circuit } = motor
+    // Curves and exponents that somebody stated stay as they are.
+    if (!low.has(motor.id) || isTabulated(circuit) || circuit.saturation) continue
+    const synchronous = synchronousSpeed(input.frequency, motor.poles)
+    const noneBelow = Math.max(1e-4, 1 - motor.ratedSpeed / synchronous)
+    const fullFrom = Math.max(2 * noneBelow, breakdownSlip(circuit, synchronous))
+    models.set(motor.id, {
+      ...circuit,
+      saturation: { current: 1, torque: lowVoltageExponent, noneBelow, fullFrom },
+    })
+  }
+  return models.size > 0 ? withModels(input, models) : null
+}
+
+/** A case with the variants that its input and its own result call for. */
+export function runWithVariants(input: CaseInput): CaseResult {
+  const result = runCase(input)
+  const low = lowVoltageTorque(input, result)
+  const variants: CaseVariant[] = [
+    ...samePlate(input).map((each) => ({ kind: 'same-plate' as const, result: withoutCurves(runCase(each)) })),
+    ...(low === null ? [] : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runCase(low)) }]),
+  ]
+  return variants.length === 0 ? result : { ...result, variants }
+}
