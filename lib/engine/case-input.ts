@@ -214,6 +214,8 @@ export interface MotorInput {
         starter: Starter
         /** Speed that the load gives the shaft before the start, negative when it turns backwards; 0 where left out. */
         initialSpeed?: RadianPerSecond
+        /** Contactor that drops out and ends the start; it does not close again by itself. */
+        contactor?: Pick<Contactor, 'dropOut' | 'delay'>
         /** The start that this one waits for; `at` is then the earliest instant. */
         after?: StartAfter
         /** Attempts before the one that counts, each switched off again. */

@@ -29,8 +29,8 @@ export type StartOutcome =
   | { kind: 'timed-out'; speed: RadianPerSecond }
   /** Switched off before it had started, as its schedule asks; from this motor's own switching-on. */
   | { kind: 'abandoned'; at: Second; speed: RadianPerSecond }
-  /** Switched itself off: the drive's undervoltage level; from this motor's own switching-on. */
-  | { kind: 'tripped'; cause: 'undervoltage'; at: Second; speed: RadianPerSecond }
+  /** Switched off by lack of voltage: the drive's level, or its contactor's; from this motor's own switching-on. */
+  | { kind: 'tripped'; cause: 'undervoltage' | 'contactor'; at: Second; speed: RadianPerSecond }
 
 /** How a machine that was running before the start came through it. */
 export type RunningOutcome =

@@ -1,6 +1,7 @@
 import fc from 'fast-check'
 import type { CaseInput, LoadCurve, MotorInput, Starter } from '@/lib/engine/case-input'
 import {
+  ampere,
   hertz,
   kilogramSquareMetre,
   newtonMetre,
@@ -65,6 +66,23 @@ const starter: fc.Arbitrary<Starter> = fc.oneof(
       kind: 'star-delta',
       changeOver: { kind: 'time', at: second(8 * part) },
       gap: second(gap),
+    }),
+  ),
+  fc.record({ x: real(0.05, 0.4), part: real(0.7, 0.97), resistive: fc.boolean() }).map(
+    ({ x, part, resistive }): Starter => ({
+      kind: resistive ? 'resistor' : 'reactor',
+      impedance: { re: ohm(resistive ? x : 0.02 * x), im: ohm(resistive ? 0 : x) },
+      changeOver: { kind: 'speed', at: radianPerSecond(part * 157) },
+    }),
+  ),
+  fc.record({ from: real(0.4, 0.8), time: real(1, 10), limit: fc.option(real(150, 600)) }).map(
+    ({ from, time, limit }): Starter => ({
+      kind: 'soft-starter',
+      ramp: { kind: 'voltage', from: perUnit(from), to: perUnit(1) },
+      rampTime: second(time),
+      kick: null,
+      currentLimit: limit === null ? null : ampere(limit),
+      bypass: null,
     }),
   ),
 )

@@ -70,4 +70,5 @@ function restart(system: System, start: StartCourse, state: Float64Array, t: num
   start.extraAtCriterion = null
   start.standstill = null
   start.outcome = null
+  if (start.contactor !== null) start.contactor.state = 'in'
 }

@@ -30,6 +30,8 @@ function motorProblem(motor: MotorInput, motors: readonly MotorInput[]): string 
       ? null
       : 'its contactor closes again at its drop-out voltage or above, after zero seconds or more.'
   }
+  if (duty.contactor && !(positive(duty.contactor.dropOut) && notNegative(duty.contactor.delay)))
+    return 'its contactor needs a drop-out voltage above zero and a delay of zero or more.'
   if (duty.attempts && !duty.attempts.every(({ runFor, rest }) => positive(runFor) && positive(rest)))
     return 'each attempt needs a time above zero, and a rest above zero before the next.'
   if (!duty.after) return null

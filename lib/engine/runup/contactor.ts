@@ -1,7 +1,8 @@
 import type { Contactor } from '../schedule-input'
-import type { RunningCourse } from './course'
-import { sameInstant } from './schedule'
+import type { Courses, RunningCourse, StartCourse } from './course'
+import { type Move, sameInstant } from './schedule'
 import type { System } from './system'
+import { trip } from './trip'
 
 /** How the contactor of a running motor fares; `dropping` and `returning` wait for their delay. */
 export interface ContactorCourse {
@@ -39,6 +40,21 @@ export function noteVoltage(course: ContactorCourse, t: number): void {
 export function contactorDue({ item, state, since }: ContactorCourse): number | null {
   if (state === 'dropping') return since + item.delay
   return state === 'returning' ? since + item.reclose!.delay : null
+}
+
+/** When the delays of all contactors are over. */
+export const contactorInstants = ({ running, starts }: Courses): (number | null)[] =>
+  [...running, ...starts].map(({ contactor }) => (contactor === null ? null : contactorDue(contactor)))
+
+/** Ends the starts whose contactor has been without voltage for its delay. */
+export function tripContactors(system: System, starts: readonly StartCourse[], state: Float64Array, t: number): Move[] {
+  return starts.flatMap((start): Move[] => {
+    const due = start.contactor === null ? null : contactorDue(start.contactor)
+    if (start.contactor === null || due === null || t < due - sameInstant) return []
+    start.contactor.state = 'out'
+    start.contactor.droppedAt = t
+    return [trip(system, start, 'contactor', state[start.motor]!, t)]
+  })
 }
 
 const direct = { link: { kind: 'direct' }, rotorResistance: 0 } as const

@@ -26,6 +26,8 @@ export interface StartCourse {
   /** Attempts before the one that counts, and which one this is. */
   attempts: readonly Attempt[]
   attempt: number
+  /** Its contactor, where it may end the start. */
+  contactor: ContactorCourse | null
   /** Line voltage in V below which its drive switches itself off; null for other devices. */
   undervoltage: number | null
   /** Capacitors switched with the start: null while they wait, then whether they are in. */

@@ -120,12 +120,15 @@ function conditionsMet(system: System, start: StartCourse, state: Float64Array, 
   return found
 }
 
-/** Contactors of running motors whose voltage the end of a step meets. */
+/** Contactors whose voltage the end of a step meets. */
 function contactorsMoved(system: System, courses: Courses, state: Float64Array, t: number): Crossing[] {
-  const watched = courses.running.filter(({ contactor }) => contactor !== null)
+  const watched = [
+    ...courses.running.filter(({ contactor }) => contactor !== null),
+    ...courses.starts.filter(({ contactor, motor }) => contactor !== null && system.connection.code[motor] !== 0),
+  ]
   if (watched.length === 0) return []
   const excessOfCourse =
-    ({ motor, contactor }: Courses['running'][number]) =>
+    ({ motor, contactor }: (typeof watched)[number]) =>
     (at: Float64Array): number =>
       system.solveAt(at) ? contactorExcess(contactor!, Math.sqrt(system.busSquare[motor]!)) : Number.NEGATIVE_INFINITY
   system.setTime(t)

@@ -7,7 +7,7 @@ import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
 import { attemptEnd, endAttempts } from './attempts'
 import { type BeforeStart, supplyPower, weakestBus } from './before-start'
-import { contactorDue, noteVoltage, switchContactors } from './contactor'
+import { contactorInstants, noteVoltage, switchContactors, tripContactors } from './contactor'
 import { type Courses, type StartCourse, untilOf } from './course'
 import { type Crossing, firstCrossings } from './crossing'
 import { createDisturbance } from './disturbance'
@@ -27,7 +27,7 @@ import {
   switchDue,
 } from './schedule'
 import type { System } from './system'
-import { tripDrive } from './trip'
+import { trip } from './trip'
 
 /** How a run ended. */
 export type RunEnd =
@@ -177,7 +177,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
         if (kind === 'stand') stood = true
       }
       const running = courses.running.find((each) => each.motor === motor)
-      if (running?.contactor && kind === 'contactor') noteVoltage(running.contactor, t)
+      const contactor = running?.contactor ?? starts.find((each) => each.motor === motor)?.contactor
+      if (contactor && kind === 'contactor') noteVoltage(contactor, t)
       if (running && kind === 'pull-out') running.pulledOutAt = t
       if (running && kind === 'recovery') running.pulledOutAt = null
       const start = starts.find((each) => each.motor === motor)
@@ -194,7 +195,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       }
       if (start && kind === 'change-over') moved.push(advance(system, start, t))
       if (start && kind === 'capacitor') moved.push(switchCapacitor(system, start, capacitor))
-      if (start && kind === 'undervoltage') moved.push(tripDrive(system, start, state[motor]!, t))
+      if (start && kind === 'undervoltage') moved.push(trip(system, start, 'undervoltage', state[motor]!, t))
     }
     return { moved, halted, stood }
   }
@@ -234,7 +235,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     if (starts.some((start) => untilOf(start)?.kind === 'after' || (!start.switchedOn && !isForlorn(start))))
       return false
     if (starts.some((start) => attemptEnd(start) !== null) || disturbance.nextAt() !== null) return false
-    if (courses.running.some(({ contactor }) => contactor !== null && contactorDue(contactor) !== null)) return false
+    if (contactorInstants(courses).some((due) => due !== null)) return false
     if (starts.some((start) => awaitsCapacitor(start, t))) return false
     const torque = restlessness()
     const open = starts.filter((start) => start.outcome === null && start.switchedOn)
@@ -274,7 +275,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const otherInstants = (): (number | null)[] => [
     disturbance.nextAt(),
     ...starts.map(attemptEnd),
-    ...courses.running.map(({ contactor }) => (contactor === null ? null : contactorDue(contactor))),
+    ...contactorInstants(courses),
   ]
 
   /** An active load that the motor cannot hold drives its shaft beyond any speed that its curve means. */
@@ -327,6 +328,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     moved.push(...switchDue(system, starts, t))
     const disturbed = disturbance.act(t)
     const contactors = switchContactors(system, courses.running, t)
+    moved.push(...tripContactors(system, starts, state, t))
     giveUp(t)
     if (moved.length > 0 || halted.size > 0 || letGo || stood || disturbed || contactors) {
       if (!afterSwitching(t, moved, halted)) return collapsed(t)

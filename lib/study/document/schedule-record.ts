@@ -53,7 +53,9 @@ export const scheduleRecord = z.strictObject({
     .array(contactor)
     .max(200)
     .default([])
-    .describe('Contactors of running motors; motors without one stay connected whatever the voltage.'),
+    .describe(
+      'Contactors of running motors, and of started ones, whose start they end for good; motors without one stay connected whatever the voltage.',
+    ),
   note,
 })
 

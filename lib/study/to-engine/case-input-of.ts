@@ -51,6 +51,7 @@ const startingDuties = ({ settings, frequency }: StudyDocument, record: CaseReco
         kind: 'starting',
         at: second(at.si),
         ...startOrderInput(start),
+        ...contactorInput(index.schedules.get(record.schedule), index.motors.get(motor)),
         starter: starterInput(device, found(index.motors.get(motor), record.id), frequency.si),
         ...(device.capacitors.length > 0 && { capacitors: device.capacitors.map(startCapacitorInput) }),
         ...(starterDuty && { starterDuty }),

@@ -35,8 +35,13 @@ export const startOutcomeSentence = (outcome: StartOutcome, motor: string): stri
       return `${motor} is at ${speed(outcome.speed)} when the time limit ends the start.`
     case 'abandoned':
       return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}, before it has started.`
-    case 'tripped':
-      return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}: the line voltage falls below the undervoltage level of its drive.`
+    case 'tripped': {
+      const cause =
+        outcome.cause === 'contactor'
+          ? 'the voltage falls below what its contactor holds in at'
+          : 'the line voltage falls below the undervoltage level of its drive'
+      return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}: ${cause}.`
+    }
   }
 }
 

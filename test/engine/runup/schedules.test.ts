@@ -215,6 +215,17 @@ describe('a dip of the supply', () => {
     expect(outcome(result).kind).toBe('rode-through')
   })
 
+  it('ends a start whose contactor lacks voltage for longer than its delay', () => {
+    const contactor = { dropOut: volt(260), delay: second(0.1) }
+    const at = (duration: number) =>
+      startOf(run([simpleMotor('M', starting({ contactor }))], dip(0.5, duration)), 'M')!.outcome
+    expect(at(0.3)).toMatchObject({ kind: 'tripped', cause: 'contactor', at: expect.closeTo(1.1, 6) })
+    expect(at(0.05).kind).toBe('started')
+    // A start may pull its own contactor out.
+    const own = startOf(run([simpleMotor('M', starting({ contactor }))], {}, 0.09), 'M')!.outcome
+    expect(own).toMatchObject({ kind: 'tripped', at: expect.closeTo(0.1, 6) })
+  })
+
   it('with values that cannot be is refused', () => {
     const refused = (changes: Partial<CaseInput>, motors = [running('A')]) => run(motors, changes).outcome.kind
     expect(refused({ disturbance: { at: second(1), duration: second(0), remaining: perUnit(0.5) } })).toBe('refused')

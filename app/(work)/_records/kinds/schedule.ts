@@ -65,9 +65,9 @@ export const schedule: KindDescription = {
     {
       kind: 'list',
       name: 'contactors',
-      label: 'Contactors of running motors',
+      label: 'Contactors',
       item: 'contactor',
-      hint: 'Motors without one stay connected whatever the voltage.',
+      hint: 'Motors without one stay connected whatever the voltage; that of a started motor ends its start.',
       fields: [
         motorField(),
         { kind: 'quantity', name: 'dropOut', label: 'Drops out below, of rated voltage', quantity: 'ratio' },

@@ -33,7 +33,10 @@ export const runningTable = (
           rpm(running.settledSpeed),
           {
             text: runningOutcomeSentence(outcome, tag),
-            ink: outcome.kind === 'rode-through' ? ('ink' as const) : ('fails' as const),
+            ink:
+              outcome.kind === 'rode-through' || outcome.kind === 're-accelerated'
+                ? ('ink' as const)
+                : ('fails' as const),
           },
         ],
       ]
