@@ -7,13 +7,15 @@ const close = 0.03
 
 const seconds = (value: number) => `${formatNumber(value, { decimals: 2 })}\u2009s`
 
-/** Change-overs of the starting devices to their running position; those at nearly the same instant are named together. */
+/** Change-overs of the starting devices to their running position, and motors taken off; those at nearly the same instant are named together. */
 export const caseEvents = (
   { document, result }: CaseFigure,
   window: readonly [number, number],
 ): readonly EventSpec[] => {
   const several = result.motors.filter((motor) => motor.start !== null).length > 1
-  const changes = result.changeOvers.filter((one) => one.to === 'running').toSorted((a, b) => a.at - b.at)
+  const changes = result.changeOvers
+    .filter((one) => one.to === 'running' || one.to === 'off')
+    .toSorted((a, b) => a.at - b.at)
   const groups: (typeof changes)[] = []
   for (const change of changes) {
     const group = groups.at(-1)
@@ -24,6 +26,7 @@ export const caseEvents = (
     const first = group[0]!
     const tags = group.map((one) => motorOf(document, one.motorId).tag).join(', ')
     const when = group.length > 1 ? `from ${seconds(first.at)}` : seconds(first.at)
-    return { name: `${several ? `${tags} ` : ''}change-over ${when}`, at: first.at }
+    const what = group.every(({ to }) => to === 'off') ? 'off' : 'change-over'
+    return { name: `${several ? `${tags} ` : ''}${what} ${when}`, at: first.at }
   })
 }

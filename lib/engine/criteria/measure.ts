@@ -141,8 +141,9 @@ export function measure(rule: RuleInput, input: CaseInput, result: CaseResult): 
   return places.map((place) => voltageFigure(rule, place, firstAt))
 }
 
-/** Instant of the first switching-on of a case; 0 when nothing is started. */
-export function firstSwitching(input: CaseInput): Second {
-  const starts = input.motors.flatMap(({ duty }) => (duty.kind === 'starting' ? [duty.at] : []))
-  return second(starts.length === 0 ? 0 : Math.min(...starts))
+/** Instant of the first switching-on or disturbance of a case; 0 when nothing happens. Starts that wait for others come later. */
+export function firstSwitching({ motors, disturbance }: CaseInput): Second {
+  const starts = motors.flatMap(({ duty }) => (duty.kind === 'starting' && !duty.after ? [duty.at] : []))
+  const instants = disturbance ? [disturbance.at, ...starts] : starts
+  return second(instants.length === 0 ? 0 : Math.min(...instants))
 }

@@ -10,13 +10,16 @@ export const reducedCase = (input: CaseInput, motorId: string): CaseInput | null
   const motor = input.motors.find((one) => one.id === motorId)
   if (motor?.duty.kind !== 'starting') return null
   const { supply } = input
+  const { load, processLoad } = motor.duty
+  const { shaft: _shaft, ...alone } = motor
+  const { disturbance: _disturbance, ...still } = input
   return {
-    ...input,
+    ...still,
     id: `${input.id}-hand-check`,
     supply: { ...supply, hold: { kind: 'emf', voltage: supply.hold.voltage }, motorsInLevel: [] },
     lines: input.lines.map((line) => ({ ...line, susceptance: siemens(0) })),
     loads: [],
     capacitors: [],
-    motors: [{ ...motor, duty: { ...motor.duty, at: second(0), starter: { kind: 'direct' } } }],
+    motors: [{ ...alone, duty: { kind: 'starting', at: second(0), starter: { kind: 'direct' }, load, processLoad } }],
   }
 }

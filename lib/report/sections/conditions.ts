@@ -17,6 +17,11 @@ export const conditions = (context: ReportContext): readonly string[] => {
   const tagsWhere = (holds: (run: (typeof result.cases)[number]) => boolean) =>
     listedTags(result.cases.filter(holds).map((run) => tagOf.get(run.caseId) ?? run.caseId))
   const hanging = tagsWhere((run) => run.motors.some(({ start }) => start !== null && start.outcome.kind !== 'started'))
+  const overDuty = tagsWhere((run) => run.motors.some(({ start }) => start?.device?.verdict === 'exceeded'))
+  const notSwitchedOn = tagsWhere((run) => run.notices.some(({ kind }) => kind === 'not-switched-on'))
+  const lost = tagsWhere((run) =>
+    run.motors.some(({ running }) => running !== null && ['pulled-out', 'dropped-out'].includes(running.outcome.kind)),
+  )
   const early = tagsWhere((run) => run.changeOvers.some(({ tooEarly }) => tooEarly))
   const departures = listedTags(failingCases(rows, 'sensitivity').map((one) => one.case.tag))
   const values = statedValues(document, words)
@@ -41,6 +46,9 @@ export const conditions = (context: ReportContext): readonly string[] => {
     ...[...successive].map(([starts, tags]) => verdict.makerStarts(listedTags(tags), starts)),
     ...(departures === '' ? [] : [verdict.mustExclude(departures)]),
     ...(hanging === '' ? [] : [verdict.hangs(hanging)]),
+    ...(overDuty === '' ? [] : [verdict.overDuty(overDuty)]),
+    ...(notSwitchedOn === '' ? [] : [verdict.notSwitchedOn(notSwitchedOn)]),
+    ...(lost === '' ? [] : [verdict.lost(lost)]),
     ...(early === '' ? [] : [verdict.tooEarly(early)]),
     ...(toVerify === 0 ? [] : [verdict.verifyLimits(toVerify)]),
     ...(assumed === 0 ? [] : [verdict.assumed(assumed)]),

@@ -63,6 +63,11 @@ export const verdict = {
     `The departures ${tags} fail a limit in use. They must be excluded by the plant or by the order, or accepted by whoever owns the limit.`,
   hangs: (tags: string) =>
     `In ${tags} a start does not complete. The plant must detect a start that does not complete and trip it.`,
+  overDuty: (cases: string) =>
+    `In ${cases} a starting device is asked for more than its duty allows; a device with a higher duty, or fewer and shorter starts, is needed.`,
+  notSwitchedOn: (cases: string) =>
+    `In ${cases} a motor is not switched on, because the start that it waits for fails.`,
+  lost: (cases: string) => `In ${cases} a running motor is lost: it drops out for good or pulls out.`,
   tooEarly: (tags: string) => `In ${tags} the starter changes over too early; the setting must exclude it.`,
   verifyLimits: (count: number) =>
     `${count} limit${count === 1 ? ' is' : 's are'} marked “verify against your edition” and must be verified before the report is relied on.`,
