@@ -264,6 +264,8 @@ export interface CaseInput {
   /** What the supply does during the run; left out where it stands still. */
   disturbance?: Disturbance
   settings: RunSettings
+  /** Places whose flicker is wanted, and the intended starts an hour; absent where nobody asks. */
+  flicker?: { busIds: readonly string[]; startsPerHour: number }
   /** Motors whose machine is estimated, each with others that meet the same plate; absent or empty for none. */
   samePlate?: readonly { motorId: string; models: readonly MachineModel[] }[]
 }

@@ -1,6 +1,7 @@
 import { synchronousSpeed } from '../units/speed'
 import { type CaseInput, isTabulated, type MachineModel } from './case-input'
 import type { CaseResult, CaseVariant } from './case-result'
+import { startFlicker } from './flicker/start-flicker'
 import { breakdownSlip } from './machines/breakdown-slip'
 import { runCase } from './run-case'
 
@@ -8,6 +9,21 @@ import { runCase } from './run-case'
 export const lowVoltageExponent = 2.25
 
 const withoutCurves = ({ series: _, variants: __, ...result }: CaseResult): CaseVariant['result'] => result
+
+/** Adds flicker and rapid change where the input asks for them and the run went to its end. */
+function withFlicker(input: CaseInput, result: CaseResult): CaseResult {
+  const asked = new Set(input.flicker?.busIds ?? [])
+  if (!input.flicker || asked.size === 0 || result.outcome.kind !== 'complete') return result
+  const { startsPerHour } = input.flicker
+  const flicker = result.places.flatMap(({ busId, nominal, before, deepest, settledAfterStart }) => {
+    const voltage = result.series.busVoltage[busId]
+    if (!asked.has(busId) || !voltage || voltage.length < 2) return []
+    const { time } = result.series
+    const course = { busId, nominal, before, deepest: deepest.voltage, settled: settledAfterStart, time, voltage }
+    return [startFlicker(course, startsPerHour, input.frequency)]
+  })
+  return flicker.length > 0 ? { ...result, flicker } : result
+}
 
 const withModels = (input: CaseInput, models: ReadonlyMap<string, MachineModel>): CaseInput => ({
   ...input,
@@ -44,7 +60,7 @@ const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput 
 
 /** A case with the variants that its input and its own result call for. */
 export function runWithVariants(input: CaseInput): CaseResult {
-  const result = runCase(input)
+  const result = withFlicker(input, runCase(input))
   const low = lowVoltageTorque(input, result)
   const variants: CaseVariant[] = [
     ...samePlate(input).map((each) => ({ kind: 'same-plate' as const, result: withoutCurves(runCase(each)) })),

@@ -2,6 +2,7 @@ import type { CaseSeries } from '@/lib/engine/case-result'
 import { caseSentence } from '@/lib/study/words/case-sentence'
 import { Notice } from '@/lib/ui/notice'
 import { CasePlots } from './case-plots'
+import { FlickerTable } from './flicker-table'
 import { canBeDrawn, caseResult, type Results } from './results'
 import { CaseSentences, RunCounters } from './run-notes'
 import { ChangeOverTable, RunningTable, SupplyTable } from './running-table'
@@ -49,6 +50,7 @@ export function CaseDetail({ results, caseId, series }: CaseDetailProps) {
           <ChangeOverTable document={document} result={result} />
           <RunningTable document={document} result={result} />
           <VoltageTable document={document} places={result.places} />
+          <FlickerTable document={document} result={result} />
           <SupplyTable document={document} result={result} />
           <RunCounters result={result} engineVersion={summary.engineVersion} />
         </>

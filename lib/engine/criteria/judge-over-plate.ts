@@ -14,7 +14,7 @@ const byWorse = (a: Verdict, b: Verdict): number =>
 /**
  * Holds one rule against a case and against all its machines that meet the same plates; the worst speaks.
  *
- * Envelopes need the curve in time, which is kept for the case itself alone: they are held against it alone.
+ * Envelopes and flicker need the curve in time, which is kept for the case itself: they are held against it alone.
  */
 export function judgeOverPlate(
   rule: RuleInput,
@@ -27,7 +27,9 @@ export function judgeOverPlate(
   const others = (result.variants ?? []).filter(({ kind }) => kind === 'same-plate')
   if (own === null || others.length === 0 || rule.limit.kind === 'envelope') return own
   const all = others.flatMap(({ result: other }) => {
-    const verdict = judge(rule, input, { ...other, series: result.series }, starts, margins)
+    // Curves and the flicker that follows from them are those of the case itself.
+    const { series, flicker } = result
+    const verdict = judge(rule, input, { ...other, series, ...(flicker && { flicker }) }, starts, margins)
     return verdict === null ? [] : [verdict]
   })
   const worst = [own, ...all].reduce((least, each) => (byWorse(each, least) < 0 ? each : least))

@@ -121,6 +121,21 @@ function startFigure(rule: RuleInput, motor: MotorInput, result: MotorResult | u
   return { kind: 'value', value: figure, ...where, at: null }
 }
 
+/** Severities at the places of a rule. */
+function flickerFigures(rule: RuleInput, result: CaseResult): Measurement[] {
+  const { place } = rule
+  const all = result.flicker ?? []
+  const found = place.kind === 'bus' ? all.filter(({ busId }) => busId === place.busId) : all
+  if (found.length === 0) {
+    const busId = place.kind === 'bus' ? place.busId : null
+    return [{ kind: 'unknown', reason: 'state-not-reached', busId, motorId: null }]
+  }
+  return found.map(({ busId, shortTerm, longTerm }) => {
+    const value = rule.quantity === 'flicker-short-term' ? shortTerm.meter : longTerm.meter
+    return { kind: 'value', value, busId, motorId: null, at: null }
+  })
+}
+
 /** Every figure of a case that a rule with a single value is held against. */
 export function measure(rule: RuleInput, input: CaseInput, result: CaseResult): Measurement[] {
   if (rule.quantity === 'run-up-time' || rule.quantity === 'accelerating-torque' || rule.quantity === 'heat-used') {
@@ -132,6 +147,8 @@ export function measure(rule: RuleInput, input: CaseInput, result: CaseResult): 
       ),
     )
   }
+  if (rule.quantity === 'flicker-short-term' || rule.quantity === 'flicker-long-term')
+    return flickerFigures(rule, result)
   const places = voltagePlaces(rule, input, result)
   if (places === null) {
     const busId = rule.place.kind === 'bus' ? rule.place.busId : null

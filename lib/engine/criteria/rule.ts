@@ -10,7 +10,8 @@ export type RulePlace =
 
 /**
  * What is limited. Change: (U before − U)/reference, the largest for `deepest`. Remaining: U/reference, the least.
- * Highest: U/reference, the largest over the run. Time in s, torque in parts of rated torque, heat in parts of the permissible.
+ * Highest: U/reference, the largest over the run. Time in s, torque in parts of rated torque, heat in parts of the permissible,
+ * flicker as the severity that the flickermeter gives.
  */
 export type RuleQuantity =
   | 'voltage-change'
@@ -19,6 +20,8 @@ export type RuleQuantity =
   | 'run-up-time'
   | 'accelerating-torque'
   | 'heat-used'
+  | 'flicker-short-term'
+  | 'flicker-long-term'
 
 export type RuleInstant = 'first' | 'deepest' | 'settled-after-start' | 'settled-after-process'
 

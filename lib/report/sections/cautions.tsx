@@ -38,6 +38,7 @@ export const cautions: Section = (context) => {
   const { paper, input, words, width } = context
   const { cautions: say } = words
   const leftOut = input.document.texts.leftOut.map((part) => [say.missing.parts[part], say.missing.leftOut] as const)
+  const hasFlicker = input.result.cases.some(({ flicker }) => flicker !== undefined)
   return [
     chapter(context, 'cautions', say.title),
     ...list(paper, say.disclaimer, { width }),
@@ -51,7 +52,9 @@ export const cautions: Section = (context) => {
         { head: say.missing.heads.part, width: 120, fixed: true },
         { head: say.missing.heads.why, width: 1 },
       ],
-      rows: [...leftOut, ...say.missing.items].map(([part, why]) => [{ text: part, weight: 'semibold' as const }, why]),
+      rows: [...leftOut, ...say.missing.items.filter(([part]) => part !== say.missing.flicker || !hasFlicker)].map(
+        ([part, why]) => [{ text: part, weight: 'semibold' as const }, why],
+      ),
     }),
   ]
 }

@@ -21,6 +21,8 @@ export const limitRecord = z.strictObject({
     'run-up-time',
     'accelerating-torque',
     'heat-used',
+    'flicker-short-term',
+    'flicker-long-term',
   ]),
   instant: z
     .enum(['first', 'deepest', 'settled-after-start', 'settled-after-process'])

@@ -24,6 +24,8 @@ const fits: Record<
   'run-up-time': { places: starting, where: 'the starting motors', limits: ['time'], form: 'a time' },
   'accelerating-torque': { places: starting, where: 'the starting motors', limits: ['ratio'], form: 'a ratio' },
   'heat-used': { places: starting, where: 'the starting motors', limits: ['ratio'], form: 'a ratio' },
+  'flicker-short-term': { places: buses, where: 'a bus', limits: ['ratio'], form: 'a severity such as 0.9' },
+  'flicker-long-term': { places: buses, where: 'a bus', limits: ['ratio'], form: 'a severity such as 0.7' },
 }
 
 /** The references that make sense for a voltage at a place; other quantities have none to choose. */

@@ -39,6 +39,13 @@ const circuitsOf = (document: StudyDocument, index: RecordIndex) => {
   return { circuits, issues }
 }
 
+/** Places that limits on flicker name, with the intended starts an hour; null where none does. */
+const flickerOf = ({ limits, plant, settings }: StudyDocument) => {
+  const asked = limits.filter(({ quantity }) => quantity === 'flicker-short-term' || quantity === 'flicker-long-term')
+  const busIds = asked.flatMap(({ place }) => (place.kind === 'bus' ? [place.bus] : plant.buses.map(({ id }) => id)))
+  return busIds.length === 0 ? null : { busIds: [...new Set(busIds)], startsPerHour: settings.startsPerHour.si }
+}
+
 const refuse = (issues: readonly FieldIssue[]): DomainError =>
   new DomainError('invalid', `The study cannot be computed: ${issues[0]?.message}`, issues)
 
@@ -53,13 +60,17 @@ export const studyRunInput = (document: StudyDocument): StudyRunInput => {
   const { circuits, issues } = circuitsOf(document, index)
   if (issues.length > 0) throw refuse(issues)
   const { settings, cases, limits, frequency } = document
+  const flicker = flickerOf(document)
   const onPlate = plateCircuits(frequency.si)
   const others = (motorId: string): readonly MachineModel[] => {
     const motor = index.motors.get(motorId)
     return motor ? onPlate(motor).map((circuit) => machineModel(motor, circuit, frequency.si)) : []
   }
   return {
-    cases: cases.map((record) => caseInputOf(document, record, index, circuits, others)),
+    cases: cases.map((record) => ({
+      ...caseInputOf(document, record, index, circuits, others),
+      ...(flicker && { flicker }),
+    })),
     rules: limits.map((limit) => ruleInputOf(limit, cases)),
     starts: { perDay: settings.startsPerDay.si, perHour: settings.startsPerHour.si },
     margins: { ofLimit: perUnit(settings.closeOfLimit.si), voltage: perUnit(settings.closeVoltage.si) },

@@ -13,6 +13,7 @@ interface Print {
 const percent: Print = { unit: '%', factor: 0.01, decimals: 2, limitDecimals: 1 }
 const wholePercent: Print = { unit: '%', factor: 0.01, decimals: 1, limitDecimals: 0 }
 const perUnit: Print = { unit: 'pu', factor: 1, decimals: 3, limitDecimals: 2 }
+const severity: Print = { unit: '', factor: 1, decimals: 2, limitDecimals: 1 }
 const seconds: Print = { unit: 's', factor: 1, decimals: 2, limitDecimals: 0 }
 
 const prints: Record<RuleQuantity, Print> = {
@@ -22,6 +23,8 @@ const prints: Record<RuleQuantity, Print> = {
   'run-up-time': seconds,
   'accelerating-torque': wholePercent,
   'heat-used': wholePercent,
+  'flicker-short-term': severity,
+  'flicker-long-term': severity,
 }
 
 /** More decimals than a double holds of these figures. */
@@ -102,7 +105,7 @@ export const verdictFigure = (
   reason: NotAssessedReason | null,
 ): string => {
   const side = atLeast(quantity) ? 'at least' : 'at most'
-  const unit = `\u2009${formatted.unit}`
+  const unit = formatted.unit === '' ? '' : `\u2009${formatted.unit}`
   const none = reason === null ? 'not reached' : notAssessedReasons[reason]
   return `${formatted.value === null ? none : formatted.value + unit} (${side} ${formatted.limit}${unit})`
 }

@@ -47,13 +47,17 @@ export const limitedQuantity = ({ quantity, instant }: LimitRecord, { settings }
       return 'least accelerating torque up to 95 % of rated speed'
     case 'heat-used':
       return `heat used from ${settings.thermalState}`
+    case 'flicker-short-term':
+      return 'short-term flicker Pst by flickermeter'
+    case 'flicker-long-term':
+      return 'long-term flicker Plt by flickermeter'
   }
 }
 
 const parts = ({ quantity, reference }: LimitRecord): string => {
   if (quantity === 'heat-used') return ' of the permissible locked-rotor heat'
   if (quantity === 'accelerating-torque') return ' of rated torque'
-  if (quantity === 'run-up-time') return ''
+  if (quantity === 'run-up-time' || quantity === 'flicker-short-term' || quantity === 'flicker-long-term') return ''
   return { before: ' of the voltage before the start', nominal: ' of nominal', rated: ' of rated voltage' }[reference]
 }
 

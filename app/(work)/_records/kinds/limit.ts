@@ -126,6 +126,8 @@ export const limit: KindDescription = {
         { value: 'run-up-time', label: 'run-up time' },
         { value: 'accelerating-torque', label: 'least accelerating torque' },
         { value: 'heat-used', label: 'heat used' },
+        { value: 'flicker-short-term', label: 'short-term flicker Pst' },
+        { value: 'flicker-long-term', label: 'long-term flicker Plt' },
       ],
     },
     {

@@ -4,6 +4,7 @@ import { small } from '../../theme'
 import { computedRuns, runsOf } from '../../values/roles'
 import type { Section } from '../section'
 import { changeOverTable } from './change-over-table'
+import { flickerTable } from './flicker-table'
 import { notices } from './notices'
 import { openRanges } from './open-ranges'
 import { runningTable } from './running-table'
@@ -28,6 +29,7 @@ export const results: Section = (context) => {
     ...design.map((run) => voltageTable(context, run)),
     subsection(context, 'results-running', say.running.title),
     ...runningTable(context, ['design']),
+    ...flickerTable(context),
     subsection(context, 'results-ranges', say.ranges.title),
     ...openRanges(context),
     subsection(context, 'results-notices', say.notices.title),

@@ -34,13 +34,11 @@ export const cautions = {
         'Tolerance analysis',
         'Tolerances were not sampled; named corners are computed as sensitivities where they are listed.',
       ],
-      [
-        'Flicker severity',
-        'Pst and Plt are not part of the computed study; limits on single changes are held instead.',
-      ],
+      ['Flicker severity', 'No limit on Pst or Plt is in the limits sheet; limits on single changes are held instead.'],
       ['Protection overlay', 'No protection curve is part of the records.'],
       ['Starter failed or bypassed', 'Covered only where a compared case starts the motor direct-on-line.'],
     ] as readonly (readonly [string, string])[],
+    flicker: 'Flicker severity',
     leftOut: 'Left out by the author of this revision.',
     parts: {
       plots: 'Plots',

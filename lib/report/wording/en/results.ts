@@ -93,6 +93,22 @@ export const results = {
       outcome: 'Outcome',
     },
   },
+  flicker: {
+    title: 'Flicker and rapid change',
+    intro: (perHour: string) =>
+      `Severity of the starts at ${perHour} an hour at most: the worst ten minutes, and two hours of them. By flickermeter (IEC 61000-4-15, on the simulated RMS voltage, with the lamp named) and by shape factor (IEC 61000-3-3 with the factor 1 of a step); the two can differ by a third for a single start, and limits are held against the flickermeter. Changes are of nominal voltage.`,
+    heads: {
+      case: 'Case',
+      place: 'Place',
+      lamp: 'Lamp',
+      starts: 'Starts in 10 min / 2 h',
+      settled: 'd_{c}, %',
+      largest: 'd_{max}, %',
+      above: 'Above 3.3 %, s',
+      shortTerm: 'P_{st} meter / shape',
+      longTerm: 'P_{lt} meter / shape',
+    },
+  },
   ranges: {
     title: 'What the records leave open',
     intro:
