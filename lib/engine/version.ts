@@ -1,11 +1,16 @@
 /** Rises whenever a number of the engine moves, so that stored results say what computed them. */
-export const ENGINE_VERSION = '1.1.0'
+export const ENGINE_VERSION = '1.2.0'
 
 /**
  * What changed in the numbers and why, newest first.
  * @public
  */
 export const ENGINE_LOG: readonly { version: string; change: string }[] = [
+  {
+    version: '1.2.0',
+    change:
+      'Circuits that meet one plate reach to the ends of run-up time and least torque; a plate that none meets has them too.',
+  },
   {
     version: '1.1.0',
     change: 'Verdicts on an estimated circuit come from the worst of the circuits that meet its plate.',

@@ -1,9 +1,12 @@
 import { loadSegments, loadTorqueAt } from '../engine/driven/load-segments'
+import { plateContradictions } from '../engine/estimate/plate-problems'
 import type { FieldIssue } from '../errors'
 import { assumptions } from './assumptions'
 import type { StudyDocument } from './document/study-document'
 import { fieldPlace } from './field-place'
 import { loadCurveInput } from './to-engine/load-curve-input'
+import { nameplateOf } from './to-engine/nameplate-of-motor'
+import { contradictionSentence } from './words/plate-words'
 
 /** A question that reviewers always ask, with what there is to say to it; passed when there is nothing. */
 export interface PreIssueCheck {
@@ -69,6 +72,14 @@ const powerFactorMissing: Finder = ({ plant }) =>
         ]
       : [],
   )
+
+const plateContradicts: Finder = ({ plant, frequency }) =>
+  plant.motors.flatMap((motor, i) => {
+    const plate = nameplateOf(motor, frequency.si)
+    return plate === null
+      ? []
+      : plateContradictions(plate).map((kind) => issue(['plant', 'motors', i], contradictionSentence[kind](motor.tag)))
+  })
 
 const noBreakaway: Finder = ({ plant }) =>
   plant.drivenLoads.flatMap(({ tag, curves }, i) =>
@@ -161,6 +172,7 @@ const questions: readonly [id: string, sentence: string, find: Finder][] = [
   ['weakest', 'The weakest supply condition is computed', weakestMissing],
   ['voltage-factor', 'The voltage factor in every level is known', factorUnknown],
   ['power-factor', 'The locked-rotor power factor is declared where a circuit is estimated', powerFactorMissing],
+  ['plate', 'The values on each nameplate agree', plateContradicts],
   ['standstill', 'Every driven load holds its shaft at standstill', noBreakaway],
   ['pull-up', 'The torque data has a pull-up point', noPullUp],
   ['running', 'Running motors are in the network', nothingRuns],

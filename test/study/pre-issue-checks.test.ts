@@ -24,6 +24,7 @@ test.each<[string, (document: StudyDocument) => unknown]>([
     'power-factor',
     ({ plant }) => Object.assign(plant.motors[0]!, { circuit: { kind: 'estimated' }, lockedRotorPowerFactor: null }),
   ],
+  ['plate', ({ plant }) => Object.assign(plant.motors[0]!, { codeLetter: 'A' })],
   ['running', ({ plant }) => plant.plantConditions.map((condition) => Object.assign(condition, { running: [] }))],
   ['clauses', ({ limits }) => Object.assign(limits[0]!, { clause: '' })],
   ['tolerance', (document) => document.cases.map((one) => Object.assign(one, { changes: [] }))],

@@ -2,6 +2,7 @@ import type { InductionCircuit } from '@/lib/engine/case-input'
 import { formatNumber } from '@/lib/quantity/format-number'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import { circuitEstimator } from '@/lib/study/to-engine/circuit-input'
+import { contradictionSentence, plateNotMetSentence } from '@/lib/study/words/plate-words'
 import { Notice } from '@/lib/ui/notice'
 import { FigureTable } from './figure-table'
 
@@ -34,6 +35,20 @@ export function EstimatedCircuits({ document }: { document: StudyDocument }) {
           </Notice>
         ) : null,
       )}
+      {estimated.flatMap(({ motor, contradictions, flags }) => [
+        ...contradictions.map((kind) => (
+          <Notice key={`${motor.id}-${kind}`} tone="caution">
+            {contradictionSentence[kind](motor.tag)}
+          </Notice>
+        )),
+        ...(flags.some(({ kind }) => kind === 'not-met')
+          ? [
+              <Notice key={`${motor.id}-not-met`} tone="caution">
+                {plateNotMetSentence(motor.tag)}
+              </Notice>,
+            ]
+          : []),
+      ])}
       <FigureTable
         caption="Star circuit, ohm per phase, rotor referred to the stator"
         items={estimated}

@@ -44,6 +44,23 @@ export const toCircuit = (unknowns: Unknowns, base: number): InductionCircuit =>
   }
 }
 
+/**
+ * Writes the circuit of the unknowns, in per unit, into the first row of a machine table, whose layout is said there:
+ * what the search does thousands of times without making an object.
+ */
+export const writeCircuit = (row: Float64Array, unknowns: Unknowns): void => {
+  const inner = Math.exp(unknowns[4]!)
+  const outerReactance = Math.exp(unknowns[6]!)
+  row[0] = Math.exp(unknowns[0]!)
+  row[1] = Math.exp(unknowns[1]!)
+  row[2] = Math.exp(-unknowns[2]!)
+  row[3] = Math.exp(-unknowns[3]!)
+  row[4] = inner
+  row[5] = outerReactance * (1 + Math.exp(unknowns[7]!))
+  row[6] = inner * (1 + Math.exp(unknowns[5]!))
+  row[7] = outerReactance
+}
+
 const clamp = (value: number, low: number, high: number): number => Math.min(high, Math.max(low, value))
 
 /** The plainest circuit that such a plate suggests: losses shared by halves, leakage shared by halves. */

@@ -5,6 +5,8 @@ export interface LeastSquaresProblem {
   residuals(x: Float64Array): readonly number[]
   low: Float64Array
   high: Float64Array
+  /** Part of the cost that a step must gain to be followed by another (default 1e-12). */
+  leastGain?: number
 }
 
 export interface LeastSquaresResult {
@@ -18,11 +20,12 @@ const sumOfSquares = (values: readonly number[]): number => values.reduce((sum, 
 
 /**
  * Least sum of squares in a box by damped normal equations (Levenberg-Marquardt) with central differences of 1e-5.
- * A component at its bound is held there while the slope pushes outwards. Ends when a step gains less than 1e-12 of
- * the cost, after 60 steps, or when no damping finds a descent; the result is then the best point met.
+ * A component at its bound is held there while the slope pushes outwards. Ends when a step gains less than `leastGain`
+ * of the cost, after 60 steps, or when no damping finds a descent; the result is then the best point met.
  */
 export const dampedLeastSquares = (problem: LeastSquaresProblem, start: Float64Array): LeastSquaresResult => {
   const n = start.length
+  const leastGain = problem.leastGain ?? 1e-12
   const x = Float64Array.from(start)
   let residuals = problem.residuals(x)
   let cost = sumOfSquares(residuals)
@@ -95,7 +98,7 @@ export const dampedLeastSquares = (problem: LeastSquaresProblem, start: Float64A
       evaluations++
       const costThere = solved ? sumOfSquares(there) : Number.POSITIVE_INFINITY
       if (costThere < cost) {
-        gained = cost - costThere > 1e-12 * cost
+        gained = cost - costThere > leastGain * cost
         x.set(trial)
         residuals = there
         cost = costThere

@@ -1,7 +1,8 @@
 import type { InductionCircuit } from '../case-input'
-import { highest, lowest, plainGuess, toCircuit, type UnknownName, unknownNames } from './circuit-unknowns'
-import { type Fit, fading, fitFrom } from './fit-circuit'
-import { inPerUnit, type Nameplate, type PlateInPerUnit, plateBase } from './nameplate'
+import { bestFit } from './best-fit'
+import { highest, lowest, toCircuit, type UnknownName, unknownNames } from './circuit-unknowns'
+import type { Fit } from './fit-circuit'
+import { inPerUnit, type Nameplate, plateBase } from './nameplate'
 import { type PlateQuantity, stated } from './plate-mismatch'
 import { type PlateContradiction, type PlateRefusal, plateContradictions, refusePlate } from './plate-problems'
 
@@ -30,33 +31,6 @@ export type EstimateOutcome =
     }
   | { kind: 'refused'; cause: PlateRefusal; detail: string }
 
-/** Residual at which a start is good enough that no other one is tried. */
-const goodEnough = 1e-5
-
-/** Where the search begins beside the plain guess: shifts of the unknowns, as logarithms. */
-const otherStarts: readonly (readonly number[])[] = [
-  [0.7, 0, 0, 0.7, -0.4, 0.8, 0, 0.8],
-  [-0.7, 0.4, 0, -0.4, 0.3, -0.8, -0.4, -0.8],
-  [0, -0.6, 0.5, 0, -0.2, 1.4, 0.5, 0],
-  [-1.2, 0.5, -0.3, 0, 0, 0.5, -0.8, 1.5],
-  [0.4, -0.9, 0.2, 1.2, 0.2, 0, 0.7, -1.5],
-  [1.1, 0.3, 0, 1.6, -0.3, 2, -0.9, 1.2],
-  [-1.8, 0, 0, -0.8, 0.1, -1.5, 0.2, 0.4],
-]
-
-/** The first start that meets the plate, else the nearest of all. */
-const bestFit = (plate: PlateInPerUnit): Fit => {
-  const guess = plainGuess(plate)
-  let best = fitFrom(plate, guess, fading, guess)
-  for (const shift of otherStarts) {
-    if (best.largest <= goodEnough) break
-    const start = guess.map((value, i) => Math.min(highest[i]!, Math.max(lowest[i]!, value + shift[i]!)))
-    const other = fitFrom(plate, start, fading.slice(3), guess)
-    if (other.largest < best.largest) best = other
-  }
-  return best
-}
-
 const flagsOf = (found: Fit, residuals: readonly PlateResidual[]): readonly EstimateFlag[] => [
   ...residuals
     .filter(({ residual }) => Math.abs(residual) > 1e-3)
@@ -75,7 +49,11 @@ const flagsOf = (found: Fit, residuals: readonly PlateResidual[]): readonly Esti
  * Eight unknowns in logarithms, per unit on P/(η·cos φ), in a box of plausible values; damped least squares with priors
  * that fade, so that among all circuits that meet the plate the one nearest to the plain guess is taken. Friction and
  * stray losses lie in the core resistance. Valid for cage motors of about 11 kW to 15 MW. A plate does not fix the
- * run-up: circuits that meet the same plate differ by a fifth in run-up time.
+ * run-up: circuits that meet the same plate differ by a fifth in run-up time (`circuitsOnPlate`).
+ *
+ * A plate that no constant circuit can have gives the one with the least sum of squares, its residuals and flags. Small
+ * motors from catalogues are often of this kind: their locked-rotor current asks for less leakage than their breakdown
+ * torque, which is what saturation of the leakage paths does and constant parameters cannot.
  * Refused, with the reason, where no circuit can have such a plate (efficiency at or above 1 − slip, for example).
  */
 export const estimateCircuit = (plate: Nameplate): EstimateOutcome => {

@@ -1,7 +1,8 @@
-import { highest, looseness, lowest, toCircuit, type Unknowns } from './circuit-unknowns'
+import { machineTable } from '../machines/machine-table'
+import { highest, looseness, lowest, toCircuit, type Unknowns, writeCircuit } from './circuit-unknowns'
 import { dampedLeastSquares } from './damped-least-squares'
 import type { PlateInPerUnit } from './nameplate'
-import { fitResiduals, plateFigures, relativeMismatch, stated } from './plate-mismatch'
+import { fitResiduals, relativeMismatch, stated, tableFigures } from './plate-mismatch'
 
 /** Weights of the priors, from a firm hand to one that only picks among equals. */
 export const fading = [0.1, 0.03, 0.01, 3e-3, 1e-3, 1e-4, 1e-5, 1e-6]
@@ -11,7 +12,13 @@ export interface Fit {
   unknowns: Unknowns
   residuals: readonly number[]
   largest: number
+  /** Sum of squares of what the fit drives to zero, without the priors: what ranks circuits that miss the plate. */
+  cost: number
 }
+
+/** Part of the cost that a step must gain to be followed by another: less where the weight fades further anyway. */
+const gainOnTheWay = 1e-5
+const gainAtTheEnd = 1e-9
 
 /**
  * Fits a circuit to a plate from a start, with priors towards a guess whose weights follow one after the other.
@@ -20,19 +27,26 @@ export interface Fit {
  */
 export const fitFrom = (plate: PlateInPerUnit, start: Unknowns, weights: readonly number[], guess: Unknowns): Fit => {
   const wanted = stated(plate)
+  const table = machineTable([toCircuit(start, 1)])
+  const gap = (x: Unknowns): number[] => {
+    writeCircuit(table.circuit, x)
+    return fitResiduals(table, plate.slip, wanted)
+  }
   let unknowns = start
-  for (const weight of weights) {
+  weights.forEach((weight, stage) => {
     const problem = {
       low: lowest,
       high: highest,
-      residuals: (x: Unknowns) => [
-        ...fitResiduals(toCircuit(x, 1), plate.slip, wanted),
-        ...Array.from(x, (value, i) => (weight * (value - guess[i]!)) / looseness[i]!),
-      ],
+      leastGain: stage === weights.length - 1 ? gainAtTheEnd : gainOnTheWay,
+      residuals: (x: Unknowns) => {
+        const all = gap(x)
+        for (let i = 0; i < x.length; i++) all.push((weight * (x[i]! - guess[i]!)) / looseness[i]!)
+        return all
+      },
     }
     unknowns = dampedLeastSquares(problem, unknowns).x
-  }
-  const { figures } = plateFigures(toCircuit(unknowns, 1), plate.slip)
-  const residuals = relativeMismatch(figures, wanted)
-  return { unknowns, residuals, largest: Math.max(...residuals.map(Math.abs)) }
+  })
+  const cost = gap(unknowns).reduce((sum, value) => sum + value * value, 0)
+  const residuals = relativeMismatch(tableFigures(table, plate.slip).figures, wanted)
+  return { unknowns, residuals, largest: Math.max(...residuals.map(Math.abs)), cost }
 }

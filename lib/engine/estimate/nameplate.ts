@@ -1,4 +1,4 @@
-import type { Ampere, Hertz, NewtonMetre, RadianPerSecond, Volt, Watt } from '../../units/si'
+import type { Ampere, Hertz, NewtonMetre, RadianPerSecond, Volt, VoltAmpere, Watt } from '../../units/si'
 
 /** What a nameplate or data sheet says of a cage motor, at rated voltage; null where it is silent. */
 export interface Nameplate {
@@ -15,6 +15,11 @@ export interface Nameplate {
   lockedRotorTorque: NewtonMetre | null
   breakdownTorque: NewtonMetre | null
   lockedRotorPowerFactor: number | null
+  /** Only held against the rest, as the rated current; absent or null where the plate is silent. */
+  ratedTorque?: NewtonMetre | null
+  pullUpTorque?: NewtonMetre | null
+  /** Locked-rotor apparent power at rated voltage that the plate's code letter stands for: from (held), below (not held). */
+  lockedRotorCode?: { from: VoltAmpere; below: VoltAmpere | null } | null
 }
 
 /** The plate in per unit on P/(η·cos φ) and rated voltage, torque on that power over synchronous speed. */

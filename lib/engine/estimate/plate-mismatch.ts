@@ -32,7 +32,11 @@ export const plateFigures = (
   circuit: InductionCircuit,
   slip: number,
 ): { figures: Figures; peaks: readonly number[] } => {
-  const table = machineTable([circuit])
+  return tableFigures(machineTable([circuit]), slip)
+}
+
+/** As `plateFigures`, of the first machine of a table. */
+export const tableFigures = (table: MachineTable, slip: number): { figures: Figures; peaks: readonly number[] } => {
   const rated = drawn(table, slip)
   const locked = drawn(table, 1)
   const shaft = (1 - slip) * rated.airgap
@@ -87,8 +91,8 @@ const peakResiduals = (peaks: readonly number[], value: number): readonly number
  * What the fit drives to zero. Efficiency counts by its losses, since a part in a thousand of efficiency is some
  * percent of them; it weighs less, for a plate is least exact there.
  */
-export const fitResiduals = (circuit: InductionCircuit, slip: number, wanted: readonly Stated[]): readonly number[] => {
-  const { figures, peaks } = plateFigures(circuit, slip)
+export const fitResiduals = (table: MachineTable, slip: number, wanted: readonly Stated[]): number[] => {
+  const { figures, peaks } = tableFigures(table, slip)
   return wanted.flatMap(([name, value]) => {
     if (name === 'efficiency') return [0.3 * ((1 - figures.efficiency) / (1 - value) - 1)]
     if (name === 'breakdown-torque') return peakResiduals(peaks, value)

@@ -10,7 +10,20 @@ export type PlateRefusal =
   | 'locked-rotor-torque-above-input'
 
 /** What does not fit together on a plate and still leaves a circuit that comes near. */
-export type PlateContradiction = 'rated-current' | 'breakdown-below-locked-rotor'
+export type PlateContradiction =
+  /** Rated current against P/(√3·U·η·cos φ). */
+  | 'rated-current'
+  /** Rated torque against P/ω. */
+  | 'rated-torque'
+  /** Locked-rotor current against the range of the code letter. */
+  | 'locked-rotor-code'
+  | 'breakdown-below-locked-rotor'
+  /** The least torque between standstill and breakdown cannot exceed the torque at either end. */
+  | 'pull-up-above-locked-rotor'
+  | 'pull-up-above-breakdown'
+
+/** Plates round efficiency, power factor and current to three digits each: 1.5 % is still the same motor. */
+const rounding = 0.015
 
 const percent = (value: number): string => `${(100 * value).toFixed(2)} %`
 
@@ -22,7 +35,13 @@ const isPositive = (value: number | null): boolean => value === null || (value >
 export const refusePlate = (plate: Nameplate): { cause: PlateRefusal; detail: string } | null => {
   const { ratedPower, ratedVoltage, frequency, poles, ratedSpeed, efficiency, powerFactor } = plate
   const magnitudes = [ratedPower, ratedVoltage, frequency, poles, ratedSpeed, plate.lockedRotorCurrent]
-  const optional = [plate.ratedCurrent, plate.lockedRotorTorque, plate.breakdownTorque]
+  const optional = [
+    plate.ratedCurrent,
+    plate.lockedRotorTorque,
+    plate.breakdownTorque,
+    plate.ratedTorque ?? null,
+    plate.pullUpTorque ?? null,
+  ]
   const lockedPowerFactor = plate.lockedRotorPowerFactor
   const parts = [efficiency, powerFactor, ...(lockedPowerFactor === null ? [] : [lockedPowerFactor])]
   if (![...magnitudes, ...optional].every(isPositive) || !parts.every(isPart) || poles % 2 !== 0)
@@ -68,17 +87,33 @@ export const refusePlate = (plate: Nameplate): { cause: PlateRefusal; detail: st
   return null
 }
 
-/** What a reader must be told beside the circuit. */
+const differs = (value: number | null | undefined, from: number): boolean =>
+  (value ?? null) !== null && Math.abs(value! / from - 1) > rounding
+
+/**
+ * Which of the values given cannot all be true: the usual six, of which the sixth, an efficiency at or above 1 − slip,
+ * is refused beforehand. Rounding of a plate, 1.5 %, is no contradiction.
+ */
 export const plateContradictions = (plate: Nameplate): readonly PlateContradiction[] => {
-  const found: PlateContradiction[] = []
-  const current = plate.ratedPower / (Math.sqrt(3) * plate.ratedVoltage * plate.efficiency * plate.powerFactor)
-  // Plates round efficiency, power factor and current to three digits each, so 1.5 % is still the same motor.
-  if (plate.ratedCurrent !== null && Math.abs(plate.ratedCurrent / current - 1) > 0.015) found.push('rated-current')
-  if (
-    plate.breakdownTorque !== null &&
-    plate.lockedRotorTorque !== null &&
-    plate.breakdownTorque < plate.lockedRotorTorque
-  )
-    found.push('breakdown-below-locked-rotor')
-  return found
+  const { ratedPower, ratedSpeed, ratedVoltage, lockedRotorTorque: locked, breakdownTorque: breakdown } = plate
+  const pullUp = plate.pullUpTorque ?? null
+  const code = plate.lockedRotorCode ?? null
+  const lockedInput = Math.sqrt(3) * ratedVoltage * plate.lockedRotorCurrent
+  const current = ratedPower / (Math.sqrt(3) * ratedVoltage * plate.efficiency * plate.powerFactor)
+  const above = (value: number | null, other: number | null): boolean =>
+    value !== null && other !== null && value > other * (1 + 1e-9)
+  const found: readonly (readonly [PlateContradiction, boolean])[] = [
+    ['rated-current', differs(plate.ratedCurrent, current)],
+    ['rated-torque', differs(plate.ratedTorque, ratedPower / ratedSpeed)],
+    [
+      'locked-rotor-code',
+      code !== null &&
+        (lockedInput < code.from * (1 - rounding) ||
+          (code.below !== null && lockedInput >= code.below * (1 + rounding))),
+    ],
+    ['breakdown-below-locked-rotor', above(locked, breakdown)],
+    ['pull-up-above-locked-rotor', above(pullUp, locked)],
+    ['pull-up-above-breakdown', above(pullUp, breakdown)],
+  ]
+  return found.flatMap(([kind, holds]) => (holds ? [kind] : []))
 }

@@ -27,6 +27,17 @@ export const motorRecord = z.strictObject({
     .describe('Least torque between standstill and breakdown, as a multiple of rated torque; null where not stated.'),
   breakdownTorque: entered('ratio').nullable().default(null).describe('As a multiple of rated torque.'),
   lockedRotorPowerFactor: entered('ratio').nullable().default(null),
+  ratedTorque: entered('torque')
+    .nullable()
+    .default(null)
+    .describe('As the plate states it; held against rated power and speed, not computed with.'),
+  codeLetter: z
+    .string()
+    .regex(/^[A-HJ-NPR-V]?$/, 'A code letter is one of A to V without I, O and Q.')
+    .default('')
+    .describe(
+      'Letter of the locked-rotor code; held against the locked-rotor current, not computed with. Empty where not stated.',
+    ),
   circuit: motorCircuit,
   torquePoints: z
     .array(torquePoint)

@@ -25,8 +25,10 @@ const begins = [
 
 export type CodeLetter = (typeof begins)[number][0]
 
+export const isCodeLetter = (text: string): text is CodeLetter => begins.some(([letter]) => letter === text)
+
 /** One mechanical horsepower (550 ft·lbf/s) in watt. */
-const horsepower = 745.699871582
+export const horsepower = 745.699871582
 
 /** Locked-rotor kVA per horsepower at rated voltage: √3·U·I_LR over rated shaft power. */
 export const kvaPerHorsepower = (lockedRotorCurrent: Ampere, voltage: Volt, power: Watt): number =>

@@ -93,6 +93,7 @@ const motor = (record: MotorRecord, path: Path, frequency: number): FieldIssue[]
       [...path, 'breakdownTorque'],
       `Breakdown torque of motor ${tag}, as a multiple of rated,`,
     ),
+    ...above(record.ratedTorque, 0, [...path, 'ratedTorque'], `Rated torque of motor ${tag}`),
     ...above(record.inertia, 0, [...path, 'inertia'], `Inertia of motor ${tag}`),
     ...above(record.permissibleCold, 0, [...path, 'permissibleCold'], `Permissible time of motor ${tag}`),
     ...above(record.permissibleHot, 0, [...path, 'permissibleHot'], `Permissible time of motor ${tag}`),

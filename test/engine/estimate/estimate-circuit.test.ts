@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest'
 import { type EstimateOutcome, estimateCircuit } from '@/lib/engine/estimate/estimate-circuit'
 import type { Nameplate } from '@/lib/engine/estimate/nameplate'
 import { plateFigures } from '@/lib/engine/estimate/plate-mismatch'
-import { ampere, newtonMetre, radianPerSecond } from '@/lib/units/si'
+import { ampere, newtonMetre, radianPerSecond, voltAmpere } from '@/lib/units/si'
 import { dataSheet, doubleCage, fullLoadSlip, plateOf } from './circuit-plate'
 
 const estimated = (plate: Nameplate) => {
@@ -164,6 +164,35 @@ describe('a plate that does not fit together', () => {
   test('a rated current that power, efficiency and power factor do not give is named', () => {
     expect(estimated({ ...plate, ratedCurrent: ampere(118.2) }).contradictions).toEqual([])
     expect(estimated({ ...plate, ratedCurrent: ampere(125) }).contradictions).toEqual(['rated-current'])
+  })
+
+  test('a rated torque that is not power over speed is named', () => {
+    const torque = plate.ratedPower / plate.ratedSpeed
+    const named = (factor: number) => estimated({ ...plate, ratedTorque: newtonMetre(torque * factor) }).contradictions
+    expect(named(1.01)).toEqual([])
+    expect(named(1.03)).toEqual(['rated-torque'])
+  })
+
+  test('a locked-rotor current outside the range of its code letter is named', () => {
+    const input = Math.sqrt(3) * plate.ratedVoltage * plate.lockedRotorCurrent
+    const named = (from: number, below: number | null) =>
+      estimated({
+        ...plate,
+        lockedRotorCode: { from: voltAmpere(from * input), below: below === null ? null : voltAmpere(below * input) },
+      }).contradictions
+    expect(named(0.9, 1.02)).toEqual([])
+    expect(named(0.9, null)).toEqual([])
+    expect(named(1.05, 1.2)).toEqual(['locked-rotor-code'])
+    expect(named(0.8, 0.9)).toEqual(['locked-rotor-code'])
+  })
+
+  test('a pull-up torque above the torque at either end is named', () => {
+    const named = (multiple: number) =>
+      estimated({ ...plate, pullUpTorque: newtonMetre((multiple * plate.ratedPower) / plate.ratedSpeed) })
+        .contradictions
+    expect(named(0.8)).toEqual([])
+    expect(named(0.9)).toEqual(['pull-up-above-locked-rotor'])
+    expect(named(2.3)).toEqual(['pull-up-above-locked-rotor', 'pull-up-above-breakdown'])
   })
 
   test('a breakdown torque below the locked-rotor torque is named', () => {

@@ -53,6 +53,8 @@ export const fields = {
   efficiency: 'Efficiency',
   powerFactor: 'Power factor',
   ratedCurrent: 'Rated current',
+  ratedTorque: 'Rated torque',
+  codeLetter: 'Locked-rotor code letter',
   lockedRotorCurrent: 'Locked-rotor current',
   lockedRotorTorque: 'Locked-rotor torque, × rated',
   pullUpTorque: 'Pull-up torque, × rated',
