@@ -1,6 +1,7 @@
 import type { ChangeOverResult, MotorResult, RunningResult, StartResult } from '../engine/case-result'
 import type { StudyDocument } from '../study/document/study-document'
 import type { CaseSummary } from '../study/summary'
+import { changeOverTargetWords } from '../study/words/change-over-words'
 import { startOutcomeWords } from '../study/words/outcome-words'
 import { caseTag, motorTag } from '../study/words/tags'
 import { toRpm } from '../units/speed'
@@ -36,6 +37,8 @@ const startColumns: Columns<StartResult> = [
   ['heat used, %', ({ heatUsed }) => heatUsed.figure && 100 * heatUsed.figure],
   ['against the permissible time', ({ heatUsed }) => heatUsed.state],
   ['settled speed, r/min', ({ settledSpeed }) => settledSpeed && toRpm(settledSpeed)],
+  ['time on the starting device, s', ({ device }) => device?.time ?? null],
+  ['duty of the starting device', ({ device }) => device?.verdict.replaceAll('-', ' ') ?? null],
 ]
 
 const runningColumns: Columns<RunningResult> = [
@@ -51,7 +54,7 @@ const runningColumns: Columns<RunningResult> = [
 ]
 
 const changeOverColumns: Columns<ChangeOverResult> = [
-  ['to', ({ to }) => to],
+  ['to', ({ to }) => changeOverTargetWords[to]],
   ['at, s', ({ at }) => at],
   ['speed, r/min', ({ speed }) => toRpm(speed)],
   ['line current, A', ({ state }) => state.lineCurrent],
@@ -79,22 +82,19 @@ const table = <T>(
 
 const present = <T>(
   cases: readonly CaseSummary[],
-  pick: (motor: MotorResult) => T | null,
+  pick: (motor: MotorResult) => readonly T[],
 ): { caseId: string; motorId: string; of: T }[] =>
   cases.flatMap(({ caseId, motors }) =>
-    motors.flatMap((motor) => {
-      const of = pick(motor)
-      return of === null ? [] : [{ caseId, motorId: motor.motorId, of }]
-    }),
+    motors.flatMap((motor) => pick(motor).map((of) => ({ caseId, motorId: motor.motorId, of }))),
   )
 
-/** Every started motor of every case. */
+/** Every start of every case, each attempt in a row. */
 export const startTable = (document: StudyDocument, cases: readonly CaseSummary[]): Table =>
   table(
     'starts',
     startColumns,
     document,
-    present(cases, ({ start }) => start),
+    present(cases, ({ start, earlierAttempts }) => [...(earlierAttempts ?? []), ...(start ? [start] : [])]),
   )
 
 /** Every machine that was running before a start. */
@@ -103,7 +103,7 @@ export const runningTable = (document: StudyDocument, cases: readonly CaseSummar
     'running-machines',
     runningColumns,
     document,
-    present(cases, ({ running }) => running),
+    present(cases, ({ running }) => (running ? [running] : [])),
   )
 
 /** State just after each starting device moved on. */

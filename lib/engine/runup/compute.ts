@@ -141,8 +141,8 @@ function prepareCourses(system: System, before: Float64Array): Courses {
         extraAtCriterion: null,
         standstill: null,
         outcome: null,
-        speed95: 0.95 * motor.ratedSpeed,
-        speedCriterion: speedCriterion * motor.ratedSpeed,
+        speed95: 0.95 * speedOf(motor),
+        speedCriterion: speedCriterion * speedOf(motor),
         watches: {
           line: watch(placeOf(system, i, 'lineCurrent'), -1, false),
           motor: watch(placeOf(system, i, 'motorCurrent'), -1, false),
@@ -180,3 +180,9 @@ function prepareCourses(system: System, before: Float64Array): Courses {
 
 const contactorOf = ({ duty }: MotorInput): ContactorCourse | null =>
   duty.kind === 'running' && duty.contactor ? contactorCourse(duty.contactor) : null
+
+/** Speed that a start is measured by: rated speed, or that at the end of a drive's ramp where it is lower. */
+const speedOf = ({ duty, ratedSpeed }: MotorInput): number =>
+  duty.kind === 'starting' && duty.starter.kind === 'drive' && duty.starter.bypass === null
+    ? Math.min(ratedSpeed, duty.starter.speed)
+    : ratedSpeed

@@ -382,6 +382,13 @@ describe('a variable-speed drive', () => {
     expect(weak.series.motors.M!.lineCurrent.at(-1)).toBe(0)
   })
 
+  it('has started by the speed that its ramp ends at, where that is below rated', () => {
+    const start = startBy(drive({ speed: fromRpm(900), rampTime: second(6) }), load)
+    expect(start.outcome.kind).toBe('started')
+    expect(toRpm(start.settledSpeed!)).toBeCloseTo(900, 2)
+    expect(start.timeToCriterion!).toBeCloseTo(0.98 * 6, 1)
+  })
+
   it('goes over to the line where it has a bypass', () => {
     const result = run(started(drive({ bypass: { kind: 'speed', at: fromRpm(1475) } }), load))
     expect(targets(result)).toEqual(['running'])

@@ -73,7 +73,7 @@ export const method = {
           String.raw`R_\mathrm{m}^2 + X^2 = \frac{\left|\underline{Z}_\mathrm{m}\right|^2}{k^2},\qquad k \le 1`,
           'R m squared plus X squared equals the motor impedance squared over k squared, k at most one.',
         ),
-        'Behind a drive the supply sees shaft power and losses at the drive’s own power factors, whatever the voltage; the magnetising current of the motor stays behind the converter. Losses go with the square of the motor current. The motor follows the ramp of speed as far as the limits of torque and current allow; its torque is taken as proportional to the part of the current that is not magnetising, at constant flux:',
+        'Behind a drive the supply sees shaft power and losses at the drive’s own power factors, whatever the voltage; the magnetising current of the motor stays behind the converter. Losses go with the square of the motor current. The motor follows the ramp of speed as far as the limits of torque and current allow, and has started by the same criterion on the speed at the end of its ramp where that is below rated; its torque is taken as proportional to the part of the current that is not magnetising, at constant flux:',
         formula(
           String.raw`P = T\,\omega + P_\mathrm{loss}\left(m^2 + (1-m^2)\left(\frac{T}{T_\mathrm{r}}\right)^2\right),\qquad Q = P\tan\varphi_1`,
           'P is torque times speed plus losses that go with the square of the current; Q is P times the tangent of the displacement angle.',
