@@ -123,3 +123,14 @@ export function nextInstant(
   for (const other of others) consider(other)
   return next
 }
+
+/** An instant after which nothing can be pending: every start after the other, every attempt, the disturbance. */
+export function latestEnd(starts: readonly StartCourse[], disturbed: number, timeLimit: number): number {
+  let end = disturbed
+  for (const { at, interval, former, attempts } of starts) {
+    end = Math.max(end, at)
+    if (former !== null) end += interval + timeLimit
+    for (const { runFor, rest } of attempts) end += runFor + rest
+  }
+  return end + 2 * timeLimit
+}

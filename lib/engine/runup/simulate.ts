@@ -1,12 +1,11 @@
-import { type Complex, ohm, radianPerSecond, second } from '../../units/si'
-import { isTabulated } from '../case-input'
+import { type Complex, radianPerSecond, second } from '../../units/si'
 import { pieceAt } from '../driven/load-segments'
-import { breakdownSlip } from '../machines/breakdown-slip'
 import { evaluateMachine } from '../machines/machine-table'
 import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
 import { attemptEnd, endAttempts } from './attempts'
 import { type BeforeStart, supplyPower, weakestBus } from './before-start'
+import { breakdownSpeedNow } from './breakdown-speed'
 import { contactorInstants, noteVoltage, switchContactors, tripContactors } from './contactor'
 import { type Courses, type StartCourse, untilOf } from './course'
 import { type Crossing, firstCrossings } from './crossing'
@@ -19,6 +18,7 @@ import {
   advance,
   awaitsCapacitor,
   isForlorn,
+  latestEnd,
   type Move,
   nextInstant,
   rampEnd,
@@ -338,28 +338,6 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     } else if (crossings.length > 0 && !integrator.restart(t, stride)) return collapsed(t)
     if (isOver(t)) return result({ kind: 'settled', at: t })
   }
-}
-
-/** An instant after which nothing can be pending: every start after the other, every attempt, the disturbance. */
-function latestEnd(starts: readonly StartCourse[], disturbed: number, timeLimit: number): number {
-  let end = disturbed
-  for (const { at, interval, former, attempts } of starts) {
-    end = Math.max(end, at)
-    if (former !== null) end += interval + timeLimit
-    for (const { runFor, rest } of attempts) end += runFor + rest
-  }
-  return end + 2 * timeLimit
-}
-
-/** Breakdown speed of a motor with what is in its rotor circuit now, rad/s. */
-function breakdownSpeedNow(system: System, motor: number): number {
-  const { plant } = system
-  if (system.connection.ownRotor[motor] === 1) return plant.breakdownSpeed[motor]!
-  const { circuit } = plant.motors[motor]!
-  if (isTabulated(circuit)) return plant.breakdownSpeed[motor]!
-  const share = system.connection.ownRotor[motor]!
-  const cages = circuit.cages.map((cage) => ({ ...cage, resistance: ohm(cage.resistance / share) }))
-  return plant.synchronous[motor]! * (1 - breakdownSlip({ ...circuit, cages }, plant.synchronous[motor]!))
 }
 
 /** Adds what the last stretch heated the winding beyond the integral of the terminal current. */
