@@ -40,6 +40,29 @@ export interface TransformerInput {
   toBusId: string
   ratio: number
   impedance: Complex<Ohm>
+  /** Angle by which the vector group makes the to side lag the from side, rad; left out where unstated: it then fits the loops it is in. */
+  lag?: number
+  /** What a refusal calls it; its id where left out. */
+  name?: string
+}
+
+/**
+ * Three-winding transformer: a star of three impedances behind ideal ratios, given by what is measured between pairs of
+ * windings with the third open, in ohm at the rated voltage of the first winding, in the order 1-2, 2-3, 3-1.
+ */
+export interface ThreeWindingInput {
+  id: string
+  name?: string
+  windings: readonly [ThreeWindingSide, ThreeWindingSide, ThreeWindingSide]
+  impedance: readonly [Complex<Ohm>, Complex<Ohm>, Complex<Ohm>]
+}
+
+export interface ThreeWindingSide {
+  busId: string
+  /** Voltage of this winding at no load, on its tap, over the rated voltage of the first winding. */
+  ratio: number
+  /** Angle by which it lags the first winding, rad; null where unstated. The first winding's own is 0. */
+  lag: number | null
 }
 
 /** Cable or line with its parallel conductors already combined; zero impedance joins its two buses. */
@@ -256,6 +279,8 @@ export interface CaseInput {
   buses: readonly BusInput[]
   supply: SupplyInput
   transformers: readonly TransformerInput[]
+  /** Absent where there are none. */
+  threeWindings?: readonly ThreeWindingInput[]
   lines: readonly LineInput[]
   loads: readonly StaticLoadInput[]
   capacitors: readonly CapacitorInput[]

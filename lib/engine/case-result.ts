@@ -52,7 +52,7 @@ export type CaseOutcome =
   /** The case cannot be set up, for example buses without a supply. */
   | {
       kind: 'refused'
-      cause: 'island' | 'no-supply' | 'zero-impedance-loop' | 'bad-value'
+      cause: 'island' | 'no-supply' | 'zero-impedance-loop' | 'unlike-groups' | 'bad-value'
       buses: readonly string[]
       detail: string
     }

@@ -1,6 +1,7 @@
 import type { Complex } from '../../units/si'
-import type { CapacitorInput, LineInput, TransformerInput } from '../case-input'
-import { reciprocal, scale } from '../numeric/complex'
+import type { CapacitorInput, LineInput, ThreeWindingInput, TransformerInput } from '../case-input'
+import { multiply, reciprocal, scale } from '../numeric/complex'
+import { couplings } from './three-winding'
 import { isJoint, type Topology } from './topology'
 
 /**
@@ -29,11 +30,29 @@ export function addBranch(matrix: AdmittanceMatrix, i: number, j: number, y: Com
   addElement(matrix, j, i, scale(y, -1))
 }
 
+/** An ideal ratio at one end of a coupling: the end's voltage over the common one, and the angle it leads that by, rad. */
+interface End {
+  node: number
+  ratio: number
+  lead: number
+}
+
+/** An admittance between ideal complex ratios a: Y_ii += y/|a_i|², Y_jj += y/|a_j|², Y_ij −= y/(a_i*·a_j). */
+function addCoupling(matrix: AdmittanceMatrix, from: End, to: End, y: Complex): void {
+  addElement(matrix, from.node, from.node, scale(y, 1 / from.ratio ** 2))
+  addElement(matrix, to.node, to.node, scale(y, 1 / to.ratio ** 2))
+  const angle = from.lead - to.lead
+  const between = scale(y, -1 / (from.ratio * to.ratio))
+  addElement(matrix, from.node, to.node, multiply(between, { re: Math.cos(angle), im: Math.sin(angle) }))
+  addElement(matrix, to.node, from.node, multiply(between, { re: Math.cos(angle), im: -Math.sin(angle) }))
+}
+
 /** Lines and transformers alone: what short-circuit current flows through. */
 export function branchMatrix(
   topology: Topology,
   lines: readonly LineInput[],
   transformers: readonly TransformerInput[],
+  threeWindings: readonly ThreeWindingInput[] = [],
 ): AdmittanceMatrix {
   const matrix = emptyMatrix(topology.count)
   for (const line of lines) {
@@ -43,13 +62,19 @@ export function branchMatrix(
     addBranch(matrix, from, to, reciprocal(line.impedance))
   }
   for (const transformer of transformers) {
-    const y = reciprocal(transformer.impedance)
-    const [from, to] = [topology.nodeOf.get(transformer.fromBusId)!, topology.nodeOf.get(transformer.toBusId)!]
-    // Impedance on the to side behind an ideal ratio: Y_ff = y/a², Y_tt = y, Y_ft = Y_tf = −y/a.
-    addElement(matrix, from, from, scale(y, 1 / transformer.ratio ** 2))
-    addElement(matrix, to, to, y)
-    addElement(matrix, from, to, scale(y, -1 / transformer.ratio))
-    addElement(matrix, to, from, scale(y, -1 / transformer.ratio))
+    // Impedance on the to side behind an ideal ratio a on the from side: Y_ff = y/|a|², Y_tt = y, Y_ft = −y/a*, Y_tf = −y/a.
+    const { fromBusId, toBusId, ratio, lag } = transformer
+    const from = { node: topology.nodeOf.get(fromBusId)!, ratio, lead: lag ?? 0 }
+    const to = { node: topology.nodeOf.get(toBusId)!, ratio: 1, lead: 0 }
+    addCoupling(matrix, from, to, reciprocal(transformer.impedance))
+  }
+  for (const transformer of threeWindings) {
+    const ends = transformer.windings.map(({ busId, ratio, lag }): End => {
+      return { node: topology.nodeOf.get(busId)!, ratio, lead: -(lag ?? 0) }
+    })
+    for (const { from, to, admittance } of couplings(transformer) ?? []) {
+      addCoupling(matrix, ends[from]!, ends[to]!, admittance)
+    }
   }
   return matrix
 }

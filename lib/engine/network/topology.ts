@@ -1,4 +1,4 @@
-import type { BusInput, LineInput, TransformerInput } from '../case-input'
+import type { BusInput, LineInput } from '../case-input'
 import { magnitude } from '../numeric/complex'
 import { refuse, type Setup } from './refusal'
 
@@ -21,7 +21,7 @@ export interface Topology {
 export function findTopology(
   buses: readonly BusInput[],
   lines: readonly LineInput[],
-  transformers: readonly TransformerInput[],
+  transformers: readonly { fromBusId: string; toBusId: string }[],
   supplyBusId: string,
 ): Setup<Topology> {
   const nominalOf = new Map(buses.map((bus) => [bus.id, bus.nominal]))

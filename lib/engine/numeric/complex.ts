@@ -16,3 +16,13 @@ export function reciprocal(a: Complex): Complex {
 export const magnitude = (a: Complex): number => Math.hypot(a.re, a.im)
 
 export const isZero = (a: Complex): boolean => a.re === 0 && a.im === 0
+
+export const add = (a: Complex, b: Complex): Complex => ({ re: a.re + b.re, im: a.im + b.im })
+
+export const multiply = (a: Complex, b: Complex): Complex => ({
+  re: a.re * b.re - a.im * b.im,
+  im: a.re * b.im + a.im * b.re,
+})
+
+/** a/b; not finite for b = 0. */
+export const divide = (a: Complex, b: Complex): Complex => multiply(a, reciprocal(b))

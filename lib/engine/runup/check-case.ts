@@ -1,6 +1,7 @@
 import { type CaseInput, isTabulated, type LoadCurve, type MotorInput } from '../case-input'
 import { circuitProblem, machineProblem } from '../machines/check-machine'
 import { type Refusal, refuse } from '../network/refusal'
+import { couplings } from '../network/three-winding'
 import { isZero } from '../numeric/complex'
 import { capacitorsProblem, starterProblem } from '../starters/check-starter'
 import { checkSchedule } from './check-schedule'
@@ -11,6 +12,7 @@ export function checkCase(input: CaseInput): Refusal | null {
     checkBuses(input) ??
     checkSupply(input) ??
     checkBranches(input) ??
+    checkThreeWindings(input) ??
     checkShunts(input) ??
     checkMotors(input) ??
     checkSchedule(input)
@@ -76,6 +78,21 @@ function checkBranches(input: CaseInput): Refusal | null {
     const ends = [transformer.fromBusId, transformer.toBusId]
     if (isZero(transformer.impedance)) return bad(ends, `Transformer ${transformer.id} needs an impedance above zero.`)
     if (!positive(transformer.ratio)) return bad(ends, `Transformer ${transformer.id} needs a ratio above zero.`)
+  }
+  return null
+}
+
+function checkThreeWindings(input: CaseInput): Refusal | null {
+  const known = new Set(input.buses.map((bus) => bus.id))
+  for (const transformer of input.threeWindings ?? []) {
+    const { id, windings, impedance } = transformer
+    const ends = windings.map(({ busId }) => busId)
+    if (ends.some((busId) => !known.has(busId)))
+      return bad(ends, `Transformer ${id} ends at a bus that is not in the case.`)
+    if (new Set(ends).size < 3) return bad(ends, `Transformer ${id} needs a bus of its own for each winding.`)
+    if (!windings.every(({ ratio }) => positive(ratio))) return bad(ends, `Transformer ${id} needs ratios above zero.`)
+    if (!impedance.every(finite) || couplings(transformer) === null)
+      return bad(ends, `Transformer ${id} needs impedances between its windings that make a star.`)
   }
   return null
 }

@@ -4,6 +4,7 @@ import { type LoadSegments, loadSegments } from '../driven/load-segments'
 import { breakdownSlip } from '../machines/breakdown-slip'
 import { type MachineTable, machineTable } from '../machines/machine-table'
 import { type AdmittanceMatrix, addElement, addShunts, branchMatrix } from '../network/admittance'
+import { withLags } from '../network/phase-shift'
 import { refuse, type Setup } from '../network/refusal'
 import { impedancePart, type NonlinearLoads, nonlinearLoads } from '../network/static-load'
 import { findTopology, type Topology } from '../network/topology'
@@ -41,11 +42,14 @@ export interface Plant {
 export function preparePlant(input: CaseInput): Setup<Plant> {
   const refusal = checkCase(input)
   if (refusal !== null) return { ok: false, outcome: refusal }
-  const found = findTopology(input.buses, input.lines, input.transformers, input.supply.busId)
+  const turned = withLags(input.buses, input.lines, input.transformers, input.threeWindings ?? [])
+  if (!turned.ok) return turned
+  const { transformers, threeWindings, turns } = turned.value
+  const found = findTopology(input.buses, input.lines, turns, input.supply.busId)
   if (!found.ok) return found
   const topology = found.value
   const nodeOf = (busId: string): number => topology.nodeOf.get(busId)!
-  const network = branchMatrix(topology, input.lines, input.transformers)
+  const network = branchMatrix(topology, input.lines, transformers, threeWindings)
   addShunts(network, topology, input.lines, input.capacitors)
   for (const load of input.loads) {
     const node = nodeOf(load.busId)
@@ -61,7 +65,7 @@ export function preparePlant(input: CaseInput): Setup<Plant> {
     value: {
       input,
       topology,
-      branches: branchMatrix(topology, input.lines, input.transformers),
+      branches: branchMatrix(topology, input.lines, transformers, threeWindings),
       network,
       supplyNode: nodeOf(input.supply.busId),
       loads: nonlinearLoads(input.loads, topology.nodeOf),

@@ -65,6 +65,7 @@ const refusedCauses: Record<Extract<CaseOutcome, { kind: 'refused' }>['cause'], 
   island: 'some buses have no way to the supply',
   'no-supply': 'the supply is at a bus that does not exist',
   'zero-impedance-loop': 'branches without impedance form a loop',
+  'unlike-groups': 'transformers with unlike vector groups stand in parallel',
   'bad-value': 'a value cannot be computed with',
 }
 

@@ -30,7 +30,13 @@ export const transformer: KindDescription = {
       initial: '0 %',
       hint: 'On the from side. Positive means more turns there, so less voltage on the to side.',
     },
-    { kind: 'text', name: 'vectorGroup', label: 'Vector group', optional: true },
+    {
+      kind: 'text',
+      name: 'vectorGroup',
+      label: 'Vector group',
+      optional: true,
+      hint: 'For example Dyn11. Transformers in parallel must turn the voltage alike.',
+    },
     noteField,
   ],
   columns: [
