@@ -138,6 +138,8 @@ const engineOrder: Record<string, readonly string[]> = {
   runup: ['numeric', 'network', 'machines', 'driven', 'starters'],
   criteria: ['numeric', 'network', 'machines', 'driven', 'starters', 'runup'],
   estimate: ['numeric', 'machines'],
+  transient: ['numeric', 'network', 'machines', 'driven', 'starters'],
+  flicker: ['numeric'],
 }
 
 const filesIn = (folder: string): string[] =>

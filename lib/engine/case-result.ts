@@ -11,6 +11,7 @@ import type {
   Volt,
   VoltAmpere,
 } from '../units/si'
+import type { DirectStartPeaks } from './direct-start-peaks'
 import type { FlickerResult } from './flicker/start-flicker'
 import type { DutyResult } from './starters/duty'
 import type { Position } from './starters/position'
@@ -217,6 +218,8 @@ export interface CaseResult {
   notices: readonly Notice[]
   counters: Counters
   series: CaseSeries
+  /** Peaks of direct starts by the transient model; absent where the case has none. */
+  peaks?: readonly DirectStartPeaks[]
   /** Flicker and rapid change at the places that were asked for; absent where none was or the run has no end. */
   flicker?: readonly FlickerResult[]
   /** The case once more with what the records leave open put otherwise, without curves; absent where nothing is open. */

@@ -1,6 +1,7 @@
 import { synchronousSpeed } from '../units/speed'
 import { type CaseInput, isTabulated, type MachineModel } from './case-input'
 import type { CaseResult, CaseVariant } from './case-result'
+import { directStartPeaks } from './direct-start-peaks'
 import { startFlicker } from './flicker/start-flicker'
 import { breakdownSlip } from './machines/breakdown-slip'
 import { runCase } from './run-case'
@@ -23,6 +24,13 @@ function withFlicker(input: CaseInput, result: CaseResult): CaseResult {
     return [startFlicker(course, startsPerHour, input.frequency)]
   })
   return flicker.length > 0 ? { ...result, flicker } : result
+}
+
+/** Adds the peaks of direct starts by the transient model. */
+function withPeaks(input: CaseInput, result: CaseResult): CaseResult {
+  if (result.outcome.kind !== 'complete') return result
+  const peaks = directStartPeaks(input)
+  return peaks.length > 0 ? { ...result, peaks } : result
 }
 
 const withModels = (input: CaseInput, models: ReadonlyMap<string, MachineModel>): CaseInput => ({
@@ -60,7 +68,7 @@ const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput 
 
 /** A case with the variants that its input and its own result call for. */
 export function runWithVariants(input: CaseInput): CaseResult {
-  const result = withFlicker(input, runCase(input))
+  const result = withPeaks(input, withFlicker(input, runCase(input)))
   const low = lowVoltageTorque(input, result)
   const variants: CaseVariant[] = [
     ...samePlate(input).map((each) => ({ kind: 'same-plate' as const, result: withoutCurves(runCase(each)) })),

@@ -1,4 +1,5 @@
 import type { StartResult } from '@/lib/engine/case-result'
+import type { DirectStartPeaks } from '@/lib/engine/direct-start-peaks'
 import { formatNumber } from '@/lib/quantity/format-number'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import type { CaseSummary } from '@/lib/study/summary'
@@ -9,6 +10,7 @@ import { type FigureRow, FigureTable } from './figure-table'
 import * as print from './print'
 
 interface Item {
+  peaks: DirectStartPeaks | null
   key: string
   ranges: readonly VariantRange[]
   motorId: string
@@ -119,6 +121,21 @@ const rangeRows: readonly FigureRow<Item>[] = [
   },
 ]
 
+const peakRows: readonly FigureRow<Item>[] = [
+  {
+    label: 'Largest instantaneous current, worst phase and instant, transient model',
+    print: ({ peaks }) => (peaks ? `${current(peaks.peakCurrent.current)} peak` : '–'),
+  },
+  {
+    label: 'Greatest torque after switching on, transient model',
+    print: ({ peaks }) => (peaks ? `${torque(peaks.peakTorque.torque)} at ${seconds(peaks.peakTorque.at)}` : '–'),
+  },
+  {
+    label: 'Least torque after switching on, transient model',
+    print: ({ peaks }) => (peaks ? `${torque(peaks.lowestTorque.torque)} at ${seconds(peaks.lowestTorque.at)}` : '–'),
+  },
+]
+
 /** Everything about the motors that are started in the case. */
 export function StartTable({ document, result }: { document: StudyDocument; result: CaseSummary }) {
   const items = result.motors.flatMap(({ motorId, start, earlierAttempts }): Item[] => {
@@ -133,6 +150,7 @@ export function StartTable({ document, result }: { document: StudyDocument; resu
       ratedVoltage,
       // Variants tell of the last attempt.
       ranges: i === all.length - 1 ? ranges : [],
+      peaks: i === 0 ? (result.peaks?.find((one) => one.motorId === motorId) ?? null) : null,
     }))
   })
   return (
@@ -141,7 +159,11 @@ export function StartTable({ document, result }: { document: StudyDocument; resu
       items={items}
       itemId={({ key }) => key}
       name={({ motorId, attempt }) => `${motorTag(document, motorId)}${attempt === null ? '' : `, attempt ${attempt}`}`}
-      rows={[...rowsFor(document), ...(items.some(({ ranges }) => ranges.length > 0) ? rangeRows : [])]}
+      rows={[
+        ...rowsFor(document),
+        ...(items.some(({ ranges }) => ranges.length > 0) ? rangeRows : []),
+        ...(items.some(({ peaks }) => peaks) ? peakRows : []),
+      ]}
     />
   )
 }

@@ -7,6 +7,7 @@ import { changeOverTable } from './change-over-table'
 import { flickerTable } from './flicker-table'
 import { notices } from './notices'
 import { openRanges } from './open-ranges'
+import { peaksTable } from './peaks-table'
 import { runningTable } from './running-table'
 import { energyTable, startTable } from './start-tables'
 import { supplyTable } from './supply-table'
@@ -29,6 +30,7 @@ export const results: Section = (context) => {
     ...design.map((run) => voltageTable(context, run)),
     subsection(context, 'results-running', say.running.title),
     ...runningTable(context, ['design']),
+    ...peaksTable(context),
     ...flickerTable(context),
     subsection(context, 'results-ranges', say.ranges.title),
     ...openRanges(context),

@@ -93,6 +93,20 @@ export const results = {
       outcome: 'Outcome',
     },
   },
+  peaks: {
+    title: 'Peaks of direct starts',
+    intro:
+      'By the transient model: the fifth-order equations of the motor behind the Thevenin equivalent at its bus, switched on at standstill without flux. The current is that of the worst phase at the worst instant of switching, with its decaying DC part. All other figures of this report are by the quasi-static model.',
+    heads: {
+      case: 'Case',
+      motor: 'Motor',
+      current: 'Largest current, A peak',
+      symmetrical: 'Of the symmetrical peak',
+      torque: 'Greatest torque, kN·m (at s)',
+      rated: 'Of rated torque',
+      lowest: 'Least torque, kN·m (at s)',
+    },
+  },
   flicker: {
     title: 'Flicker and rapid change',
     intro: (perHour: string) =>
