@@ -1,6 +1,7 @@
 import type { ValueProvenance } from '@/lib/study/document/entered'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import { listedTags } from '@/lib/study/words/list-words'
+import { plateSentences } from '@/lib/study/words/plate-words'
 import type { Wording } from '../wording/en'
 import { plantConditionFields, settingsFields, starterFields } from './condition-fields'
 import { circuitFields, drivenLoadFields, motorFields } from './machine-fields'
@@ -43,7 +44,7 @@ export const statedValues = (document: StudyDocument, { fields, records }: Wordi
 }
 
 /** What the calculation, or a reviewer, asks for and nobody has recorded: one sentence for all records that lack it. */
-export const openItems = ({ plant }: StudyDocument, { records }: Wording): readonly string[] => {
+export const openItems = ({ plant, frequency }: StudyDocument, { records }: Wording): readonly string[] => {
   const { openItems: say } = records.assumptions
   const lacking = <R extends { tag: string }>(
     list: readonly R[],
@@ -60,6 +61,7 @@ export const openItems = ({ plant }: StudyDocument, { records }: Wording): reado
     ...lacking(supplies, ({ plantMotorsIncluded }) => plantMotorsIncluded === 'unknown', say.motorsIncluded),
     ...lacking(supplies, ({ date }) => date === null, say.date),
     ...lacking(motors, ({ circuit }) => circuit.kind === 'estimated', say.estimated),
+    ...motors.flatMap((motor) => plateSentences(motor, frequency.si)),
     ...lacking(motors, ({ lockedRotorPowerFactor }) => lockedRotorPowerFactor === null, say.lockedRotorPowerFactor),
     ...lacking(motors, ({ pullUpTorque }) => pullUpTorque === null, say.pullUp),
     ...lacking(motors, (one) => one.permissibleCold === null && one.permissibleHot === null, say.permissible),

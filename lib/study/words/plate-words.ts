@@ -1,4 +1,7 @@
-import type { PlateContradiction } from '../../engine/estimate/plate-problems'
+import { estimateCircuit } from '../../engine/estimate/estimate-circuit'
+import { type PlateContradiction, plateContradictions } from '../../engine/estimate/plate-problems'
+import type { MotorRecord } from '../document/machine-records'
+import { nameplateOf } from '../to-engine/nameplate-of-motor'
 
 /** What to check on a plate whose values cannot all be true; one sentence, the motor's tag in front. */
 export const contradictionSentence: Record<PlateContradiction, (tag: string) => string> = {
@@ -17,4 +20,15 @@ export const contradictionSentence: Record<PlateContradiction, (tag: string) => 
 
 /** Said beside a circuit that misses its plate by more than a part in a thousand. */
 export const plateNotMetSentence = (tag: string): string =>
-  `Motor ${tag}: no circuit has all the values of its plate; the nearest one is computed with, and what is left over stands below. Saturation often is the reason in small motors; ask the maker for curves.`
+  `Motor ${tag}: no circuit has all the values of its plate; the nearest one is computed with, and every quantity is off by a little. Saturation often is the reason in small motors; ask the maker for curves.`
+
+/** What there is to say of one motor's plate: values that cannot all be true, and an estimated circuit that misses it. */
+export const plateSentences = (motor: MotorRecord, frequency: number): readonly string[] => {
+  const plate = nameplateOf(motor, frequency)
+  if (plate === null) return []
+  const said = plateContradictions(plate).map((kind) => contradictionSentence[kind](motor.tag))
+  if (motor.circuit.kind !== 'estimated') return said
+  const outcome = estimateCircuit(plate)
+  const missed = outcome.kind === 'estimated' && outcome.flags.some(({ kind }) => kind === 'not-met')
+  return missed ? [...said, plateNotMetSentence(motor.tag)] : said
+}
