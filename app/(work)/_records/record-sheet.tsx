@@ -104,7 +104,7 @@ export function RecordSheet(props: RecordSheetProps) {
             </FormView>
           </fieldset>
         </ScrollRegion>
-        <div className="flex flex-col gap-2 border-t border-hair p-3 xl:max-h-[45dvh] xl:overflow-y-auto">
+        <div className="flex shrink-0 flex-col gap-2 border-t border-hair p-3 xl:max-h-[45dvh] xl:overflow-y-auto">
           {sheet.conflict ? (
             <ConflictPanel
               by={sheet.conflict.by}
