@@ -8,3 +8,6 @@ export interface Actor {
   /** True until the password that an administrator handed over is replaced. */
   initialPassword?: boolean
 }
+
+/** Whoever comes by a link and has no account, or is not signed in. */
+export const linkHolder = (words: string): Actor => ({ userId: '', name: words, email: '' })

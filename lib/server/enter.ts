@@ -3,7 +3,9 @@ import { DomainError } from '@/lib/errors'
 import type { Role } from '@/lib/policy/role'
 import { roles as allRoles } from '@/lib/policy/role'
 import type { Actor } from './actor'
+import { now } from './clock'
 import type { Tx } from './db'
+import { linkDigest } from './link-token'
 import type { Place, Scope } from './place'
 
 // This file alone sets what row-level security looks at, and only for the running transaction.
@@ -26,6 +28,7 @@ const unreachable = (): DomainError =>
 export async function enter(tx: Tx, actor: Actor, scope: Exclude<Scope, { kind: 'self' }>): Promise<Place> {
   await setFor.user(tx, actor.userId)
   if (scope.kind === 'organisation') return enterOrganisation(tx, actor, scope.id ?? actor.organisationId)
+  if ('token' in scope) return enterByLink(tx, scope.kind, scope.token)
   for (const organisationId of await reachable(tx, actor)) {
     await setFor.org(tx, organisationId)
     const projectId = await projectOf(tx, scope)
@@ -72,12 +75,40 @@ export async function enterAsReader(
   return { organisationId: entry.organisationId, subjectId: entry.subjectId }
 }
 
+/** A wrong link, one that ran out and one that was ended are told apart by nobody. */
+const deadLink = (): DomainError =>
+  new DomainError(
+    'not-found',
+    'This link leads nowhere: it was used, has run out or was ended. Ask whoever sent it for another one.',
+  )
+
+/** Lets whoever holds a link that is in force into the project behind it; who reads a shared report is a client there. */
+async function enterByLink(tx: Tx, kind: 'invitation' | 'share', token: string): Promise<Place> {
+  const tokenHash = linkDigest(token)
+  await setFor.digest(tx, tokenHash)
+  const stillOpen = { tokenHash, expiresAt: { gt: now() } }
+  if (kind === 'invitation') {
+    const row = await tx.invitation.findFirst({ where: { ...stillOpen, acceptedAt: null, withdrawnAt: null } })
+    if (!row) throw deadLink()
+    await setFor.org(tx, row.organisationId)
+    return { organisationId: row.organisationId, projectId: row.projectId, roles: [] }
+  }
+  const row = await tx.shareLink.findFirst({ where: { ...stillOpen, endedAt: null } })
+  if (!row) throw deadLink()
+  await setFor.org(tx, row.organisationId)
+  const revision = await tx.revision.findFirstOrThrow({ where: { id: row.revisionId }, select: { projectId: true } })
+  return { organisationId: row.organisationId, projectId: revision.projectId, roles: ['client'] }
+}
+
+/** Of the parts in projects those that have not ended. */
+const inForce = () => ({ OR: [{ endsAt: null }, { endsAt: { gt: now() } }] })
+
 /** The person's organisations: their own first, then those where they are a guest of a project. */
 async function reachable(tx: Tx, actor: Actor): Promise<string[]> {
   const where = { userId: actor.userId }
   const own = await tx.membership.findMany({ where, orderBy: { addedAt: 'asc' }, select: { organisationId: true } })
   const guest = await tx.projectMembership.findMany({
-    where,
+    where: { ...where, ...inForce() },
     select: { organisationId: true },
     distinct: 'organisationId',
   })
@@ -93,7 +124,9 @@ async function enterOrganisation(tx: Tx, actor: Actor, wanted: string | undefine
   if (!membership) throw unreachable()
   const { organisationId } = membership
   await setFor.org(tx, organisationId)
-  const projects = await tx.projectMembership.findMany({ where: { organisationId, userId: actor.userId } })
+  const projects = await tx.projectMembership.findMany({
+    where: { organisationId, userId: actor.userId, ...inForce() },
+  })
   const held = new Set(projects.flatMap((row) => row.roles).filter(isRole))
   held.delete('administrator')
   if (membership.role === 'administrator') held.add('administrator')
@@ -102,7 +135,7 @@ async function enterOrganisation(tx: Tx, actor: Actor, wanted: string | undefine
 
 async function projectOf(
   tx: Tx,
-  scope: Exclude<Scope, { kind: 'self' } | { kind: 'organisation' }>,
+  scope: Extract<Scope, { id: string; kind: 'project' | 'study' | 'revision' }>,
 ): Promise<string | null> {
   if (scope.kind === 'project') {
     const project = await tx.project.findFirst({ where: { id: scope.id }, select: { id: true } })
@@ -119,7 +152,7 @@ async function projectOf(
 async function rolesIn(tx: Tx, actor: Actor, organisationId: string, projectId: string): Promise<Role[]> {
   const { userId } = actor
   const [inProject, inOrganisation] = [
-    await tx.projectMembership.findFirst({ where: { organisationId, projectId, userId } }),
+    await tx.projectMembership.findFirst({ where: { organisationId, projectId, userId, ...inForce() } }),
     await tx.membership.findFirst({ where: { organisationId, userId } }),
   ]
   const held = new Set((inProject?.roles ?? []).filter(isRole))

@@ -53,7 +53,8 @@ export async function perform<Shape extends z.ZodType, Subject, Answer>(
     const permission = may(context.policy, subject, parsed)
     if (!permission.allowed) throw new DomainError('forbidden', permission.reason)
     const { answer, events } = await run(context, parsed, subject)
-    await appendEvents(tx, head, actor, context.at, events)
+    // whoever comes by a link has no account, so that the row names no person
+    await appendEvents(tx, head, { userId: actor.userId || null, name: actor.name }, context.at, events)
     return answer
   })
 }

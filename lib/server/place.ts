@@ -8,6 +8,8 @@ export type Scope =
   | { kind: 'project'; id: string }
   | { kind: 'study'; id: string }
   | { kind: 'revision'; id: string }
+  /** Whoever holds the link of an invitation, or of a shared report. */
+  | { kind: 'invitation' | 'share'; token: string }
 
 /** Where a transaction is: the one organisation whose rows it sees. */
 export interface Place {

@@ -2,9 +2,10 @@ import { beforeAll, describe, expect, test } from 'vitest'
 import type { Actor } from '@/lib/server/actor'
 import { now } from '@/lib/server/clock'
 import { type Database, database, type Tx } from '@/lib/server/db'
-import { enter } from '@/lib/server/enter'
+import { enter, enterAsJob } from '@/lib/server/enter'
 import { createAccount } from '@/lib/server/people/create-account'
 import { foundOrganisation } from '@/lib/server/people/found-organisation'
+import { inviteMember } from '@/lib/server/people/invite'
 import { myProjects } from '@/lib/server/people/queries'
 import { perform } from '@/lib/server/perform'
 import { changeRecord } from '@/lib/server/plants/commands'
@@ -37,7 +38,22 @@ beforeAll(async () => {
     await createAccount(tx, account, now())
     await foundOrganisation(tx, stranger, elsewhere, now())
   })
+  await withLinks(revisionId)
 }, 180_000)
+
+/** An open invitation, and a share link with a download behind it. */
+async function withLinks(revisionId: string) {
+  const { organisationId, projectId } = demo
+  const invited = { projectId, name: 'N. Newcomer', email: 'n@newcomers.example', guest: false }
+  await perform(inviteMember, actorAs('administrator'), { ...invited, roles: ['engineer'] })
+  await database().$transaction(async (tx) => {
+    await enterAsJob(tx, organisationId)
+    const by = { createdById: 'demo-tharow', createdByName: 'S. Tharow', createdAt: now() }
+    const link = { organisationId, id: 'link', revisionId, tokenHash: 'a hash', recipient: 'the client', ...by }
+    await tx.shareLink.create({ data: { ...link, expiresAt: now() } })
+    await tx.shareDownload.create({ data: { organisationId, id: 'download', linkId: 'link', at: now(), sha256: '' } })
+  })
+}
 
 /** Tables whose rows belong to an organisation, as the database itself lists them. */
 const tenantTables = (db: Database | Tx) => db.$queryRaw<{ name: string; forced: boolean; policies: number }[]>`

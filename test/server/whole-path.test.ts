@@ -1,6 +1,6 @@
 import { beforeAll, describe, expect, test } from 'vitest'
 import { database } from '@/lib/server/db'
-import { changeMember } from '@/lib/server/people/commands'
+import { changeMember } from '@/lib/server/people/member-commands'
 import { perform } from '@/lib/server/perform'
 import { changeRecord } from '@/lib/server/plants/commands'
 import { read } from '@/lib/server/read'

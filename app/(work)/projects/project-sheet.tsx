@@ -23,11 +23,18 @@ export function ProjectSheet({ project, userId }: { project: ProjectLine; userId
         <h2 id={`name-${projectId}`} className="m-0 text-body font-semibold">
           {name}
         </h2>
-        {can(actor, 'read-plant').allowed ? (
-          <Link prefetch={false} href={`/projects/${projectId}/plant/bus`} className="link">
-            Open plant records
-          </Link>
-        ) : null}
+        <span className="flex gap-4">
+          {team ? (
+            <Link prefetch={false} href={`/projects/${projectId}/members`} className="link">
+              Members
+            </Link>
+          ) : null}
+          {can(actor, 'read-plant').allowed ? (
+            <Link prefetch={false} href={`/projects/${projectId}/plant/bus`} className="link">
+              Open plant records
+            </Link>
+          ) : null}
+        </span>
       </div>
       <p className="m-0 mb-2 text-dense text-soft">
         {client ? `For ${client}. ` : ''}

@@ -8,6 +8,9 @@ const cost = { memoryCost: 65_536, timeCost: 3, parallelism: 1 }
 /** Fewer characters are refused. */
 export const leastPasswordLength = 12
 
+/** More characters are refused: hashing them would cost everybody time. */
+export const mostPasswordLength = 128
+
 export const hashPassword = (password: string): Promise<string> => hash(password.normalize('NFKC'), cost)
 
 export const verifyPassword = (hashed: string, password: string): Promise<boolean> =>

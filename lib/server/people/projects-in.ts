@@ -7,13 +7,14 @@ import { toRevisionSubject, withSubject } from '../revisions/subject'
 import type { ProjectLine, StudyLine } from './queries'
 
 /** The projects of one organisation, already entered, that a person has a part in. */
-export async function projectsIn(tx: Tx, actor: Actor, organisationId: string): Promise<ProjectLine[]> {
+export async function projectsIn(tx: Tx, actor: Actor, organisationId: string, at: Date): Promise<ProjectLine[]> {
   const { userId } = actor
   const own = await tx.membership.findFirst({ where: { organisationId, userId } })
   const administers = own?.role === 'administrator'
+  const ownPart = { userId, OR: [{ endsAt: null }, { endsAt: { gt: at } }] }
   const projects = await tx.project.findMany({
-    where: administers ? {} : { members: { some: { userId } } },
-    include: { organisation: { select: { name: true } }, members: { where: { userId } } },
+    where: administers ? {} : { members: { some: ownPart } },
+    include: { organisation: { select: { name: true } }, members: { where: ownPart } },
     orderBy: { createdAt: 'asc' },
   })
   const lines: ProjectLine[] = []

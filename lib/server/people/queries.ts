@@ -1,10 +1,9 @@
 import 'server-only'
 import * as z from 'zod'
-import { can } from '@/lib/policy/can'
 import type { Role } from '@/lib/policy/role'
 import type { RevisionState } from '@/lib/study/states'
 import { idInput } from '../identity'
-import { ownQuery, query } from '../read'
+import { ownQuery } from '../read'
 import { projectsIn } from './projects-in'
 
 /** A project in the list of a person's work. */
@@ -31,8 +30,8 @@ export interface StudyLine {
 /** Every project that the person has a part in, with its studies. */
 export const myProjects = ownQuery({
   input: z.object({}),
-  own: async ({ tx, actor, each }): Promise<ProjectLine[]> =>
-    (await each((organisationId) => projectsIn(tx, actor, organisationId))).flat(),
+  own: async ({ tx, actor, at, each }): Promise<ProjectLine[]> =>
+    (await each((organisationId) => projectsIn(tx, actor, organisationId, at))).flat(),
 })
 
 export interface OrganisationLine {
@@ -88,31 +87,5 @@ export const myCertificate = ownQuery({
       }
     })
     return found.find((certificate) => certificate !== null) ?? null
-  },
-})
-
-export interface MemberLine {
-  userId: string
-  name: string
-  email: string
-  roles: Role[]
-}
-
-/**
- * The people of a project.
- * @public
- */
-export const projectMembers = query({
-  input: z.object({ projectId: idInput }),
-  scope: ({ projectId }) => ({ kind: 'project' as const, id: projectId }),
-  load: async () => undefined,
-  may: (actor) => can(actor, 'read-study'),
-  run: async ({ tx }, { projectId }): Promise<MemberLine[]> => {
-    const rows = await tx.projectMembership.findMany({
-      where: { projectId },
-      include: { user: { select: { name: true, email: true } } },
-      orderBy: { addedAt: 'asc' },
-    })
-    return rows.map(({ userId, roles, user }) => ({ userId, ...user, roles: roles as Role[] }))
   },
 })

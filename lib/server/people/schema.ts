@@ -1,5 +1,7 @@
 import * as z from 'zod'
 import { roles } from '@/lib/policy/role'
+import { now } from '../clock'
+import { leastPasswordLength, mostPasswordLength } from './password'
 
 const line = (what: string, most: number) =>
   z.string().trim().min(1, `Give the ${what}.`).max(most, `Keep the ${what} within ${most} characters.`)
@@ -25,3 +27,15 @@ export const projectRoles = z
   .array(z.enum(roles).exclude(['administrator']))
   .min(1, 'Choose at least one role.')
   .transform((list) => [...new Set(list)])
+
+/** A password that a person chooses; longer ones would only cost time to hash. */
+export const newPassword = z
+  .string()
+  .min(leastPasswordLength, `Use ${leastPasswordLength} characters or more.`)
+  .max(mostPasswordLength, `Use ${mostPasswordLength} characters or fewer.`)
+
+/** A day as a form gives it; the part that ends then lasts through that day. */
+export const lastDay = z.iso
+  .date('Give a day.')
+  .transform((day) => new Date(`${day}T23:59:59.000Z`))
+  .refine((end) => end > now(), 'Choose a day that lies ahead.')
