@@ -1,20 +1,21 @@
 import 'server-only'
 import { betterAuth } from 'better-auth'
 import { prismaAdapter } from 'better-auth/adapters/prisma'
-import { APIError, createAuthMiddleware } from 'better-auth/api'
-import { now } from './clock'
+import { twoFactor } from 'better-auth/plugins/two-factor'
 import { type Database, database } from './db'
 import { type Environment, env } from './env'
 import { trustedOrigins } from './origins'
-import { hashPassword, leastPasswordLength, verifyPassword } from './people/password'
-import { recordSignIn } from './people/record-sign-in'
-import { countAttempt, forgetAttempts } from './people/sign-in-delay'
+import { afterAccountRequest, beforeAccountRequest, recordSession } from './people/auth-hooks'
+import { hashPassword, leastPasswordLength, mostPasswordLength, verifyPassword } from './people/password'
+import { afterReset, resetMinutes, sendResetLink } from './people/reset-password'
 
 const hour = 3600
 
-/** Identity and sessions, and nothing else of the account library; organisations and roles are ours. */
+/** Identity, sessions and the second factor, and nothing else of the account library; organisations and roles are ours. */
 export function makeAuth(db: Database, environment: Environment) {
   const { BASE_URL, BETTER_AUTH_SECRET, TRUSTED_IP_HEADER } = environment
+  // by address where a proxy says it; without one all share the count, and the delay of each account does the work
+  const each = { window: 60, max: TRUSTED_IP_HEADER ? 30 : 600 }
   return betterAuth({
     appName: 'Breakaway',
     baseURL: BASE_URL,
@@ -22,7 +23,8 @@ export function makeAuth(db: Database, environment: Environment) {
     database: prismaAdapter(db, { provider: 'postgresql' }),
     trustedOrigins: trustedOrigins(environment),
     telemetry: { enabled: false },
-    // a name stands in certificates and title blocks, an address is an identity: an administrator changes them
+    // a name stands in certificates and title blocks, an address is an identity: an administrator changes them. Sessions are
+    // listed and ended by our own page, which keeps their secrets from scripts.
     disabledPaths: [
       '/sign-up/email',
       '/update-user',
@@ -30,52 +32,64 @@ export function makeAuth(db: Database, environment: Environment) {
       '/delete-user',
       '/sign-in/social',
       '/link-social',
+      '/list-sessions',
+      '/revoke-session',
+      '/revoke-sessions',
+      '/revoke-other-sessions',
+      '/two-factor/send-otp',
+      '/two-factor/verify-otp',
     ],
     emailAndPassword: {
       enabled: true,
       disableSignUp: true,
       minPasswordLength: leastPasswordLength,
+      maxPasswordLength: mostPasswordLength,
       password: { hash: hashPassword, verify: ({ hash, password }) => verifyPassword(hash, password) },
+      resetPasswordTokenExpiresIn: resetMinutes * 60,
+      revokeSessionsOnPasswordReset: true,
+      sendResetPassword: async (asked) => sendResetLink(asked),
+      onPasswordReset: async ({ user }) => afterReset(db, user),
     },
     user: { additionalFields: { initialPassword: { type: 'boolean', input: false, defaultValue: false } } },
     session: { expiresIn: 12 * hour, updateAge: hour, cookieCache: { enabled: false } },
+    // the link of a reset is kept as its hash
+    verification: { storeIdentifier: 'hashed' },
     rateLimit: {
       enabled: true,
       storage: 'database',
       window: 60,
       max: 600,
-      // by address where a proxy says it; without one all share the count, and the delay of each account does the work
-      customRules: { '/sign-in/email': { window: 60, max: TRUSTED_IP_HEADER ? 30 : 600 } },
+      customRules: {
+        '/sign-in/email': each,
+        '/change-password': each,
+        '/request-password-reset': each,
+        '/reset-password': each,
+        '/two-factor/*': each,
+      },
     },
     advanced: {
+      // said aloud, because the library leaves both out while tests run
+      disableOriginCheck: false,
+      disableCSRFCheck: false,
       // only a header that the reverse proxy overwrites is believed
       ipAddress: { ipAddressHeaders: TRUSTED_IP_HEADER ? [TRUSTED_IP_HEADER.toLowerCase()] : [] },
       useSecureCookies: BASE_URL.startsWith('https:'),
     },
     logger: { level: 'error' },
-    hooks: {
-      before: createAuthMiddleware(async (context) => {
-        if (context.path !== '/sign-in/email') return
-        const seconds = await countAttempt(db, String(context.body?.email ?? ''), now())
-        if (seconds === 0) return
-        const wait = seconds < 60 ? `${seconds} s` : `${Math.ceil(seconds / 60)} min`
-        throw new APIError('TOO_MANY_REQUESTS', {
-          code: 'TOO_MANY_ATTEMPTS',
-          message: `Too many wrong passwords for this address: wait ${wait} and try again.`,
-        })
+    plugins: [
+      twoFactor({
+        issuer: 'Breakaway',
+        twoFactorCookieMaxAge: 600,
+        accountLockout: { enabled: true, maxFailedAttempts: 10, durationSeconds: 900 },
       }),
-      after: createAuthMiddleware(async (context) => {
-        if (context.context.returned instanceof APIError) return
-        if (context.path === '/sign-in/email') await forgetAttempts(db, String(context.body?.email ?? ''))
-        const person = context.context.session?.user
-        if (context.path === '/change-password' && person) {
-          await db.user.update({ where: { id: person.id }, data: { initialPassword: false } })
-        }
-      }),
-    },
+    ],
+    hooks: { before: beforeAccountRequest(db), after: afterAccountRequest(db) },
     databaseHooks: {
       session: {
-        create: { after: async (session) => recordSignIn(db, session.userId, session.ipAddress || null) },
+        create: {
+          after: async (session, context) =>
+            recordSession(db, session, { path: context?.path, replaces: Boolean(context?.context.session) }),
+        },
       },
     },
   })

@@ -15,6 +15,10 @@ const environment = z.object({
   TRUSTED_IP_HEADER: z.string().min(1).optional(),
   /** Further addresses, separated by commas, under which people reach the application. */
   TRUSTED_ORIGINS: z.string().optional(),
+  /** Program that sends what comes in on its standard input, with its options. */
+  MAIL_COMMAND: z.string().min(1).optional(),
+  /** Sender of those messages. */
+  MAIL_FROM: z.string().min(3).optional(),
 })
 
 export type Environment = z.infer<typeof environment>

@@ -12,5 +12,18 @@ export async function actorOf(requestHeaders: Headers): Promise<Actor | null> {
   return { userId: id, name, email, initialPassword: initialPassword ?? false }
 }
 
+/** What belongs to the present session and to no other: its secret never leaves the server. */
+export interface SessionHere {
+  token: string
+  /** Whether signing in asks for a code of an authenticator app. */
+  secondFactor: boolean
+}
+
+/** The present session; null when nobody is signed in. */
+export async function sessionHere(): Promise<SessionHere | null> {
+  const session = await auth().api.getSession({ headers: await headers() })
+  return session && { token: session.session.token, secondFactor: session.user.twoFactorEnabled === true }
+}
+
 /** The signed-in person, looked up once a request; null when nobody is signed in. */
 export const currentActor: () => Promise<Actor | null> = cache(async () => actorOf(await headers()))

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next'
+import Link from 'next/link'
 import { SignInForm } from './sign-in-form'
 
 export const metadata: Metadata = { title: 'Sign in' }
@@ -17,6 +18,11 @@ export default async function SignInPage({ searchParams }: PageProps<'/sign-in'>
         <p className="m-0">Sign in to go on where you were. Text that was not saved is kept in this browser.</p>
       ) : null}
       <SignInForm then={typeof then === 'string' ? then : null} />
+      <p className="m-0">
+        <Link prefetch={false} href="/new-password" className="link">
+          Forgot the password
+        </Link>
+      </p>
       <p className="m-0 border-t border-hair pt-3 text-label text-soft">
         This service supports the judgement of a licensed engineer and never replaces it. Local codes, the utility’s
         written acceptance and the maker’s data prevail.

@@ -4,7 +4,16 @@ import { type FormEvent, useEffect, useState } from 'react'
 import { Button } from '@/lib/ui/button'
 import { Labelled } from '@/lib/ui/labelled'
 import { Notice } from '@/lib/ui/notice'
+import { SecondStep } from './second-step'
 import { whereNext } from './where-next'
+
+const asksForCode = async (answer: Response): Promise<boolean> => {
+  const body: unknown = await answer
+    .clone()
+    .json()
+    .catch(() => null)
+  return typeof body === 'object' && body !== null && 'twoFactorRedirect' in body && body.twoFactorRedirect === true
+}
 
 const refusalOf = async (answer: Response | null): Promise<string> => {
   if (!answer) return 'The server did not answer: try again in a moment.'
@@ -20,9 +29,18 @@ const refusalOf = async (answer: Response | null): Promise<string> => {
 export function SignInForm({ then }: { then: string | null }) {
   const [ready, setReady] = useState(false)
   const [busy, setBusy] = useState(false)
-  const [done, setDone] = useState(false)
+  const [step, setStep] = useState<'password' | 'code' | 'done'>('password')
   const [refusal, setRefusal] = useState<string | null>(null)
   useEffect(() => setReady(true), [])
+
+  const goOn = () => {
+    if (then === 'close') setStep('done')
+    else window.location.assign(whereNext(then))
+  }
+  const startAgain = () => {
+    setStep('password')
+    setBusy(false)
+  }
 
   const signIn = async (event: FormEvent<HTMLFormElement>) => {
     event.preventDefault()
@@ -34,13 +52,13 @@ export function SignInForm({ then }: { then: string | null }) {
       headers: { 'content-type': 'application/json' },
       body: JSON.stringify({ email: form.get('email'), password: form.get('password') }),
     }).catch(() => null)
-    if (answer?.ok && then === 'close') return setDone(true)
-    if (answer?.ok) return window.location.assign(whereNext(then))
+    if (answer?.ok) return (await asksForCode(answer)) ? setStep('code') : goOn()
     setRefusal(await refusalOf(answer))
     setBusy(false)
   }
 
-  if (done)
+  if (step === 'code') return <SecondStep onDone={goOn} onStartAgain={startAgain} />
+  if (step === 'done')
     return <Notice tone="good">You are signed in again. Close this tab and save once more in the other one.</Notice>
   return (
     <form method="post" onSubmit={signIn} className="flex flex-col gap-3">
