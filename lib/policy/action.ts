@@ -28,6 +28,8 @@ export const revisionActions = [
   'issue',
   'withdraw',
   'download-report',
+  'share-report',
+  'end-share',
 ] as const
 
 export type LiveAction = (typeof liveActions)[number]

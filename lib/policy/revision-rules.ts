@@ -1,3 +1,4 @@
+import type { RevisionState } from '../study/states'
 import type { RevisionAction } from './action'
 import {
   allHaveSigned,
@@ -52,10 +53,26 @@ const reviews =
   (actor, subject) =>
     all(approver(actor), isNotPreparer(actor, subject), isNotChecker(actor, subject), moves(subject, move))
 
+/** Who hands out links answers for the project; the log of downloads is for the same people. */
+const shares =
+  (states: readonly RevisionState[]): Rule =>
+  (actor, subject) =>
+    all(
+      holds(
+        actor,
+        ['engineer', 'approver', 'administrator'],
+        'Only an engineer, an approver or an administrator shares a report by link.',
+      ),
+      inState(subject, states),
+    )
+
 /** One rule an action; sentences of the trade, in the order in which a refusal helps most. */
 export const revisionRules: Record<RevisionAction, Rule> = {
   'read-revision': reads,
   'download-report': reads,
+  // what no longer stands is not handed out anew; links that are out can still be ended
+  'share-report': shares(['issued']),
+  'end-share': shares(published),
   comment: comments,
   'send-for-check': (actor, subject) =>
     all(engineer(actor), isPreparer(actor, subject), moves(subject, 'send-for-check')),

@@ -79,6 +79,8 @@ sign-approved   -          -          -          -          -          -        
 issue           -          -          -          -          -          -          -          A          -          -          -
 withdraw        -          -          -          -          -          -          -          AasX       AasX       -          -
 download-report PeCcAasX   PeCcAasX   PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamlsX PeCcAamlsX PeCcAamlsX
+share-report    -          -          -          -          -          -          -          -          PeAasX     -          -
+end-share       -          -          -          -          -          -          -          -          PeAasX     PeAasX     PeAasX
 `)
 })
 

@@ -3,7 +3,10 @@ import type { RevisionAction } from '@/lib/policy/action'
 import * as actions from './actions'
 import { Decision, type DecisionWords } from './decision'
 
-type Decided = Exclude<RevisionAction, `sign-${string}` | 'read-revision' | 'download-report' | 'comment'>
+type Decided = Exclude<
+  RevisionAction,
+  `sign-${string}` | 'read-revision' | 'download-report' | 'comment' | 'share-report' | 'end-share'
+>
 
 interface Offer extends DecisionWords {
   /** Binds the revision to a server action: only such functions reach the browser. */

@@ -6,6 +6,7 @@ import { Decisions } from '@/app/(work)/_review/decisions'
 import { ReportFile } from '@/app/(work)/_review/report-file'
 import { SigningRound } from '@/app/(work)/_review/signing-round'
 import { Standing } from '@/app/(work)/_review/standing'
+import { ShareSection } from '@/app/(work)/_share/share-section'
 import type { RevisionAction } from '@/lib/policy/action'
 import { revisionView } from '@/lib/server/revisions/queries'
 import { purposes } from '@/lib/server/revisions/schema'
@@ -56,6 +57,9 @@ export default async function IssuePage({ params }: PageProps<'/studies/[studyId
       </div>
       <SigningRound revision={revision} certificate={await ownCertificate(organisationId)} />
       <ReportFile revision={revision} href={`${base}/${revision.revisionId}/report`} />
+      {revision.allowed.includes('end-share') ? (
+        <ShareSection revisionId={revision.revisionId} mayShare={revision.allowed.includes('share-report')} />
+      ) : null}
       <p className="m-0 text-dense">
         <a className="link" href={`/authority/${organisationId}`} download>
           Download the organisation’s root certificate
