@@ -84,6 +84,7 @@ test('a used or mistyped invitation is one page that says what to do', async ({ 
 test('whoever forgot the password asks for a link and is told the same whatever the address', async ({ page }) => {
   await page.goto('/sign-in')
   await page.getByRole('link', { name: 'Forgot the password' }).click()
+  await expect(page.getByRole('heading', { name: 'Choose a new password', level: 1 })).toBeVisible()
   await page.getByLabel('E-mail address').fill('nobody@elsewhere.example')
   expect(await problems(page)).toEqual([])
   await page.getByRole('button', { name: 'Send link' }).click()

@@ -1,4 +1,5 @@
 import fs from 'node:fs'
+import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { atAnotherDesk, signIn } from './pages/session'
 import { computeCases, decide, openStudy, sign } from './pages/study'
@@ -83,6 +84,30 @@ test('an engineer computes, three people sign, the client downloads and anyone v
     const download = client.waitForEvent('download')
     await client.getByRole('link', { name: 'Download report' }).click()
     return fs.readFileSync(await (await download).path())
+  })
+
+  await test.step('a link hands the same file to somebody without an account, once, by a passphrase', async () => {
+    await approver.goto(`${study}/issue`)
+    await approver.getByLabel('Recipient').fill('R. Ondry, records office')
+    await approver.getByLabel('Most downloads').fill('1')
+    await approver.getByRole('textbox', { name: /^Passphrase/ }).fill('three blue herons')
+    await approver.getByRole('button', { name: 'Share with client' }).click()
+    const link = new URL(await approver.getByLabel('Link to the report').inputValue()).pathname
+    const visitor = await (await browser.newContext()).newPage()
+    await visitor.goto(link)
+    expect((await new AxeBuilder({ page: visitor }).analyze()).violations.map(({ id }) => id)).toEqual([])
+    await visitor.getByLabel('Passphrase').fill('three red herons')
+    await visitor.getByRole('button', { name: 'Download report' }).click()
+    await expect(visitor.getByText(/passphrase does not fit/)).toBeVisible()
+    await visitor.getByLabel('Passphrase').fill('three blue herons')
+    const download = visitor.waitForEvent('download')
+    await visitor.getByRole('button', { name: 'Download report' }).click()
+    expect(fs.readFileSync(await (await download).path()).equals(signed)).toBe(true)
+    await visitor.goto(link)
+    await expect(visitor.getByRole('button', { name: 'Download report' })).toHaveCount(0)
+    await approver.reload()
+    await expect(approver.getByRole('cell', { name: '1 of 1' })).toBeVisible()
+    await visitor.context().close()
   })
 
   await test.step('anyone verifies it without an account, and recomputes it in the browser', async () => {
