@@ -272,6 +272,16 @@ export interface RunSettings {
   tolerance: number
 }
 
+/**
+ * Model of the machines. Third order: rotor fluxes of every machine, stator and network in the steady state. Fifth order:
+ * the one starting machine with its stator too, switched on at the stated angle of phase a's voltage (rad), or at the
+ * worst of all where that is null.
+ */
+export type CaseModel =
+  | { kind: 'quasi-static' }
+  | { kind: 'third-order' }
+  | { kind: 'fifth-order'; switchingAngle: number | null }
+
 /** One computable case, all SI; the only thing the engine needs to know. */
 export interface CaseInput {
   id: string
@@ -289,6 +299,8 @@ export interface CaseInput {
   /** What the supply does during the run; left out where it stands still. */
   disturbance?: Disturbance
   settings: RunSettings
+  /** Quasi-static where left out, but for a machine switched on near synchronous speed: fifth order. */
+  model?: CaseModel
   /** Places whose flicker is wanted, and the intended starts an hour; absent where nobody asks. */
   flicker?: { busIds: readonly string[]; startsPerHour: number }
   /** Motors whose machine is estimated, each with others that meet the same plate; absent or empty for none. */

@@ -11,6 +11,7 @@ import type {
   Volt,
   VoltAmpere,
 } from '../units/si'
+import type { CaseModel } from './case-input'
 import type { DirectStartPeaks } from './direct-start-peaks'
 import type { FlickerResult } from './flicker/start-flicker'
 import type { DutyResult } from './starters/duty'
@@ -201,7 +202,8 @@ export interface Counters {
 
 export interface CaseResult {
   caseId: string
-  model: 'quasi-static'
+  /** Which model gave the numbers; settled states and what precedes the start are always steady circuits. */
+  model: CaseModel['kind']
   outcome: CaseOutcome
   supply: {
     busId: string

@@ -8,6 +8,8 @@ export interface NetworkSolver {
   readonly driven: Float64Array
   /** Admittance connected at each kept node besides the network: re, im. Set by the caller. */
   readonly shunt: Float64Array
+  /** Current fed into each kept node (√3·I) besides: re, im. Set by the caller; zero where it says nothing. */
+  readonly injection: Float64Array
   /** Voltage of each kept node: re, im. The last solution, from which the next search starts. */
   readonly voltage: Float64Array
   readonly counters: { solutions: number; iterations: number; continuations: number }
@@ -30,7 +32,7 @@ const maxHalvings = 12
 const smallestShare = 1e-4
 
 /**
- * Solves f(V) = A·V − s·E + y·V + Σ conj(S(V)/V) = 0.
+ * Solves f(V) = A·V − s·E − J + y·V + Σ conj(S(V)/V) = 0, J the injected currents.
  *
  * Nodes without nonlinear loads come first and are eliminated directly (a motor on its own cable costs one row
  * operation); Newton's method, with both ∂f/∂V and ∂f/∂V*, runs on the nodes with nonlinear loads only. The step is
@@ -50,6 +52,7 @@ export function createSolver(
   const q = n - linear
   const driven = new Float64Array(2)
   const shunt = new Float64Array(2 * n)
+  const injection = new Float64Array(2 * n)
   const voltage = new Float64Array(2 * n)
   /** Working copy of A + y, upper part eliminated down to row `linear`. */
   const work = new Float64Array(2 * n * n)
@@ -73,8 +76,8 @@ export function createSolver(
       work[at + 1] = work[at + 1]! + shunt[2 * i + 1]!
       const re = network.source[2 * i]!
       const im = network.source[2 * i + 1]!
-      right[2 * i] = re * driven[0]! - im * driven[1]!
-      right[2 * i + 1] = re * driven[1]! + im * driven[0]!
+      right[2 * i] = re * driven[0]! - im * driven[1]! + injection[2 * i]!
+      right[2 * i + 1] = re * driven[1]! + im * driven[0]! + injection[2 * i + 1]!
     }
     for (let k = 0; k < linear; k++) {
       const pivot = 2 * (k * n + k)
@@ -289,6 +292,7 @@ export function createSolver(
   return {
     driven,
     shunt,
+    injection,
     voltage,
     counters,
     get weakest() {
@@ -326,8 +330,8 @@ export function createSolver(
         let re = drawn[2 * i]! + shunt[2 * i]! * voltage[2 * i]! - shunt[2 * i + 1]! * voltage[2 * i + 1]!
         let im = drawn[2 * i + 1]! + shunt[2 * i]! * voltage[2 * i + 1]! + shunt[2 * i + 1]! * voltage[2 * i]!
         const [sRe, sIm] = [network.source[2 * i]!, network.source[2 * i + 1]!]
-        re -= sRe * driven[0]! - sIm * driven[1]!
-        im -= sRe * driven[1]! + sIm * driven[0]!
+        re -= sRe * driven[0]! - sIm * driven[1]! + injection[2 * i]!
+        im -= sRe * driven[1]! + sIm * driven[0]! + injection[2 * i + 1]!
         for (let j = 0; j < n; j++) {
           const at = 2 * (i * n + j)
           const [yRe, yIm] = [network.admittance[at]!, network.admittance[at + 1]!]

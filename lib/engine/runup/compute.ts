@@ -49,13 +49,13 @@ export function computeCase(input: CaseInput): CaseResult {
   createObserver(system)(before.speeds, observation)
   const courses = prepareCourses(system, observation)
   const record = simulate(before, courses)
-  const settled = settledStates(system, courses, record)
+  const settled = system.steadily(() => settledStates(system, courses, record))
   const collapsed = record.end.kind === 'collapsed'
   const left = motorOutsideItsCurves(system, record.samples)
   if (left !== null) return nothing(input, left)
   return {
     caseId: input.id,
-    model: 'quasi-static',
+    model: system.fluxModel === null ? 'quasi-static' : 'third-order',
     outcome:
       record.end.kind === 'collapsed'
         ? { kind: 'collapsed', at: second(record.end.at), busId: record.end.busId ?? input.supply.busId }

@@ -1,6 +1,7 @@
 import { type Complex, radianPerSecond, second } from '../../units/si'
 import { pieceAt } from '../driven/load-segments'
 import { evaluateMachine } from '../machines/machine-table'
+import { cagesOf } from '../machines/rotor-flux'
 import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
 import { attemptEnd, endAttempts } from './attempts'
@@ -50,6 +51,10 @@ export interface RunRecord {
 
 /** Longest step, s. */
 const longest = 1
+/** Error allowed in a step in a rotor flux, in parts of that at rated voltage. */
+const fluxTolerance = 1e-7
+/** Within this time of a switching, s, rotor fluxes build up and swing, and the torque is not yet that of the speed. */
+const fluxTime = 0.2
 /** Torque left, in parts of rated, below which a shaft counts as settled, and as worth a look for a hang. */
 const settledTorque = 1e-5
 const hangingTorque = 4e-3
@@ -113,6 +118,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   function afterSwitching(t: number, moved: readonly Move[], halted: ReadonlySet<number> = nobody): boolean {
     lastHangTorque = Number.POSITIVE_INFINITY
     system.setTime(t)
+    if (system.fluxModel !== null) watchTorques(t)
     if (!system.solveAt(state)) return false
     release(halted)
     if (!recorder.begin(t)) return false
@@ -156,7 +162,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     )
     if (late.length === 0) return
     judgeHanging(late)
-    for (const start of late) if (system.resting[start.motor]) start.outcome ??= hangOutcome(system, start, state)
+    for (const start of late)
+      if (system.resting[start.motor]) start.outcome ??= system.steadily(() => hangOutcome(system, start, state))
     for (const start of late) start.outcome ??= { kind: 'timed-out', speed: radianPerSecond(state[start.motor]!) }
   }
 
@@ -249,16 +256,32 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     return open.every((start) => start.outcome !== null) && torque < settledTorque
   }
 
+  /** A shaft still held at rest that goes once the fluxes of its motor stand; after a steady solution that this makes. */
+  function startsByItself(open: readonly StartCourse[]): boolean {
+    if (system.fluxModel === null || !system.solveAt(state)) return false
+    return open.some(({ motor }) => held(motor) && system.balance(motor, 0) > 0)
+  }
+
+  /** The torque of a start is looked at once the swing of its fluxes has died away, or half way up. */
+  function watchTorques(t: number): void {
+    for (const start of starts) {
+      const calm = t >= start.since + fluxTime || state[start.motor]! >= start.speed95 / 2
+      if (start.switchedOn) start.watches.accelerating.active = start.at95 === null && calm
+    }
+  }
+
   /** Resolves starts that have come to where they stay short of their goal. */
   function judgeHanging(open: readonly StartCourse[]): void {
-    const speeds = findHang(system, open, state)
-    if (speeds === null) return
-    for (const start of open) start.outcome = hangOutcome(system, start, speeds)
+    system.steadily(() => {
+      if (startsByItself(open)) return
+      const speeds = findHang(system, open, state)
+      if (speeds !== null) for (const start of open) start.outcome = hangOutcome(system, start, speeds)
+    })
   }
 
   /** Passes over time in which nothing moves, up to the next instant; false where something does move. */
   function skipStillness(t: number, until: number): boolean {
-    const moves = starts.some((start) => start.position === 'open' || rampEnd(start) > t)
+    const moves = system.fluxModel !== null || starts.some((start) => start.position === 'open' || rampEnd(start) > t)
     if (until - t <= longest || restlessness() > settledTorque || moves) return false
     const speeds = findBalance(system, state, 1e-5)
     if (speeds === null) return false
@@ -283,6 +306,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     plant.driven.some((load, i) => load.active && Math.abs(state[i]!) > farthest * plant.synchronous[i]!)
 
   system.piece.set(plant.driven.map((load, i) => pieceAt(load, state[i]!)))
+  system.begin(state)
   if (!recorder.begin(0)) return collapsed(0)
   if (starts.length === 0 && disturbance.nextAt() === null) return result({ kind: 'settled', at: 0 })
   const firstAt = Math.min(
@@ -319,6 +343,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       if (!recorder.follow(!letGo && crossings.length === 0)) return collapsed(integrator.time)
     }
     const t = integrator.time
+    if (system.fluxModel !== null) watchTorques(t)
     for (const start of starts) noteHeat(start, state[system.integral[start.motor]!]!)
     const { moved, halted, stood } = act(crossings, t)
     moved.push(...endAttempts(system, courses, state, t))
@@ -358,6 +383,10 @@ function stepScale(system: System, tolerance: number): Float64Array {
     const [re, im] = [plant.machines.admittance[2 * i]!, plant.machines.admittance[2 * i + 1]!]
     scale[at] = (10 * tolerance * motor.ratedVoltage ** 2 * (re * re + im * im)) / 3
     scale[at + 1] = 10 * tolerance * motor.ratedVoltage ** 2 * plant.machines.airgap[i]!
+  })
+  plant.motors.forEach((motor, i) => {
+    const at = system.fluxModel?.index[i] ?? -1
+    if (at >= 0) scale.fill(fluxTolerance * motor.ratedVoltage, at, at + 2 * cagesOf(plant.machines, i))
   })
   return scale
 }

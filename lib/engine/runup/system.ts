@@ -7,6 +7,7 @@ import { createSolver, type NetworkSolver } from '../network/solver'
 import { codes, connect, connections, disconnect, evaluateConnection, isRegulated } from '../starters/connection'
 import { evaluateDrive } from '../starters/drive'
 import type { Step } from '../starters/position'
+import { createFluxModel, type FluxModel } from './flux-model'
 import type { Plant } from './plant'
 import { createRegulation } from './regulation'
 
@@ -29,6 +30,8 @@ export interface System {
   /** Place of each starting motor's two integrals in the state (∫I²dt, then ∫s·P_ag dt), −1 for others. */
   readonly integral: Int32Array
   readonly stateLength: number
+  /** Rotor fluxes behind the integrals in the state; null in a quasi-static case. */
+  readonly fluxModel: FluxModel | null
   /** Load curves in force. */
   driven: readonly LoadSegments[]
   /** Brings a motor into a position of its starting device at case time t, or off the line. */
@@ -41,6 +44,10 @@ export interface System {
   solveAt(speeds: Float64Array): boolean
   /** Right-hand side of the run-up. State: speed of every motor, then the integrals. */
   derivative(t: number, state: Float64Array, rate: Float64Array): boolean
+  /** Does something with every machine as its steady circuit. */
+  steadily<T>(look: () => T): T
+  /** From here on motors have rotor fluxes: those of the last steady solution where they are connected. */
+  begin(state: Float64Array): void
   /** Torque left for acceleration of the shaft after `solveAt`, with the piece looked up by speed; at standstill against the breakaway torque. */
   balance(motor: number, speed: number): number
 }
@@ -87,8 +94,11 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     length += 2
     return length - 2
   })
+  const fluxModel = createFluxModel(plant, connection, length)
+  if (fluxModel !== null) length = fluxModel.length
+  const fed = new Float64Array(2)
   const saturations = plant.motors.map(({ circuit }) => saturationOf(circuit))
-  const { shunt, voltage, driven } = solver
+  const { shunt, injection, voltage, driven } = solver
 
   /** Motors whose devices look at the voltage of their bus; the rest of the work is spared while there are none. */
   const regulated = new Uint8Array(count)
@@ -165,13 +175,42 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     for (const each of [torque, slipLoss, busSquare, currentSquare, lineSquare]) each.fill(0)
   }
 
+  function lookAtFluxes(model: FluxModel, i: number, state: Float64Array): void {
+    if (connection.code[i] === 0) {
+      model.open(i, state[i]!, state)
+      return
+    }
+    model.before(i, state[i]!, state, fed)
+    const at = 2 * row[i]!
+    if (at < 0) return
+    injection[at] = injection[at]! + fed[0]!
+    injection[at + 1] = injection[at + 1]! + fed[1]!
+    addShunt(i)
+  }
+
+  function carryFluxes(model: FluxModel, i: number, state: Float64Array): void {
+    const at = 2 * row[i]!
+    model.after(i, at < 0 ? driven[0]! : voltage[at]!, at < 0 ? driven[1]! : voltage[at + 1]!, state)
+    torque[i] = (torqueFactor[i]! * model.fluxes.airgap[i]!) / synchronous[i]!
+    slipLoss[i] = model.fluxes.rotorLoss[i]! * connection.ownRotor[i]!
+    currentSquare[i] = model.motorSquare[i]!
+    lineSquare[i] = model.lineSquare[i]!
+  }
+
   function solveAt(speeds: Float64Array): boolean {
+    const moving = fluxModel?.on ? fluxModel : null
     if (dead) {
       withoutSupply()
+      if (moving !== null) for (let i = 0; i < count; i++) if (moving.index[i]! >= 0) moving.open(i, speeds[i]!, speeds)
       return true
     }
     shunt.fill(0)
+    if (fluxModel !== null) injection.fill(0)
     for (let i = 0; i < count; i++) {
+      if (moving !== null && moving.index[i]! >= 0) {
+        lookAtFluxes(moving, i, speeds)
+        continue
+      }
       if (connection.code[i] === 0) continue
       if (!regulated[i]) evaluate(i, speeds[i]!, 1)
       addShunt(i)
@@ -181,6 +220,10 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       const square = squareAt(i)
       busSquare[i] = square
       const code = connection.code[i]!
+      if (moving !== null && moving.index[i]! >= 0 && code !== 0) {
+        carryFluxes(moving, i, speeds)
+        continue
+      }
       if (code === 0) {
         torque[i] = 0
         slipLoss[i] = 0
@@ -236,6 +279,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     connection,
     integral,
     stateLength: length,
+    fluxModel,
     driven: plant.driven,
     move(motor, step, t) {
       const added = step?.rotorResistance ?? 0
@@ -278,7 +322,30 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
         rate[at + 1] = slipLoss[i]!
       }
       if (shared.length > 0) couple(rate)
+      if (!fluxModel?.on) return true
+      for (let i = 0; i < count; i++) {
+        const at = fluxModel.index[i]!
+        if (at >= 0) fluxModel.fluxes.rates(i, 1 - state[i]! / synchronous[i]!, state, at, rate)
+      }
       return true
+    },
+    steadily(look) {
+      if (!fluxModel?.on) return look()
+      fluxModel.on = false
+      const found = look()
+      fluxModel.on = true
+      return found
+    },
+    begin(state) {
+      if (fluxModel === null || !solveAt(state)) return
+      for (let i = 0; i < count; i++) {
+        const at = fluxModel.index[i]!
+        if (at < 0 || connection.code[i] === 0) continue
+        const r = 2 * row[i]!
+        const [re, im] = r < 0 ? [driven[0]!, driven[1]!] : [voltage[r]!, voltage[r + 1]!]
+        fluxModel.fluxes.settle(i, 1 - state[i]! / synchronous[i]!, re, im, state, at)
+      }
+      fluxModel.on = true
     },
     balance(motor, speed) {
       let left = 0
