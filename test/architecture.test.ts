@@ -140,6 +140,7 @@ const engineOrder: Record<string, readonly string[]> = {
   estimate: ['numeric', 'machines'],
   transient: ['numeric', 'network', 'machines', 'driven', 'starters'],
   flicker: ['numeric'],
+  dynamic: ['numeric', 'network', 'machines', 'driven', 'starters', 'runup', 'transient', 'criteria'],
 }
 
 const filesIn = (folder: string): string[] =>

@@ -13,6 +13,8 @@ import type {
 } from '../units/si'
 import type { CaseModel } from './case-input'
 import type { DirectStartPeaks } from './direct-start-peaks'
+import type { UnfitCause } from './dynamic/chosen-model'
+import type { TransientSeries, TransientStartResult } from './dynamic/transient-result'
 import type { FlickerResult } from './flicker/start-flicker'
 import type { DutyResult } from './starters/duty'
 import type { Position } from './starters/position'
@@ -169,6 +171,10 @@ export type Notice =
   | { kind: 'starter-duty-exceeded'; motorId: string; time: Second }
   | { kind: 'open-transition-without-transient'; motorId: string }
   | { kind: 'levels-motors-taken-out'; level: VoltAmpere }
+  /** The fifth-order model was asked for, or must judge, and the case does not fit it: the numbers are quasi-static. */
+  | { kind: 'transient-model-unfit'; cause: UnfitCause }
+  /** Switched on near synchronous speed, so that the fifth-order model was taken unasked. */
+  | { kind: 'cuts-in'; motorId: string }
   | { kind: 'load-below-floor'; loadId: string; at: Second }
 
 export interface MotorSeries {
@@ -187,6 +193,8 @@ export interface CaseSeries {
   time: readonly number[]
   busVoltage: Readonly<Record<string, readonly number[]>>
   motors: Readonly<Record<string, MotorSeries>>
+  /** Envelopes and first periods of a start by the fifth-order model; absent in other cases. */
+  transient?: TransientSeries
 }
 
 export interface Counters {
@@ -222,6 +230,8 @@ export interface CaseResult {
   series: CaseSeries
   /** Peaks of direct starts by the transient model; absent where the case has none. */
   peaks?: readonly DirectStartPeaks[]
+  /** What the fifth-order model gives beyond the tables of every case; absent in cases by other models. */
+  transient?: TransientStartResult
   /** Flicker and rapid change at the places that were asked for; absent where none was or the run has no end. */
   flicker?: readonly FlickerResult[]
   /** The case once more with what the records leave open put otherwise, without curves; absent where nothing is open. */
@@ -230,9 +240,11 @@ export interface CaseResult {
 
 /**
  * `same-plate`: estimated machines replaced by others that meet the same plate; the verdict is that of the worst.
+ * `third-order`: a quasi-static case that closes on residual voltages, for the limits that only a transient model judges.
+ * `quasi-static`: what the quasi-static model gives, beside a case by another one.
  * `low-voltage-torque`: torque falls with the power 2.25 of a voltage below rated, for starts below 0.85 of it.
  */
 export interface CaseVariant {
-  kind: 'same-plate' | 'low-voltage-torque'
+  kind: 'same-plate' | 'low-voltage-torque' | 'quasi-static' | 'third-order'
   result: Omit<CaseResult, 'series' | 'variants'>
 }

@@ -1,13 +1,18 @@
 import { synchronousSpeed } from '../units/speed'
 import { type CaseInput, isTabulated, type MachineModel } from './case-input'
 import type { CaseResult, CaseVariant } from './case-result'
+import { cutsIn, hasResidualTransient } from './criteria/only-transient'
 import { directStartPeaks } from './direct-start-peaks'
+import { chosenModel } from './dynamic/chosen-model'
+import { fifthOrderCase } from './dynamic/fifth-order-case'
 import { startFlicker } from './flicker/start-flicker'
 import { breakdownSlip } from './machines/breakdown-slip'
 import { runCase } from './run-case'
 
 /** Power of the voltage that torque follows in the low-voltage variant (upper half of the typical 2.1 to 2.3). */
 export const lowVoltageExponent = 2.25
+
+const quasiStatic = { kind: 'quasi-static' } as const
 
 const withoutCurves = ({ series: _, variants: __, ...result }: CaseResult): CaseVariant['result'] => result
 
@@ -28,7 +33,7 @@ function withFlicker(input: CaseInput, result: CaseResult): CaseResult {
 
 /** Adds the peaks of direct starts by the transient model. */
 function withPeaks(input: CaseInput, result: CaseResult): CaseResult {
-  if (result.outcome.kind !== 'complete') return result
+  if (result.outcome.kind !== 'complete' || result.peaks) return result
   const peaks = directStartPeaks(input)
   return peaks.length > 0 ? { ...result, peaks } : result
 }
@@ -66,13 +71,40 @@ const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput 
   return models.size > 0 ? withModels(input, models) : null
 }
 
+/** A case by the model that it asks for, beside it what the quasi-static model gives; where the model does not fit, that alone. */
+function runByModel(input: CaseInput): { result: CaseResult; steady: CaseResult | null } {
+  const model = chosenModel(input)
+  if (model.kind === 'third-order') return { result: runCase(input), steady: runCase({ ...input, model: quasiStatic }) }
+  const steady = runCase(input)
+  if (model.kind === 'quasi-static') return { result: steady, steady: null }
+  const found = fifthOrderCase(input, steady, model.switchingAngle)
+  const notices = steady.notices.concat(
+    input.motors.flatMap((motor) => (cutsIn(motor, input) ? [{ kind: 'cuts-in' as const, motorId: motor.id }] : [])),
+  )
+  if (found.ok) return { result: { ...found.result, notices }, steady }
+  return {
+    result: { ...steady, notices: [...notices, { kind: 'transient-model-unfit', cause: found.cause }] },
+    steady: null,
+  }
+}
+
 /** A case with the variants that its input and its own result call for. */
 export function runWithVariants(input: CaseInput): CaseResult {
-  const result = withPeaks(input, withFlicker(input, runCase(input)))
+  const { result: plain, steady } = runByModel(input)
+  const result = withPeaks(input, withFlicker(input, plain))
   const low = lowVoltageTorque(input, result)
   const variants: CaseVariant[] = [
-    ...samePlate(input).map((each) => ({ kind: 'same-plate' as const, result: withoutCurves(runCase(each)) })),
-    ...(low === null ? [] : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runCase(low)) }]),
+    ...samePlate(input).map((each) => ({
+      kind: 'same-plate' as const,
+      result: withoutCurves(runByModel(each).result),
+    })),
+    ...(low === null
+      ? []
+      : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runCase({ ...low, model: quasiStatic })) }]),
+    ...(result.model === 'quasi-static' && hasResidualTransient(input)
+      ? [{ kind: 'third-order' as const, result: withoutCurves(runCase({ ...input, model: { kind: 'third-order' } })) }]
+      : []),
+    ...(steady === null ? [] : [{ kind: 'quasi-static' as const, result: withoutCurves(steady) }]),
   ]
   return variants.length === 0 ? result : { ...result, variants }
 }

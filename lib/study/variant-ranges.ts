@@ -8,7 +8,7 @@ export interface Range {
 /** What one motor's start becomes over the variants of a case of one kind. */
 export interface VariantRange {
   motorId: string
-  kind: CaseVariant['kind']
+  kind: Extract<CaseVariant['kind'], 'same-plate' | 'low-voltage-torque'>
   /** Machines or assumptions in the range; with `same-plate` the estimated machine itself is one of them. */
   count: number
   /** Time to the running position, s; null where some do not get there. */

@@ -1,6 +1,6 @@
 import type { CaseInput } from '../case-input'
 import type { CaseResult } from '../case-result'
-import { judge } from './judge'
+import { judge, wordFor } from './judge'
 import type { CloseMargins, RuleInput, StartFrequency, Verdict, VerdictWord } from './rule'
 
 const weight: Record<VerdictWord, number> = { fails: 0, 'not-assessed': 1, close: 2, meets: 3 }
@@ -23,14 +23,23 @@ export function judgeOverPlate(
   starts: StartFrequency,
   margins: CloseMargins,
 ): Verdict | null {
-  const own = judge(rule, input, result, starts, margins)
+  const steady = judge(rule, input, result, starts, margins)
+  const third = (result.variants ?? []).find(({ kind }) => kind === 'third-order')
+  const moving = third ? judge(rule, input, { ...third.result, series: result.series }, starts, margins) : null
+  /** What only a transient model may judge has its word from the third-order run, or from a quasi-static figure that is worse. */
+  const assessed = (verdict: Verdict): Verdict => {
+    if (verdict.reason !== 'transient-only' || moving === null || rule.limit.kind === 'envelope') return verdict
+    if (moving.margin === null || verdict.margin === null || moving.margin <= verdict.margin) return moving
+    return { ...verdict, word: wordFor(rule, verdict.margin, verdict.limit, margins), reason: null }
+  }
+  const own = steady === null ? null : assessed(steady)
   const others = (result.variants ?? []).filter(({ kind }) => kind === 'same-plate')
   if (own === null || others.length === 0 || rule.limit.kind === 'envelope') return own
   const all = others.flatMap(({ result: other }) => {
     // Curves and the flicker that follows from them are those of the case itself.
     const { series, flicker } = result
     const verdict = judge(rule, input, { ...other, series, ...(flicker && { flicker }) }, starts, margins)
-    return verdict === null ? [] : [verdict]
+    return verdict === null ? [] : [assessed(verdict)]
   })
   const worst = [own, ...all].reduce((least, each) => (byWorse(each, least) < 0 ? each : least))
   return { ...worst, circuits: 1 + others.length }

@@ -3,6 +3,7 @@ import type { CaseResult } from '../case-result'
 import { appliesTo, classInUse } from './applies'
 import { type EnvelopePoint, marginOf, worstUnderEnvelope } from './envelope'
 import { type Measurement, measure, voltagePlaces } from './measure'
+import { onlyTransientJudges } from './only-transient'
 import type { CloseMargins, NotAssessedReason, RuleInput, StartFrequency, Verdict, VerdictWord } from './rule'
 
 /**
@@ -48,10 +49,12 @@ export function judge(
     return { ...blank, word: 'not-assessed', reason: unknown.reason, busId: unknown.busId, motorId: unknown.motorId }
   }
   if (worst === null) return { ...blank, word: 'not-assessed', reason: 'place-not-in-case' }
+  const word = wordFor(rule, margin(worst), worst.limit, margins)
+  const open = word !== 'fails' && onlyTransientJudges(rule, input, result)
   return {
     ...base,
-    word: wordFor(rule, margin(worst), worst.limit, margins),
-    reason: null,
+    word: open ? 'not-assessed' : word,
+    reason: open ? 'transient-only' : null,
     value: worst.value,
     limit: worst.limit,
     margin: margin(worst),
@@ -93,7 +96,8 @@ function figures(rule: RuleInput, input: CaseInput, result: CaseResult): (Measur
   )
 }
 
-function wordFor(rule: RuleInput, margin: number, limit: number, margins: CloseMargins): VerdictWord {
+/** Word for a margin that is known. */
+export function wordFor(rule: RuleInput, margin: number, limit: number, margins: CloseMargins): VerdictWord {
   if (margin < 0) return 'fails'
   return margin < closeBand(rule, limit, margins) ? 'close' : 'meets'
 }

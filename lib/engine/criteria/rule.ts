@@ -75,6 +75,8 @@ export type NotAssessedReason =
   | 'not-declared'
   | 'no-pull-up-data'
   | 'place-not-in-case'
+  /** Cut-in near synchronous speed, open transition or reclosing: steady circuits cannot show the transient. */
+  | 'transient-only'
 
 /** One rule held against one case; a rule that does not apply there has no verdict row. */
 export interface Verdict {

@@ -17,7 +17,8 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
   const { plant } = system
   const found: Notice[] = []
   if (source.takenOut !== null) found.push({ kind: 'levels-motors-taken-out', level: source.takenOut })
-  if (plant.input.disturbance?.remaining === 0) found.push({ kind: 'residual-voltage-not-modelled' })
+  const steady = system.fluxModel === null
+  if (steady && plant.input.disturbance?.remaining === 0) found.push({ kind: 'residual-voltage-not-modelled' })
   for (const start of courses.starts) {
     const former = start.switchedOn ? null : start.former
     if (former !== null)
@@ -41,7 +42,8 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
     const device = judgeDuty(start.starter, starterDuty, (start.runningAt ?? record.end.at) - start.at)
     if (device?.verdict === 'exceeded')
       found.push({ kind: 'starter-duty-exceeded', motorId: motor.id, time: device.time })
-    if (hasGap(start.starter)) found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
+    if (hasGap(start.starter) && (system.fluxModel?.index[start.motor] ?? -1) < 0)
+      found.push({ kind: 'open-transition-without-transient', motorId: motor.id })
   }
   for (const load of plant.input.loads) {
     const at = firstBelowFloor(load, plant.input.buses, record.samples)

@@ -140,7 +140,7 @@ function deviceDuty(start: StartCourse, { duty }: MotorInput, { end }: RunRecord
 }
 
 /** ∫I²dt (referred to the winding) and slip energy in parts of what the permissible locked-rotor time allows, both at rated voltage and as declared. */
-function heatUsed(system: System, i: number, i2t: number, slipEnergy: number): HeatUsed {
+export function heatUsed(system: System, i: number, i2t: number, slipEnergy: number): HeatUsed {
   const { lockedRotorCurrent, lockedRotorTorque, permissibleTime } = system.plant.motors[i]!.declared
   if (permissibleTime === null) return { byCurrent: null, byRotor: null, figure: null, state: null }
   const { time, state } = permissibleTime

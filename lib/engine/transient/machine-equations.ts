@@ -15,6 +15,8 @@ export interface TransientMachine {
   mutual: number
   /** Peak of the phase voltage (V) in q and d, constant in the synchronous frame. */
   voltage: { q: number; d: number }
+  /** Brings what depends on the speed (rad/s) up to date: skin effect, and a network that changes along the run-up. */
+  follow?: (speed: number) => void
 }
 
 /**
@@ -77,10 +79,12 @@ export function transientDerivative(
   loadTorque: (speed: number) => number,
   inertia: number,
 ): Derivative {
-  const { base, poles, resistance, rotor, mutual, leakage, voltage } = machine
+  const { base, poles, rotor, voltage } = machine
   const speedAt = 2 + 2 * rotor.length
   const reading: TransientReading = { q: 0, d: 0, torque: 0 }
   return (_t, state, rate) => {
+    machine.follow?.(state[speedAt]!)
+    const { resistance, mutual, leakage } = machine
     readState(machine, state, reading)
     let [sumQ, sumD] = [state[0]! / leakage, state[1]! / leakage]
     for (let k = 0; k < rotor.length; k++) {

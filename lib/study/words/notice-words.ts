@@ -1,7 +1,19 @@
 import type { Notice } from '../../engine/case-result'
+import type { UnfitCause } from '../../engine/dynamic/chosen-model'
 import { printQuantity } from '../../quantity/print-quantity'
 import type { StudyDocument } from '../document/study-document'
 import { loadTag, motorTag } from './tags'
+
+const unfitCauses: Record<UnfitCause, string> = {
+  'several-starts': 'more than one motor starts',
+  device: 'it takes direct starts without switched capacitors',
+  machine:
+    'the machine is known by curves, typed torque or exponents of saturation, or a reactance of its rotor is zero',
+  network: 'to the motor the network is no resistance and inductance in series',
+  schedule: 'a dip, repeated attempts or contactors are in the schedule',
+  shaft: 'two motors turn one shaft',
+  'no-start': 'no motor is switched on',
+}
 
 /** What the calculation noticed in a case and a reader must know, in one sentence. */
 export const noticeSentence = (notice: Notice, document: StudyDocument): string => {
@@ -20,6 +32,10 @@ export const noticeSentence = (notice: Notice, document: StudyDocument): string 
       return `${motorTag(document, notice.motorId)} changes over with a gap; the transient on reclosing is not in this model.`
     case 'levels-motors-taken-out':
       return `The stated short-circuit level contains the plant's motors; without them it is ${printQuantity(notice.level, 'apparent-power', { digits: 4 })}, which was computed with.`
+    case 'cuts-in':
+      return `${motorTag(document, notice.motorId)} is switched on while it turns near synchronous speed: its first periods are those of the transient model; steady circuits show only where they lead.`
+    case 'transient-model-unfit':
+      return `The fifth-order model does not fit this case (${unfitCauses[notice.cause]}): its numbers are quasi-static.`
     case 'load-below-floor':
       return `Load ${loadTag(document, notice.loadId)} is below its voltage floor from ${printQuantity(notice.at, 'time', { unit: 's', decimals: 2 })} on and counts as constant impedance there.`
   }

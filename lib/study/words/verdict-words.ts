@@ -23,6 +23,8 @@ export const notAssessedReasons: Record<NotAssessedReason, string> = {
   'case-refused': 'the case cannot be set up',
   'state-not-reached': 'the start does not reach that state',
   'not-declared': 'the data sheet is silent on what the limit needs',
+  'transient-only':
+    'only a transient model can judge it: switching on near synchronous speed, or closing on a residual voltage',
   'no-pull-up-data': 'a pull-up torque is declared that the circuit cannot show',
   'place-not-in-case': 'the case does not have that place',
 }
