@@ -35,39 +35,36 @@ const kept = 200
 const tenMinutes = 600
 
 /** Relative square of the voltage at even times: starts evenly over ten minutes, each stopped half-way to the next. */
-function* squares({ time, voltage, before }: PlaceCourse, starts: number): Generator<number> {
+function squares({ time, voltage, before }: PlaceCourse, starts: number): Float64Array {
   const interval = tenMinutes / starts
-  const samples = rate * tenMinutes
+  const values = new Float64Array(rate * tenMinutes).fill(1)
   // A start stands a second into its interval, and a stop brings the voltage before it back.
   const lead = 1
   const stop = starts === 1 ? Number.POSITIVE_INFINITY : lead + (interval - lead) / 2
   const last = time.length - 1
-  let k = 0
-  let begun = -1
-  for (let i = 0; i < samples; i++) {
-    const at = i / rate
-    const turn = Math.min(starts - 1, Math.floor(at / interval))
-    if (turn !== begun) {
-      begun = turn
-      k = 0
+  const settled = (voltage[last]! / before) ** 2
+  for (let turn = 0; turn < starts; turn++) {
+    const from = Math.ceil((turn * interval + lead) * rate - 1e-9)
+    const to = Math.min(values.length, Math.ceil((turn * interval + Math.min(stop, interval)) * rate - 1e-9))
+    let k = 0
+    let i = from
+    for (; i < to; i++) {
+      const t = time[0]! + i / rate - turn * interval - lead
+      while (k < last && time[k + 1]! <= t) k++
+      if (k === last) break
+      const u = voltage[k]! + ((voltage[k + 1]! - voltage[k]!) * (t - time[k]!)) / (time[k + 1]! - time[k]!)
+      values[i] = (u / before) ** 2
     }
-    const since = at - turn * interval
-    const t = time[0]! + since - lead
-    if (since < lead || since >= stop) {
-      yield 1
-      continue
-    }
-    while (k < last && time[k + 1]! <= t) k++
-    const u =
-      k === last
-        ? voltage[last]!
-        : voltage[k]! + ((voltage[k + 1]! - voltage[k]!) * (t - time[k]!)) / (time[k + 1]! - time[k]!)
-    yield (u / before) ** 2
+    values.fill(settled, i, to)
   }
+  return values
 }
 
+/** Sensation, in parts of the largest, below which a steady voltage is no longer followed. */
+const faded = 1e-13
+
 function meterShortTerm(course: PlaceCourse, starts: number, lamp: Lamp): number {
-  const values = Float64Array.from(squares(course, starts))
+  const values = squares(course, starts)
   let sum = 0
   for (const value of values) sum += value
   const mean = sum / values.length
@@ -75,10 +72,16 @@ function meterShortTerm(course: PlaceCourse, starts: number, lamp: Lamp): number
   const offset = values[0]! / mean - 1
   const sensations = new Float64Array(kept * tenMinutes)
   const step = rate / kept
+  let largest = 0
+  let changed = 0
   for (let i = 0; i < values.length; i++) {
     // The record begins in the steady state: what was before it is its first value.
     const sensation = meter(values[i]! / mean - 1 - offset)
     if (i % step === step - 1) sensations[(i + 1) / step - 1] = sensation
+    largest = Math.max(largest, sensation)
+    if (i > 0 && values[i] !== values[i - 1]) changed = i
+    // While the voltage has long stood still and the lamp with it, there is nothing to follow.
+    if (i - changed > 5 * rate && sensation <= faded * largest) while (values[i + 1] === values[i]) i++
   }
   return shortTermSeverity(sensations)
 }
