@@ -13,6 +13,7 @@ import type {
   VoltAmpere,
   Watt,
 } from '../units/si'
+import type { ProtectionInput, ThermalData } from './protection-input'
 import type { Attempt, Contactor, Disturbance, StartAfter } from './schedule-input'
 import type { ChangeOver, FurtherStarter, StartCapacitor, StarterDuty } from './starter-input'
 
@@ -247,6 +248,8 @@ export interface MotorInput {
         capacitors?: readonly StartCapacitor[]
         /** What the starting device may be asked for; left out where nothing is known. */
         starterDuty?: StarterDuty
+        /** When the protection takes the last attempt off the line, from its own switching-on; found by an earlier run. */
+        tripAt?: Second
         /** Curve while starting. */
         load: LoadCurve
         /** Curve once the process is on (valve open); null where it does not change. */
@@ -260,7 +263,11 @@ export interface MotorInput {
     pullUpTorque?: PerUnit | null
     /** Permissible locked-rotor time that the heat is judged against (hot unless the start is cold). */
     permissibleTime: { time: Second; state: 'hot' | 'cold' } | null
+    /** What the maker states about heat beyond that; absent where nothing is. */
+    thermal?: ThermalData
   }
+  /** Relay of the feeder; absent where none is stated. */
+  protection?: ProtectionInput
 }
 
 export interface RunSettings {

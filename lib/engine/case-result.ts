@@ -12,10 +12,13 @@ import type {
   VoltAmpere,
 } from '../units/si'
 import type { CaseModel } from './case-input'
+import type { EnvelopePoint } from './criteria/envelope'
 import type { DirectStartPeaks } from './direct-start-peaks'
 import type { UnfitCause } from './dynamic/chosen-model'
 import type { TransientSeries, TransientStartResult } from './dynamic/transient-result'
 import type { FlickerResult } from './flicker/start-flicker'
+import type { ProtectionResult } from './protection/follow-protection'
+import type { HeatBalance } from './protection/heat-balance'
 import type { DutyResult } from './starters/duty'
 import type { Position } from './starters/position'
 
@@ -34,8 +37,8 @@ export type StartOutcome =
   | { kind: 'timed-out'; speed: RadianPerSecond }
   /** Switched off before it had started, as its schedule asks; from this motor's own switching-on. */
   | { kind: 'abandoned'; at: Second; speed: RadianPerSecond }
-  /** Switched off by lack of voltage: the drive's level, or its contactor's; from this motor's own switching-on. */
-  | { kind: 'tripped'; cause: 'undervoltage' | 'contactor'; at: Second; speed: RadianPerSecond }
+  /** Switched off: by lack of voltage (the drive's level, or its contactor's) or by its relay; from this motor's own switching-on. */
+  | { kind: 'tripped'; cause: 'undervoltage' | 'contactor' | 'protection'; at: Second; speed: RadianPerSecond }
 
 /** How a machine that was running before the start came through it. */
 export type RunningOutcome =
@@ -100,6 +103,8 @@ export interface HeatUsed {
   byRotor: PerUnit | null
   /** The larger of the two; null unless both are known. */
   figure: PerUnit | null
+  /** The same with what attempts before left in the rotor; left out where there were none. */
+  withEarlier?: PerUnit
   state: 'hot' | 'cold' | null
 }
 
@@ -123,6 +128,10 @@ export interface StartResult {
   heatUsed: HeatUsed
   /** Whether the starting device bears this start; left out for devices that carry nothing on the way. */
   device?: DutyResult
+  /** How the relay of the feeder takes this start; left out where none is stated. */
+  protection?: ProtectionResult
+  /** What the start leaves in the rotor, and how often it may be repeated; left out where the maker's data do not reach. */
+  heatBalance?: HeatBalance
   settledSpeed: RadianPerSecond | null
 }
 
@@ -247,4 +256,6 @@ export interface CaseResult {
 export interface CaseVariant {
   kind: 'same-plate' | 'low-voltage-torque' | 'quasi-static' | 'third-order'
   result: Omit<CaseResult, 'series' | 'variants'>
+  /** Worst points under the envelopes of the study; left out where none applies. */
+  envelopes?: readonly { ruleId: string; points: readonly EnvelopePoint[] }[]
 }

@@ -1,4 +1,3 @@
-import type { CaseInput } from './case-input'
 import type { CaseResult } from './case-result'
 import { judgeOverPlate } from './criteria/judge-over-plate'
 import { overallVerdict } from './criteria/overall'
@@ -10,7 +9,7 @@ import { ENGINE_VERSION } from './version'
 /** Computes every case of a study and holds the limits against them; `onProgress` hears of each finished case. */
 export function runStudy(input: StudyRunInput, onProgress?: (done: number, of: number) => void): StudyResult {
   const results: CaseResult[] = []
-  for (const result of computeCases(input.cases)) {
+  for (const result of computeCases(input)) {
     results.push(result)
     onProgress?.(results.length, input.cases.length)
   }
@@ -18,8 +17,8 @@ export function runStudy(input: StudyRunInput, onProgress?: (done: number, of: n
 }
 
 /** Computes cases one after the other, so that a caller can stop, report or yield between them. */
-export function* computeCases(cases: readonly CaseInput[]): Generator<CaseResult, void, undefined> {
-  for (const each of cases) yield runWithVariants(each)
+export function* computeCases({ cases, rules }: StudyRunInput): Generator<CaseResult, void, undefined> {
+  for (const each of cases) yield runWithVariants(each, rules)
 }
 
 /** Holds the limits of a study against cases already computed, in the order of its cases. */

@@ -2,12 +2,16 @@ import { synchronousSpeed } from '../units/speed'
 import { type CaseInput, isTabulated, type MachineModel } from './case-input'
 import type { CaseResult, CaseVariant } from './case-result'
 import { cutsIn, hasResidualTransient } from './criteria/only-transient'
+import { appliesTo } from './criteria/applies'
+import type { EnvelopePoint } from './criteria/envelope'
+import { figures } from './criteria/judge'
+import type { RuleInput } from './criteria/rule'
 import { directStartPeaks } from './direct-start-peaks'
 import { chosenModel } from './dynamic/chosen-model'
 import { fifthOrderCase } from './dynamic/fifth-order-case'
 import { startFlicker } from './flicker/start-flicker'
 import { breakdownSlip } from './machines/breakdown-slip'
-import { runCase } from './run-case'
+import { runProtected } from './run-protected'
 
 /** Power of the voltage that torque follows in the low-voltage variant (upper half of the typical 2.1 to 2.3). */
 export const lowVoltageExponent = 2.25
@@ -74,8 +78,8 @@ const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput 
 /** A case by the model that it asks for, beside it what the quasi-static model gives; where the model does not fit, that alone. */
 function runByModel(input: CaseInput): { result: CaseResult; steady: CaseResult | null } {
   const model = chosenModel(input)
-  if (model.kind === 'third-order') return { result: runCase(input), steady: runCase({ ...input, model: quasiStatic }) }
-  const steady = runCase(input)
+  if (model.kind === 'third-order') return { result: runProtected(input), steady: runProtected({ ...input, model: quasiStatic }) }
+  const steady = runProtected(input)
   if (model.kind === 'quasi-static') return { result: steady, steady: null }
   const found = fifthOrderCase(input, steady, model.switchingAngle)
   const notices = steady.notices.concat(
@@ -88,21 +92,44 @@ function runByModel(input: CaseInput): { result: CaseResult; steady: CaseResult 
   }
 }
 
-/** A case with the variants that its input and its own result call for. */
-export function runWithVariants(input: CaseInput): CaseResult {
+const isPoint = (point: ReturnType<typeof figures>[number]): point is EnvelopePoint => 'limit' in point
+
+/** The worst points of a run under the envelopes that apply to it, found while its curves are there. */
+function underEnvelopes(
+  input: CaseInput,
+  result: CaseResult,
+  rules: readonly RuleInput[],
+): Pick<CaseVariant, 'envelopes'> {
+  if (result.outcome.kind !== 'complete') return {}
+  const envelopes = rules
+    .filter((rule) => rule.limit.kind === 'envelope' && appliesTo(rule, input))
+    .map((rule) => ({ ruleId: rule.id, points: figures(rule, input, result).filter(isPoint) }))
+    .filter(({ points }) => points.length > 0)
+  return envelopes.length > 0 ? { envelopes } : {}
+}
+
+/** Another machine on the same plate, with all that limits are held against and without its curves. */
+function onSamePlate(input: CaseInput, rules: readonly RuleInput[]): CaseVariant {
+  const result = withFlicker(input, runByModel(input).result)
+  return { kind: 'same-plate', result: withoutCurves(result), ...underEnvelopes(input, result, rules) }
+}
+
+/**
+ * A case with the variants that its input and its own result call for.
+ *
+ * @param rules limits of the study; envelopes among them are held against every machine that meets the plate
+ */
+export function runWithVariants(input: CaseInput, rules: readonly RuleInput[] = []): CaseResult {
   const { result: plain, steady } = runByModel(input)
   const result = withPeaks(input, withFlicker(input, plain))
   const low = lowVoltageTorque(input, result)
   const variants: CaseVariant[] = [
-    ...samePlate(input).map((each) => ({
-      kind: 'same-plate' as const,
-      result: withoutCurves(runByModel(each).result),
-    })),
+    ...samePlate(input).map((each) => onSamePlate(each, rules)),
     ...(low === null
       ? []
-      : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runCase({ ...low, model: quasiStatic })) }]),
+      : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runProtected({ ...low, model: quasiStatic })) }]),
     ...(result.model === 'quasi-static' && hasResidualTransient(input)
-      ? [{ kind: 'third-order' as const, result: withoutCurves(runCase({ ...input, model: { kind: 'third-order' } })) }]
+      ? [{ kind: 'third-order' as const, result: withoutCurves(runProtected({ ...input, model: { kind: 'third-order' } })) }]
       : []),
     ...(steady === null ? [] : [{ kind: 'quasi-static' as const, result: withoutCurves(steady) }]),
   ]

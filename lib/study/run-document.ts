@@ -14,7 +14,7 @@ export type ProgressListener = (done: number, of: number) => void
 export const runDocument = (document: StudyDocument, onProgress?: ProgressListener): StudyResult => {
   const input = studyRunInput(document)
   const results = []
-  for (const result of computeCases(input.cases)) {
+  for (const result of computeCases(input)) {
     results.push(result)
     onProgress?.(results.length, input.cases.length)
   }

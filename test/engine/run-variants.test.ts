@@ -1,11 +1,12 @@
 import { describe, expect, it } from 'vitest'
 import type { CaseInput, InductionCircuit } from '@/lib/engine/case-input'
+import { judge } from '@/lib/engine/criteria/judge'
 import { judgeOverPlate } from '@/lib/engine/criteria/judge-over-plate'
 import type { RuleInput } from '@/lib/engine/criteria/rule'
 import { runCase } from '@/lib/engine/run-case'
 import { runWithVariants } from '@/lib/engine/run-variants'
 import { variantRanges } from '@/lib/study/variant-ranges'
-import { ohm, perUnit } from '@/lib/units/si'
+import { ohm, perUnit, second } from '@/lib/units/si'
 import { autotransformer, simpleMotor, simplePlant, singleCage, squareLoad, started } from '../support/simple-plant'
 
 const weaker = (factor: number): InductionCircuit => ({
@@ -60,6 +61,54 @@ describe('a case whose machine is estimated', () => {
     expect(verdict(2 * range!.runUp!.to).word).toBe('meets')
     const { variants: _, ...alone } = result
     expect(judgeOverPlate(timeRule(between), input, alone, often, margins)).toMatchObject({ word: 'meets' })
+  })
+
+  it('is judged by the worst of them under an envelope in time, though their curves are not kept', () => {
+    const input = open([weaker(0.8), weaker(1.3)])
+    const envelope: RuleInput = {
+      ...timeRule(0),
+      id: 'e',
+      place: { kind: 'bus', busId: 'B' },
+      quantity: 'voltage-change',
+      reference: 'before',
+      limit: {
+        kind: 'envelope',
+        steps: [
+          { from: second(0), value: perUnit(0.5) },
+          { from: second(1.4), value: perUnit(0.02) },
+        ],
+      },
+    }
+    const result = runWithVariants(input, [envelope])
+    const own = judge(envelope, input, result, often, margins)!
+    const alone = [weaker(0.8), weaker(1.3)].map((circuit) => {
+      const one = { ...plant(), motors: plant().motors.map((motor) => ({ ...motor, circuit })) }
+      return judge(envelope, one, runCase(one), often, margins)!
+    })
+    const least = Math.min(own.margin!, ...alone.map(({ margin }) => margin!))
+    const verdict = judgeOverPlate(envelope, input, result, often, margins)!
+    expect(least).toBeLessThan(own.margin!)
+    expect(verdict).toMatchObject({ margin: least, circuits: 3 })
+    expect(result.variants!.every((variant) => !('series' in variant.result))).toBe(true)
+    // Results without those points are judged by the case alone, and say so by the missing count.
+    const older = { ...result, variants: result.variants!.map(({ envelopes: _, ...variant }) => variant) }
+    expect(judgeOverPlate(envelope, input, older, often, margins)).toEqual(own)
+  })
+
+  it('is judged by the worst of them in flicker', () => {
+    const models = [weaker(0.8), weaker(1.3)]
+    const input = { ...open(models), flicker: { busIds: ['B'], startsPerHour: 1 } }
+    const result = runWithVariants(input)
+    const severities = [result, ...result.variants!.map((variant) => variant.result)].map(
+      ({ flicker }) => flicker![0]!.shortTerm.meter,
+    )
+    expect(new Set(severities).size).toBe(3)
+    const flicker: RuleInput = {
+      ...timeRule(100),
+      place: { kind: 'bus', busId: 'B' },
+      quantity: 'flicker-short-term',
+    }
+    expect(judgeOverPlate(flicker, input, result, often, margins)!.value).toBe(Math.max(...severities))
   })
 
   it('has no range where no machine but the estimated one meets the plate', () => {

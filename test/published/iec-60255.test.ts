@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
+import { elementCourse } from '@/lib/engine/protection/element-course'
 import { type InverseCurve, inverseTime } from '@/lib/engine/protection/inverse-curve'
 import { thermalTime } from '@/lib/engine/protection/thermal-image'
-import { second } from '@/lib/units/si'
+import { ampere, second } from '@/lib/units/si'
 
 // IEC 60255-151 and IEEE C37.112: constants as several makers' relay manuals print them; times computed from them.
 describe('IEC 60255-151 and IEEE C37.112: times of inverse elements at a multiplier of 1', () => {
@@ -66,5 +67,22 @@ describe('IEC 60255-149: thermal image with τ = 600 s and k = 1.05', () => {
   ])('at %d times the base current', (current, cold, hot) => {
     expect(thermalTime(image, current)! / cold).toBeCloseTo(1, 5)
     expect(thermalTime(image, current, (1 / 1.05) ** 2)! / hot).toBeCloseTo(1, 5)
+  })
+})
+
+// IEEE C37.112: reset times t_r·TD/(1 − M²); constants 4.85, 21.6 and 29.1 from memory of the standard.
+describe('IEEE C37.112: an element without current falls back in its published time', () => {
+  it.each([
+    ['moderately-inverse-us', 4.85],
+    ['very-inverse-us', 21.6],
+    ['extremely-inverse-us', 29.1],
+  ] as const)('%s in %d s at a dial of 1', (curve, reset) => {
+    const course = elementCourse({ kind: 'inverse', curve, pickUp: ampere(1), multiplier: 1, reset: null }, 'fast')
+    course.advance(0.9 * inverseTime(curve, 5)!, 5, 5)
+    course.advance(reset / 2, 0, 0)
+    expect(course.travelled()).toBeCloseTo(0.4, 9)
+    // At 0.8 of the setting it is slower by 1 − 0.8².
+    course.advance(reset / 2, 0.8, 0.8)
+    expect(course.travelled()).toBeCloseTo(0.4 - 0.18, 9)
   })
 })

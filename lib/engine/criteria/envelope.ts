@@ -2,7 +2,7 @@ import { type Second, second } from '../../units/si'
 import type { CaseInput } from '../case-input'
 import type { CaseResult } from '../case-result'
 import { firstSwitching, type Measured, referenceVoltage, type VoltagePlace } from './measure'
-import type { RuleInput, RuleLimit } from './rule'
+import type { RuleInput, RuleLimit, RuleQuantity } from './rule'
 
 /** A figure with the limit in force at its instant. */
 export interface EnvelopePoint extends Measured {
@@ -56,10 +56,16 @@ export function worstUnderEnvelope(
   return worst
 }
 
+/** Whether a limit on a quantity is one from below. */
+export const isFloor = (quantity: RuleQuantity): boolean =>
+  quantity === 'remaining-voltage' ||
+  quantity === 'accelerating-torque' ||
+  quantity === 'trip-margin' ||
+  quantity === 'thermal-margin'
+
 /** Distance inside the limit, in its unit; negative beyond it. */
 export function marginOf(rule: RuleInput, value: number, limit: number): number {
-  const atLeast = rule.quantity === 'remaining-voltage' || rule.quantity === 'accelerating-torque'
-  return atLeast ? value - limit : limit - value
+  return isFloor(rule.quantity) ? value - limit : limit - value
 }
 
 /** The sample just after the first switching-on: the later of two at that instant. */

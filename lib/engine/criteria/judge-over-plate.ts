@@ -3,6 +3,8 @@ import type { CaseResult } from '../case-result'
 import { judge, wordFor } from './judge'
 import type { CloseMargins, RuleInput, StartFrequency, Verdict, VerdictWord } from './rule'
 
+const noCurves = { time: [], busVoltage: {}, motors: {} }
+
 const weight: Record<VerdictWord, number> = { fails: 0, 'not-assessed': 1, close: 2, meets: 3 }
 
 /** The worse first; among equals the one with less margin, a limit that nothing reached having least. */
@@ -14,7 +16,7 @@ const byWorse = (a: Verdict, b: Verdict): number =>
 /**
  * Holds one rule against a case and against all its machines that meet the same plates; the worst speaks.
  *
- * Envelopes and flicker need the curve in time, which is kept for the case itself: they are held against it alone.
+ * Of the others no curves are kept: their worst points under each envelope, and their flicker, were found when they ran.
  */
 export function judgeOverPlate(
   rule: RuleInput,
@@ -34,13 +36,14 @@ export function judgeOverPlate(
   }
   const own = steady === null ? null : assessed(steady)
   const others = (result.variants ?? []).filter(({ kind }) => kind === 'same-plate')
-  if (own === null || others.length === 0 || rule.limit.kind === 'envelope') return own
-  const all = others.flatMap(({ result: other }) => {
-    // Curves and the flicker that follows from them are those of the case itself.
-    const { series, flicker } = result
-    const verdict = judge(rule, input, { ...other, series, ...(flicker && { flicker }) }, starts, margins)
+  if (own === null || others.length === 0) return own
+  const all = others.flatMap(({ result: other, envelopes }) => {
+    const kept = envelopes?.find(({ ruleId }) => ruleId === rule.id)?.points
+    // An envelope that was not looked at when the others ran is held against the case alone.
+    if (rule.limit.kind === 'envelope' && kept === undefined && other.outcome.kind === 'complete') return []
+    const verdict = judge(rule, input, { ...other, series: noCurves }, starts, margins, kept)
     return verdict === null ? [] : [assessed(verdict)]
   })
   const worst = [own, ...all].reduce((least, each) => (byWorse(each, least) < 0 ? each : least))
-  return { ...worst, circuits: 1 + others.length }
+  return all.length === 0 ? own : { ...worst, circuits: 1 + all.length }
 }

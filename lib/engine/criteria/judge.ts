@@ -9,6 +9,7 @@ import type { CloseMargins, NotAssessedReason, RuleInput, StartFrequency, Verdic
 /**
  * Holds one rule against one case. Unrounded figures are compared; the worst place speaks for the case.
  *
+ * @param kept worst points under the envelope of the rule, of a run whose curves were not kept
  * @returns null when the rule does not apply there
  */
 export function judge(
@@ -17,6 +18,7 @@ export function judge(
   result: CaseResult,
   starts: StartFrequency,
   margins: CloseMargins,
+  kept?: readonly EnvelopePoint[],
 ): Verdict | null {
   if (!appliesTo(rule, input)) return null
   const base = { ruleId: rule.id, caseId: input.id, inUse: classInUse(rule.startClass, starts) }
@@ -34,7 +36,7 @@ export function judge(
   }
   if (stopped !== null) return { ...blank, word: 'not-assessed', reason: stopped }
 
-  const points = figures(rule, input, result)
+  const points = kept ?? figures(rule, input, result)
   const missed = points.find((point) => point.kind === 'missed')
   if (missed) return { ...blank, word: 'fails', reason: null, busId: missed.busId, motorId: missed.motorId }
   const found = points.flatMap((point) => (point.kind === 'value' ? [{ limit, ...point }] : []))
@@ -80,7 +82,8 @@ function withoutFigures(result: CaseResult): NotAssessedReason | null {
   return result.outcome.kind === 'refused' ? 'case-refused' : 'case-not-computed'
 }
 
-function figures(rule: RuleInput, input: CaseInput, result: CaseResult): (Measurement | EnvelopePoint)[] {
+/** Every figure of a case that a rule is held against; for an envelope the worst point of each place. */
+export function figures(rule: RuleInput, input: CaseInput, result: CaseResult): (Measurement | EnvelopePoint)[] {
   const { limit } = rule
   if (limit.kind === 'value') return measure(rule, input, result)
   const places = voltagePlaces(rule, input, result)

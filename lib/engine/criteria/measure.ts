@@ -113,12 +113,36 @@ function startFigure(rule: RuleInput, motor: MotorInput, result: MotorResult | u
       return { kind: 'unknown', reason: 'no-pull-up-data', ...where }
     return { kind: 'value', value: start.leastAccelerating.ofRated, ...where, at: null }
   }
-  const { figure } = start.heatUsed
+  const figure = start.heatUsed.withEarlier ?? start.heatUsed.figure
   if (figure === null) return { kind: 'unknown', reason: 'not-declared', ...where }
   // Heat goes on growing in a start that does not end: a figure inside the limit then says nothing.
   const limit = rule.limit.kind === 'value' ? rule.limit.value : 0
   if (!started && figure <= limit) return { kind: 'unknown', reason: 'state-not-reached', ...where }
   return { kind: 'value', value: figure, ...where, at: null }
+}
+
+/** Margin of a start to a trip, or of a trip to what the held rotor bears; the worst attempt speaks. */
+function protectionFigure(rule: RuleInput, motor: MotorInput, result: MotorResult | undefined): Measurement {
+  const where = { busId: null, motorId: motor.id }
+  const starts = result?.start ? [...(result.earlierAttempts ?? []), result.start] : []
+  const known = starts.flatMap(({ protection }) => protection ?? [])
+  if (starts.length === 0) return { kind: 'unknown', reason: 'state-not-reached', ...where }
+  if (known.length < starts.length) return { kind: 'unknown', reason: 'no-protection', ...where }
+  const values: (number | null)[] = known.map(({ tripMargin, lockedRotor }) =>
+    rule.quantity === 'trip-margin' ? tripMargin : lockedRotor.margin,
+  )
+  if (rule.quantity === 'trip-margin') {
+    const released = known.every(({ elements }) => elements.every((one) => one.inhibitedFor === undefined))
+    if (!released || known.at(-1)!.startedAt === null) return { kind: 'missed', ...where }
+  } else {
+    if (known.some(({ lockedRotor }) => lockedRotor.permissible === null))
+      return { kind: 'unknown', reason: 'not-declared', ...where }
+    // A held rotor that no element takes off is not protected at all.
+    if (known.some(({ lockedRotor }) => lockedRotor.trip === null)) return { kind: 'missed', ...where }
+  }
+  const found = values.filter((value) => value !== null)
+  if (found.length === 0) return { kind: 'unknown', reason: 'no-pick-up', ...where }
+  return { kind: 'value', value: Math.min(...found), ...where, at: null }
 }
 
 /** Severities at the places of a rule. */
@@ -141,6 +165,15 @@ export function measure(rule: RuleInput, input: CaseInput, result: CaseResult): 
   if (rule.quantity === 'run-up-time' || rule.quantity === 'accelerating-torque' || rule.quantity === 'heat-used') {
     return startsUnder(rule, input).map((motor) =>
       startFigure(
+        rule,
+        motor,
+        result.motors.find(({ motorId }) => motorId === motor.id),
+      ),
+    )
+  }
+  if (rule.quantity === 'trip-margin' || rule.quantity === 'thermal-margin') {
+    return startsUnder(rule, input).map((motor) =>
+      protectionFigure(
         rule,
         motor,
         result.motors.find(({ motorId }) => motorId === motor.id),

@@ -11,7 +11,8 @@ export type RulePlace =
 /**
  * What is limited. Change: (U before − U)/reference, the largest for `deepest`. Remaining: U/reference, the least.
  * Highest: U/reference, the largest over the run. Time in s, torque in parts of rated torque, heat in parts of the permissible,
- * flicker as the severity that the flickermeter gives.
+ * flicker as the severity that the flickermeter gives, trip margin as the least time in s that the relay leaves a start,
+ * thermal margin as permissible locked-rotor time less time to trip with the rotor held, s.
  */
 export type RuleQuantity =
   | 'voltage-change'
@@ -22,6 +23,8 @@ export type RuleQuantity =
   | 'heat-used'
   | 'flicker-short-term'
   | 'flicker-long-term'
+  | 'trip-margin'
+  | 'thermal-margin'
 
 export type RuleInstant = 'first' | 'deepest' | 'settled-after-start' | 'settled-after-process'
 
@@ -77,6 +80,8 @@ export type NotAssessedReason =
   | 'place-not-in-case'
   /** Cut-in near synchronous speed, open transition or reclosing: steady circuits cannot show the transient. */
   | 'transient-only'
+  | 'no-protection'
+  | 'no-pick-up'
 
 /** One rule held against one case; a rule that does not apply there has no verdict row. */
 export interface Verdict {

@@ -34,32 +34,6 @@ export function thermalTime(image: ThermalImage, current: number, before = 0): S
   return second(image.heating * Math.log((end - before) / (end - 1)))
 }
 
-/**
- * When a thermal image operates on a current that changes, and the heat at the end; the current is constant over a step
- * at the root of the mean of the squares of its ends.
- *
- * @param times rising, s
- * @param currents at these times, A
- */
-export function followHeat(
-  image: ThermalImage,
-  before: number,
-  times: readonly number[],
-  currents: readonly number[],
-): { operatedAt: Second | null; heat: number } {
-  let heat = before
-  let operatedAt: Second | null = null
-  for (let k = 0; k + 1 < times.length; k++) {
-    const step = times[k + 1]! - times[k]!
-    const [a, b] = [currents[k]!, currents[k + 1]!]
-    const current = Math.sqrt((a * a + a * b + b * b) / 3)
-    const time = operatedAt === null ? thermalTime(image, current, heat) : null
-    if (time !== null && time <= step) operatedAt = second(times[k]! + time)
-    heat = heatAfter(image, heat, current, step)
-  }
-  return { operatedAt, heat }
-}
-
 /** Rest that a machine needs until a start of known heat fits under the limit, s; null where it does not fit even cold. */
 export function restBefore(image: ThermalImage, heatNow: number, heatOfStart: number): Second | null {
   const room = 1 - heatOfStart

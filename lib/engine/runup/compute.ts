@@ -112,7 +112,7 @@ function prepareCourses(system: System, before: Float64Array): Courses {
   const { speedCriterion } = plant.input.settings
   const starts = plant.motors.flatMap((motor, i): StartCourse[] => {
     if (motor.duty.kind !== 'starting') return []
-    const { starter, capacitors, attempts, contactor } = motor.duty
+    const { starter, capacitors, attempts, contactor, tripAt } = motor.duty
     return [
       {
         motor: i,
@@ -129,6 +129,7 @@ function prepareCourses(system: System, before: Float64Array): Courses {
         attempts: attempts ?? [],
         attempt: 0,
         contactor: contactor ? contactorCourse({ ...contactor, reclose: null }) : null,
+        tripAt: tripAt ?? null,
         undervoltage: starter.kind === 'drive' ? starter.undervoltage : null,
         capacitors: (capacitors ?? []).map((item) => ({ item, state: 'waiting' as const })),
         runningAt: null,

@@ -28,6 +28,8 @@ export interface StartCourse {
   attempt: number
   /** Its contactor, where it may end the start. */
   contactor: ContactorCourse | null
+  /** When its protection takes the last attempt off the line, from its switching-on; null where it does not. */
+  tripAt: number | null
   /** Line voltage in V below which its drive switches itself off; null for other devices. */
   undervoltage: number | null
   /** Capacitors switched with the start: null while they wait, then whether they are in. */

@@ -28,7 +28,7 @@ import {
   switchDue,
 } from './schedule'
 import type { System } from './system'
-import { trip } from './trip'
+import { protectionDue, trip, tripProtected } from './trip'
 
 /** How a run ended. */
 export type RunEnd =
@@ -241,7 +241,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   function isOver(t: number): boolean {
     if (starts.some((start) => untilOf(start)?.kind === 'after' || (!start.switchedOn && !isForlorn(start))))
       return false
-    if (starts.some((start) => attemptEnd(start) !== null) || disturbance.nextAt() !== null) return false
+    if (starts.some((start) => attemptEnd(start) !== null || protectionDue(start) !== null)) return false
+    if (disturbance.nextAt() !== null) return false
     if (contactorInstants(courses).some((due) => due !== null)) return false
     if (starts.some((start) => awaitsCapacitor(start, t))) return false
     const torque = restlessness()
@@ -298,6 +299,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const otherInstants = (): (number | null)[] => [
     disturbance.nextAt(),
     ...starts.map(attemptEnd),
+    ...starts.map(protectionDue),
     ...contactorInstants(courses),
   ]
 
@@ -354,6 +356,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     const disturbed = disturbance.act(t)
     const contactors = switchContactors(system, courses.running, t)
     moved.push(...tripContactors(system, starts, state, t))
+    moved.push(...tripProtected(system, starts, state, t))
     giveUp(t)
     if (moved.length > 0 || halted.size > 0 || letGo || stood || disturbed || contactors) {
       if (!afterSwitching(t, moved, halted)) return collapsed(t)

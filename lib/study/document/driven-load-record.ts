@@ -127,6 +127,13 @@ export const drivenLoadRecord = z.strictObject({
     .max(60)
     .default('')
     .describe('Motors whose loads have the same name here turn one shaft; empty: a shaft of its own.'),
+  startsPerHour: z
+    .number()
+    .min(0)
+    .max(100)
+    .nullable()
+    .default(null)
+    .describe('Starts an hour that the process allows.'),
   curves: z.array(loadCurve).min(1).max(20),
   note,
 })

@@ -23,6 +23,8 @@ export const limitRecord = z.strictObject({
     'heat-used',
     'flicker-short-term',
     'flicker-long-term',
+    'trip-margin',
+    'thermal-margin',
   ]),
   instant: z
     .enum(['first', 'deepest', 'settled-after-start', 'settled-after-process'])

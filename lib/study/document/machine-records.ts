@@ -2,6 +2,7 @@ import * as z from 'zod'
 import { entered } from './entered'
 import { note, recordId, tag } from './identity'
 import { curveInterpolation, motorCircuit, saturationExponents, torquePoint } from './motor-circuit'
+import { motorProtection, thermalLimitPoint } from './motor-protection'
 
 export const motorRecord = z.strictObject({
   id: recordId,
@@ -60,9 +61,19 @@ export const motorRecord = z.strictObject({
     .nullable()
     .default(null)
     .describe('Permissible locked-rotor time from hot at rated voltage.'),
+  thermalLimits: z
+    .array(thermalLimitPoint)
+    .max(60)
+    .default([])
+    .describe(
+      'Points of the thermal limit curves at currents below that of the locked rotor, hot and cold; empty where the maker gives none.',
+    ),
+  coolingRunning: entered('time').nullable().default(null).describe('Time constant of cooling while running.'),
+  coolingStopped: entered('time').nullable().default(null).describe('Time constant of cooling at standstill.'),
   startsCold: z.int().min(0).max(20).nullable().default(null).describe('Starts in succession from cold.'),
   startsHot: z.int().min(0).max(20).nullable().default(null).describe('Starts in succession from hot.'),
   startsPerHour: z.int().min(0).max(60).nullable().default(null),
+  protection: motorProtection.nullable().default(null).describe('Relay of its feeder; null where none is stated.'),
   note,
 })
 

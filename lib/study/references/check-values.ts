@@ -5,6 +5,7 @@ import type { Entered } from '../document/entered'
 import type { MotorRecord } from '../document/machine-records'
 import type { StudyDocument } from '../document/study-document'
 import { checkDrivenLoads } from './check-driven-loads'
+import { checkProtection } from './check-protection'
 import { checkStarters } from './check-starters'
 import { unless } from './issue'
 
@@ -154,6 +155,7 @@ export const checkValues = (document: StudyDocument): FieldIssue[] => [
   ...document.plant.motors.flatMap((record, i) => motor(record, ['plant', 'motors', i], document.frequency.si)),
   ...checkDrivenLoads(document),
   ...checkStarters(document),
+  ...checkProtection(document),
   ...cases(document),
   ...settings(document),
 ]

@@ -26,6 +26,8 @@ const fits: Record<
   'heat-used': { places: starting, where: 'the starting motors', limits: ['ratio'], form: 'a ratio' },
   'flicker-short-term': { places: buses, where: 'a bus', limits: ['ratio'], form: 'a severity such as 0.9' },
   'flicker-long-term': { places: buses, where: 'a bus', limits: ['ratio'], form: 'a severity such as 0.7' },
+  'trip-margin': { places: starting, where: 'the starting motors', limits: ['time'], form: 'a time' },
+  'thermal-margin': { places: starting, where: 'the starting motors', limits: ['time'], form: 'a time' },
 }
 
 /** The references that make sense for a voltage at a place; other quantities have none to choose. */

@@ -7,6 +7,7 @@ import type { StudySettings } from '../document/study-document'
 import { factorOn } from './case-changes'
 import { scaleAdmittance } from './circuit-input'
 import { ratedTorqueOf } from './nameplate-of-motor'
+import { protectionInput, thermalInput } from './protection-input'
 
 /**
  * Motor plus everything it turns at the motor shaft: J = J_motor + Σ J_i·(n_i/n)² + Σ 2·H_i·S_i/ω_r².
@@ -27,6 +28,7 @@ const declaredValues = (motor: MotorRecord, state: StudySettings['thermalState']
     lockedRotorTorque: lockedRotorTorque && newtonMetre(lockedRotorTorque.si * ratedTorqueOf(motor)),
     pullUpTorque: motor.pullUpTorque && perUnit(motor.pullUpTorque.si),
     permissibleTime: permissible && { time: second(permissible.si), state },
+    ...thermalInput(motor),
   }
 }
 
@@ -54,5 +56,6 @@ export const motorInput = (parts: {
     ...(load.shaft !== '' && { shaft: load.shaft }),
     duty,
     declared: declaredValues(motor, settings.thermalState),
+    ...(duty.kind === 'starting' && protectionInput(motor, settings.thermalState)),
   }
 }

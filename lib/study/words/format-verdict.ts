@@ -1,3 +1,4 @@
+import { isFloor } from '../../engine/criteria/envelope'
 import type { CloseMargins, NotAssessedReason, RuleQuantity, Verdict, VerdictWord } from '../../engine/criteria/rule'
 import { formatNumber } from '../../quantity/format-number'
 import { notAssessedReasons } from './verdict-words'
@@ -25,13 +26,12 @@ const prints: Record<RuleQuantity, Print> = {
   'heat-used': wholePercent,
   'flicker-short-term': severity,
   'flicker-long-term': severity,
+  'trip-margin': seconds,
+  'thermal-margin': seconds,
 }
 
 /** More decimals than a double holds of these figures. */
 const mostDecimals = 12
-
-const atLeast = (quantity: RuleQuantity): boolean =>
-  quantity === 'remaining-voltage' || quantity === 'accelerating-torque'
 
 const rounded = (value: number, decimals: number): number => Number(value.toFixed(decimals))
 
@@ -44,7 +44,7 @@ const wordOfPrinted = (
   { factor }: Print,
 ): VerdictWord => {
   // Differences of printed decimals carry binary dust; a margin of exactly the close width is not close.
-  const margin = Number((atLeast(quantity) ? value - limit : limit - value).toFixed(mostDecimals))
+  const margin = Number((isFloor(quantity) ? value - limit : limit - value).toFixed(mostDecimals))
   if (margin < 0) return 'fails'
   const voltage = quantity === 'remaining-voltage' || quantity === 'highest-voltage'
   const width = voltage ? margins.voltage / factor : margins.ofLimit * Math.abs(limit)
@@ -89,7 +89,7 @@ export const formatVerdict = (
   )
     decimals += 1
   const printed = rounded(figure, decimals)
-  const margin = atLeast(quantity) ? printed - printedBar : printedBar - printed
+  const margin = isFloor(quantity) ? printed - printedBar : printedBar - printed
   return {
     value: formatNumber(printed, { decimals }),
     limit: limitText,
@@ -104,7 +104,7 @@ export const verdictFigure = (
   quantity: RuleQuantity,
   reason: NotAssessedReason | null,
 ): string => {
-  const side = atLeast(quantity) ? 'at least' : 'at most'
+  const side = isFloor(quantity) ? 'at least' : 'at most'
   const unit = formatted.unit === '' ? '' : `\u2009${formatted.unit}`
   const none = reason === null ? 'not reached' : notAssessedReasons[reason]
   return `${formatted.value === null ? none : formatted.value + unit} (${side} ${formatted.limit}${unit})`

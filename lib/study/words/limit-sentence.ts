@@ -1,3 +1,4 @@
+import { isFloor } from '../../engine/criteria/envelope'
 import type { LimitRecord } from '../document/limit-record'
 import type { StudyDocument } from '../document/study-document'
 import { listed } from './list-words'
@@ -51,20 +52,32 @@ export const limitedQuantity = ({ quantity, instant }: LimitRecord, { settings }
       return 'short-term flicker Pst by flickermeter'
     case 'flicker-long-term':
       return 'long-term flicker Plt by flickermeter'
+    case 'trip-margin':
+      return 'time that the relay of the feeder leaves a start'
+    case 'thermal-margin':
+      return `permissible locked-rotor time from ${settings.thermalState} less time to trip with the rotor held`
   }
 }
+
+/** Quantities that are no part of anything. */
+const withoutReference: ReadonlySet<LimitRecord['quantity']> = new Set([
+  'run-up-time',
+  'flicker-short-term',
+  'flicker-long-term',
+  'trip-margin',
+  'thermal-margin',
+])
 
 const parts = ({ quantity, reference }: LimitRecord): string => {
   if (quantity === 'heat-used') return ' of the permissible locked-rotor heat'
   if (quantity === 'accelerating-torque') return ' of rated torque'
-  if (quantity === 'run-up-time' || quantity === 'flicker-short-term' || quantity === 'flicker-long-term') return ''
+  if (withoutReference.has(quantity)) return ''
   return { before: ' of the voltage before the start', nominal: ' of nominal', rated: ' of rated voltage' }[reference]
 }
 
 /** The value as typed, with its side: `at most 4.0 % of the voltage before the start`. */
 export const limitValuePhrase = (limit: LimitRecord): string => {
-  const side =
-    limit.quantity === 'remaining-voltage' || limit.quantity === 'accelerating-torque' ? 'at least' : 'at most'
+  const side = isFloor(limit.quantity) ? 'at least' : 'at most'
   if (limit.limit.kind !== 'envelope') return `${side} ${limit.limit.value.text}${parts(limit)}`
   const steps = limit.limit.steps.map(({ from, value }, i) =>
     i === 0 ? value.text : `${value.text} from ${from.text} on`,

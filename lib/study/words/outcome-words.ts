@@ -18,6 +18,12 @@ export const startOutcomeWords: Record<StartOutcome['kind'], string> = {
   abandoned: 'abandoned',
 }
 
+const tripCauses: Record<Extract<StartOutcome, { kind: 'tripped' }>['cause'], string> = {
+  contactor: 'the voltage falls below what its contactor holds in at',
+  undervoltage: 'the line voltage falls below the undervoltage level of its drive',
+  protection: 'the relay of its feeder operates',
+}
+
 /** How a start ended, in one sentence about the motor. */
 export const startOutcomeSentence = (outcome: StartOutcome, motor: string): string => {
   switch (outcome.kind) {
@@ -36,11 +42,7 @@ export const startOutcomeSentence = (outcome: StartOutcome, motor: string): stri
     case 'abandoned':
       return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}, before it has started.`
     case 'tripped': {
-      const cause =
-        outcome.cause === 'contactor'
-          ? 'the voltage falls below what its contactor holds in at'
-          : 'the line voltage falls below the undervoltage level of its drive'
-      return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}: ${cause}.`
+      return `${motor} is switched off ${seconds(outcome.at)} after its switching-on, at ${speed(outcome.speed)}: ${tripCauses[outcome.cause]}.`
     }
   }
 }

@@ -27,4 +27,6 @@ export const notAssessedReasons: Record<NotAssessedReason, string> = {
     'only a transient model can judge it: switching on near synchronous speed, or closing on a residual voltage',
   'no-pull-up-data': 'a pull-up torque is declared that the circuit cannot show',
   'place-not-in-case': 'the case does not have that place',
+  'no-protection': 'no relay is stated for the feeder',
+  'no-pick-up': 'the current of the start is below the setting of every element',
 }

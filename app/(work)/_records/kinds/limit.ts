@@ -128,6 +128,8 @@ export const limit: KindDescription = {
         { value: 'heat-used', label: 'heat used' },
         { value: 'flicker-short-term', label: 'short-term flicker Pst' },
         { value: 'flicker-long-term', label: 'long-term flicker Plt' },
+        { value: 'trip-margin', label: 'time the relay leaves a start' },
+        { value: 'thermal-margin', label: 'permissible time less time to trip' },
       ],
     },
     {
