@@ -99,7 +99,9 @@ test('settings that no relay can have are refused with a sentence each', () => {
   })
   const sentences = checkProtection(document).map(({ message }) => message)
   expect(sentences).toHaveLength(5)
-  expect(sentences.join(' ')).toMatch(/cooling time constant.*current transformer.*factor k.*releases no start.*pick-up/)
+  expect(sentences.join(' ')).toMatch(
+    /cooling time constant.*current transformer.*factor k.*releases no start.*pick-up/,
+  )
   expect(checkProtection(example('one-motor'))).toEqual([])
   expect(motorProtection.safeParse({ elements: [] }).success).toBe(false)
 })
