@@ -1,11 +1,15 @@
 /** Rises whenever a number of the engine moves, so that stored results say what computed them. */
-export const ENGINE_VERSION = '1.2.0'
+export const ENGINE_VERSION = '1.3.0'
 
 /**
  * What changed in the numbers and why, newest first.
  * @public
  */
 export const ENGINE_LOG: readonly { version: string; change: string }[] = [
+  {
+    version: '1.3.0',
+    change: 'Limits on flicker and with an envelope in time come from the worst of the circuits that meet a plate.',
+  },
   {
     version: '1.2.0',
     change:

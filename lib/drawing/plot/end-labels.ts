@@ -17,7 +17,7 @@ interface EndLabel {
 
 const ofSeries = ({ spec, parts }: DrawnSeries): readonly EndLabel[] => {
   const from = parts.at(-1)?.at(-1)
-  return from ? [{ name: spec.name, from, ink: seriesStyle(spec.style).ink, weight: 'semibold' }] : []
+  return from && !spec.unnamed ? [{ name: spec.name, from, ink: seriesStyle(spec.style).ink, weight: 'semibold' }] : []
 }
 
 /** Names at the ends of the lines, moved apart where they would touch; each is tied to its line by a thin leader. */

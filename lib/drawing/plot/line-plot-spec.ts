@@ -6,6 +6,8 @@ export interface AxisSpec {
   domain: readonly [number, number]
   /** About how many ticks (default 6). */
   ticks?: number
+  /** Logarithmic, with the numbers 1, 2 and 5 of each decade; the domain lies above zero. */
+  log?: true
 }
 
 export interface SeriesSpec extends Curve {
@@ -13,6 +15,8 @@ export interface SeriesSpec extends Curve {
   name: string
   /** Which of the six styles, counted from 0. */
   style: number
+  /** Named by a marker instead of at its end. */
+  unnamed?: true
 }
 
 /** A level that must not be crossed, over one or several stretches of x. */

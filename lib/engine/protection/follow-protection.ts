@@ -116,8 +116,10 @@ function inhibition(
   element: Extract<RelayElement, { kind: 'thermal-image' }>,
   heat: number,
 ): { inhibitedFor?: Second } {
-  if (element.inhibit === null || heat <= element.inhibit) return {}
-  return { inhibitedFor: restBefore(element, heat, 1 - element.inhibit) ?? second(0) }
+  // Without a level of its own it still releases nothing that has tripped.
+  const level = element.inhibit ?? 1
+  if (heat < level) return {}
+  return { inhibitedFor: restBefore(element, heat, 1 - level) ?? second(0) }
 }
 
 /**
