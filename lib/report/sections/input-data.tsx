@@ -14,6 +14,7 @@ import {
   supplyFields,
   transformerFields,
 } from '../values/network-fields'
+import { protectionFields } from '../values/protection-fields'
 import { noRecords, recordRows, recordSheets } from './record-tables'
 import type { Section } from './section'
 
@@ -89,7 +90,7 @@ export const inputData: Section = (context) => {
       recordRows(context, capacitorFields(fields, document), plant.capacitors),
     ]),
     ...part('motors', plant.motors.length > 0, () =>
-      recordSheets(context, motorFields(fields, document), plant.motors),
+      recordSheets(context, [...motorFields(fields, document), ...protectionFields(words)], plant.motors),
     ),
     ...part('circuits', plant.motors.length > 0, () => recordSheets(context, circuitFields(fields), plant.motors)),
     ...part('drivenLoads', plant.drivenLoads.length > 0, () => drivenLoads(context)),

@@ -11,7 +11,7 @@ export const method: Section = (context) => {
   return [
     chapter(context, 'method', say.title),
     ...paragraph(paper, say.intro, { width }),
-    ...say.parts.flatMap(({ id, title, content }) => [
+    ...[...say.parts, ...words.protection.method].flatMap(({ id, title, content }) => [
       subsection(context, id, title),
       ...content.flatMap((part) =>
         typeof part === 'string' ? paragraph(paper, part, { width }) : [formulaBlock(paper, part.tex, width)],

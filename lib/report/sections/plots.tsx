@@ -4,6 +4,7 @@ import { currentPlot } from '@/lib/drawing/current-plot'
 import type { Scene } from '@/lib/drawing/scene'
 import { mostSeries } from '@/lib/drawing/series-style'
 import { speedPlot } from '@/lib/drawing/speed-plot'
+import { timeCurrentPlot } from '@/lib/drawing/time-current-plot'
 import { torqueSpeedPlot } from '@/lib/drawing/torque-speed-plot'
 import { limitedBuses, voltagePlot } from '@/lib/drawing/voltage-plot'
 import { caseSentence } from '@/lib/study/words/case-sentence'
@@ -67,6 +68,10 @@ const plotsOf = (context: ReportContext, { record, result }: CaseRun): readonly 
     figure(context, voltagePlot(shown, { ...size, busIds: overview(shown) }), say.places),
     figure(context, speedPlot(shown, { ...size, height: 46 }), say.speed),
     figure(context, currentPlot(shown, { ...size, height: 46 }), say.current),
+    ...started.flatMap((motorId) => {
+      const scene = timeCurrentPlot(shown, { ...size, height: 90, motorId })
+      return scene === null ? [] : [figure(context, scene, words.protection.figure(motorTag(document, motorId)))]
+    }),
     ...started.map((motorId) =>
       figure(context, torqueSpeedPlot(shown, { ...size, motorId }), say.torque(motorTag(document, motorId))),
     ),

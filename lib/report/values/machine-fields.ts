@@ -186,6 +186,7 @@ export const drivenLoadFields = (
       },
   },
   { label: words.shaft, of: (one) => ofWords(one.shaft) },
+  { label: words.processStarts, of: (one) => count(one.startsPerHour) },
   ...record.curves.map(
     ({ name }, i): RecordField<DrivenLoadRecord> => ({
       label: words.curve(name),

@@ -6,6 +6,7 @@ import type { Wording } from '../wording/en'
 import { plantConditionFields, settingsFields, starterFields } from './condition-fields'
 import { circuitFields, drivenLoadFields, motorFields } from './machine-fields'
 import { busFields, capacitorFields, lineFields, loadFields, supplyFields, transformerFields } from './network-fields'
+import { protectionFields } from './protection-fields'
 import type { RecordField } from './record-field'
 
 /** A value that somebody stated, or should have stated, a source for. */
@@ -24,7 +25,8 @@ const ofRecord = <R>(record: R, tag: string, fields: readonly RecordField<R>[]):
   })
 
 /** Every value of the plant's records that has, or lacks, a source; in the order of the input data. */
-export const statedValues = (document: StudyDocument, { fields, records }: Wording): readonly StatedValue[] => {
+export const statedValues = (document: StudyDocument, words: Wording): readonly StatedValue[] => {
+  const { fields, records } = words
   const { plant, settings } = document
   const all = <R extends { tag: string }>(list: readonly R[], of: readonly RecordField<R>[]) =>
     list.flatMap((record) => ofRecord(record, record.tag, of))
@@ -36,7 +38,7 @@ export const statedValues = (document: StudyDocument, { fields, records }: Wordi
     ...all(plant.lines, lineFields(fields, document)),
     ...all(plant.loads, loadFields(fields, document)),
     ...all(plant.capacitors, capacitorFields(fields, document)),
-    ...all(plant.motors, [...motorFields(fields, document), ...circuitFields(fields)]),
+    ...all(plant.motors, [...motorFields(fields, document), ...circuitFields(fields), ...protectionFields(words)]),
     ...plant.drivenLoads.flatMap((load) => ofRecord(load, load.tag, drivenLoadFields(load, fields, document))),
     ...all(plant.starters, starterFields(fields)),
     ...all(plant.plantConditions, plantConditionFields(fields, document)),

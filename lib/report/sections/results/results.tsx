@@ -8,6 +8,7 @@ import { flickerTable } from './flicker-table'
 import { notices } from './notices'
 import { openRanges } from './open-ranges'
 import { peaksTable } from './peaks-table'
+import { heatTable, protectionTable } from './protection-tables'
 import { runningTable } from './running-table'
 import { energyTable, startTable } from './start-tables'
 import { supplyTable } from './supply-table'
@@ -31,6 +32,8 @@ export const results: Section = (context) => {
     subsection(context, 'results-running', say.running.title),
     ...runningTable(context, ['design']),
     ...peaksTable(context),
+    ...protectionTable(context),
+    ...heatTable(context),
     ...flickerTable(context),
     subsection(context, 'results-ranges', say.ranges.title),
     ...openRanges(context),

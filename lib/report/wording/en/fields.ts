@@ -130,6 +130,7 @@ export const fields = {
   },
   gear: 'Gear',
   shaft: 'Shared shaft',
+  processStarts: 'Starts an hour, process',
   dutyStarts: 'Duty, starts an hour',
   running: 'Motors running before the start',
   capacitors: 'Capacitors in service',

@@ -128,7 +128,7 @@ export const method = {
     items: [
       'Direct-current components and the first cycles of the current: peaks of current and torque are higher than the RMS figures.',
       'Transients on switching, on transfer and on reclosing; energising of transformers.',
-      'Unbalance, harmonics, flicker severity, frequency excursions.',
+      'Unbalance, harmonics, frequency excursions.',
       'Torsional vibration, water hammer and everything else on the process side.',
       'Warming of windings during the run: resistances are those of the records.',
     ],

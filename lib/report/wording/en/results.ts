@@ -126,7 +126,7 @@ export const results = {
   ranges: {
     title: 'What the records leave open',
     intro:
-      'A nameplate does not fix the run-up: circuits that meet the same plate differ. Each start with an estimated circuit was computed with every such circuit, and the verdicts are those of the worst; limits with an envelope in time are held against the estimated circuit alone. A start below 0.85 of rated voltage was computed once more with torque falling with the power 2.25 of the voltage instead of its square; that is printed here and is not in the verdicts.',
+      'A nameplate does not fix the run-up: circuits that meet the same plate differ. Each start with an estimated circuit was computed with every such circuit, and the verdicts are those of the worst, limits on flicker and with an envelope in time among them. A start below 0.85 of rated voltage was computed once more with torque falling with the power 2.25 of the voltage instead of its square; that is printed here and is not in the verdicts.',
     none: 'No started motor has an estimated circuit, and none starts below 0.85 of its rated voltage.',
     heads: {
       case: 'Case',
