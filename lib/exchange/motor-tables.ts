@@ -1,4 +1,5 @@
 import type { ChangeOverResult, MotorResult, RunningResult, StartResult } from '../engine/case-result'
+import type { ProtectionResult } from '../engine/protection/follow-protection'
 import type { StudyDocument } from '../study/document/study-document'
 import type { CaseSummary } from '../study/summary'
 import { changeOverTargetWords } from '../study/words/change-over-words'
@@ -9,6 +10,8 @@ import type { Cell, Table } from './csv-text'
 
 /** Columns as head and figure, so that neither can slip against the other. */
 type Columns<T> = readonly (readonly [head: string, figure: (of: T) => Cell])[]
+
+const percentOf = (value: number | undefined): number | null => (value === undefined ? null : 100 * value)
 
 const startColumns: Columns<StartResult> = [
   ['outcome', ({ outcome }) => startOutcomeWords[outcome.kind]],
@@ -38,8 +41,33 @@ const startColumns: Columns<StartResult> = [
   ['against the permissible time', ({ heatUsed }) => heatUsed.state],
   ['settled speed, r/min', ({ settledSpeed }) => settledSpeed && toRpm(settledSpeed)],
   ['time on the starting device, s', ({ device }) => device?.time ?? null],
+  ['heat before, % of permissible', ({ heatBalance }) => percentOf(heatBalance?.before)],
+  ['heat after, % of permissible', ({ heatBalance }) => percentOf(heatBalance?.after)],
+  ['starts in succession by heat, cold', ({ heatBalance }) => heatBalance?.inSuccession.cold ?? null],
+  ['starts in succession by heat, hot', ({ heatBalance }) => heatBalance?.inSuccession.hot ?? null],
+  ['standstill before the next, s', ({ heatBalance }) => heatBalance?.restBeforeNext ?? null],
+  ['starts an hour by heat', ({ heatBalance }) => heatBalance?.perHour ?? null],
   ['duty of the starting device', ({ device }) => device?.verdict.replaceAll('-', ' ') ?? null],
 ]
+
+const protectionColumns: Columns<ProtectionResult> = [
+  ['started without a trip, s', ({ startedAt }) => startedAt],
+  ['trip, s', ({ elements }) => least(elements.map(({ operatesAt }) => operatesAt))],
+  ['least time to a trip, s', ({ tripMargin }) => tripMargin],
+  ['rotor held: motor current, A', ({ lockedRotor }) => lockedRotor.current],
+  ['rotor held: trip, s', ({ lockedRotor }) => lockedRotor.trip],
+  ['rotor held: permissible time, s', ({ lockedRotor }) => lockedRotor.permissible],
+  ['rotor held: permissible less trip, s', ({ lockedRotor }) => lockedRotor.margin],
+  ['limit curve: least permissible less trip, s', ({ limitCurve }) => limitCurve?.margin ?? null],
+  ['limit curve: at, A', ({ limitCurve }) => limitCurve?.current ?? null],
+  ['not released for, s', ({ elements }) => least(elements.map(({ inhibitedFor }) => inhibitedFor ?? null))],
+]
+
+/** The least of the figures that are there; null where none is. */
+const least = (values: readonly (number | null)[]): number | null => {
+  const known = values.filter((value) => value !== null)
+  return known.length === 0 ? null : Math.min(...known)
+}
 
 const runningColumns: Columns<RunningResult> = [
   ['outcome', ({ outcome }) => outcome.kind.replaceAll('-', ' ')],
@@ -95,6 +123,17 @@ export const startTable = (document: StudyDocument, cases: readonly CaseSummary[
     startColumns,
     document,
     present(cases, ({ start, earlierAttempts }) => [...(earlierAttempts ?? []), ...(start ? [start] : [])]),
+  )
+
+/** How the relay of each feeder takes every start that it has. */
+export const protectionTable = (document: StudyDocument, cases: readonly CaseSummary[]): Table =>
+  table(
+    'protection',
+    protectionColumns,
+    document,
+    present(cases, ({ start, earlierAttempts }) =>
+      [...(earlierAttempts ?? []), ...(start ? [start] : [])].flatMap(({ protection }) => protection ?? []),
+    ),
   )
 
 /** Every machine that was running before a start. */

@@ -4,7 +4,7 @@ import type { StudySummary } from '../study/summary'
 import { caseOutcomeSentence } from '../study/words/outcome-words'
 import { busTag, caseTag } from '../study/words/tags'
 import { csvText, type Table } from './csv-text'
-import { changeOverTable, runningTable, startTable } from './motor-tables'
+import { changeOverTable, protectionTable, runningTable, startTable } from './motor-tables'
 import { placeTable } from './place-table'
 import { seriesTable } from './series-table'
 import { verdictTable } from './verdict-table'
@@ -39,7 +39,7 @@ const file = (table: Table, { byteOrderMark = false }: CsvOptions): CsvFile => (
   text: csvText(table, byteOrderMark),
 })
 
-/** The results of a study as tables: cases, voltages, starts, running machines, change-overs, limits. Tables without a row are left out. */
+/** The results of a study as tables: cases, voltages, starts, protection, running machines, change-overs, limits. Tables without a row are left out. */
 export const resultsCsv = (
   document: StudyDocument,
   results: StudySummary,
@@ -49,6 +49,7 @@ export const resultsCsv = (
     caseTable(document, results),
     placeTable(document, results.cases),
     startTable(document, results.cases),
+    protectionTable(document, results.cases),
     runningTable(document, results.cases),
     changeOverTable(document, results.cases),
     verdictTable(document, results.verdicts),

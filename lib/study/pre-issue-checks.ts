@@ -158,6 +158,18 @@ const noDuty: Finder = (document) =>
       : [],
   )
 
+const noRelay: Finder = (document) => {
+  const schedules = new Set(designOf(document).map(({ schedule }) => schedule))
+  const started = new Set(
+    document.schedules.filter(({ id }) => schedules.has(id)).flatMap(({ starts }) => starts.map(({ motor }) => motor)),
+  )
+  return document.plant.motors.flatMap(({ id, tag, protection }, i) =>
+    started.has(id) && protection === null
+      ? [issue(['plant', 'motors', i, 'protection'], `Motor ${tag}: no relay is compared with its start.`)]
+      : [],
+  )
+}
+
 const noProcessState: Finder = (document) =>
   designOf(document).flatMap(({ tag, loadCondition }) => {
     const curves = document.plant.loadConditions.find(({ id }) => id === loadCondition)?.curves ?? []
@@ -182,6 +194,7 @@ const questions: readonly [id: string, sentence: string, find: Finder][] = [
   ['tolerance', 'The locked-rotor current is also computed with its tolerance', noTolerance],
   ['bypass', 'A start with the starter failed or bypassed is computed', noBypass],
   ['duty', 'The duty of every starting device in use is stated', noDuty],
+  ['relay', 'The relay of every started motor is compared with its start', noRelay],
   ['process', 'The process state after the start is given', noProcessState],
 ]
 

@@ -3,6 +3,7 @@ import { caseSentence } from '@/lib/study/words/case-sentence'
 import { Notice } from '@/lib/ui/notice'
 import { CasePlots } from './case-plots'
 import { FlickerTable } from './flicker-table'
+import { HeatTable, ProtectionTable } from './protection-table'
 import { canBeDrawn, caseResult, type Results } from './results'
 import { CaseSentences, RunCounters } from './run-notes'
 import { ChangeOverTable, RunningTable, SupplyTable } from './running-table'
@@ -47,6 +48,8 @@ export function CaseDetail({ results, caseId, series }: CaseDetailProps) {
             <Notice>There are no curves of this case to draw.</Notice>
           )}
           <StartTable document={document} result={result} />
+          <ProtectionTable document={document} result={result} />
+          <HeatTable results={results} result={result} />
           <ChangeOverTable document={document} result={result} />
           <RunningTable document={document} result={result} />
           <VoltageTable document={document} places={result.places} />

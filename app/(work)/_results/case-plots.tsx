@@ -1,6 +1,7 @@
 import type { CaseFigure } from '@/lib/drawing/case-figure'
 import { currentPlot } from '@/lib/drawing/current-plot'
 import { speedPlot } from '@/lib/drawing/speed-plot'
+import { timeCurrentPlot } from '@/lib/drawing/time-current-plot'
 import { torqueSpeedPlot } from '@/lib/drawing/torque-speed-plot'
 import { voltagePlot } from '@/lib/drawing/voltage-plot'
 import { busTag, motorTag } from '@/lib/study/words/tags'
@@ -75,6 +76,18 @@ function TorqueFigure({ figure, motorId }: { figure: CaseFigure; motorId: string
   return <Figure scene={torqueSpeedPlot(figure, { ...size, motorId })} table={sampledTable(axis, curves)} />
 }
 
+/** The start against relay and thermal limit, logarithmic in both; nothing where no relay is stated. */
+function TimeCurrentFigure({ figure, motorId }: { figure: CaseFigure; motorId: string }) {
+  const scene = timeCurrentPlot(figure, { ...size, height: 95, motorId })
+  if (scene === null) return null
+  const series = figure.result.series.motors[motorId]
+  const curves = [
+    { head: 'Line current, A', values: series?.lineCurrent ?? [], decimals: 1 },
+    { head: 'Motor current, A', values: series?.motorCurrent ?? [], decimals: 1 },
+  ]
+  return <Figure scene={scene} table={sampledTable(timeAxis(figure), curves)} />
+}
+
 /** All figures of a case. */
 export function CasePlots({ figure }: { figure: CaseFigure }) {
   return (
@@ -88,6 +101,9 @@ export function CasePlots({ figure }: { figure: CaseFigure }) {
           <CurrentFigure figure={figure} />
         </>
       ) : null}
+      {startedIds(figure).map((motorId) => (
+        <TimeCurrentFigure key={`${motorId} relay`} figure={figure} motorId={motorId} />
+      ))}
       {startedIds(figure).map((motorId) => (
         <TorqueFigure key={motorId} figure={figure} motorId={motorId} />
       ))}

@@ -145,6 +145,12 @@ export const drivenLoad: KindDescription = {
       hint: 'Loads with the same name here are turned by their motors together.',
     },
     {
+      kind: 'decimal',
+      name: 'startsPerHour',
+      label: 'Starts an hour that the process allows',
+      optional: true,
+    },
+    {
       kind: 'list',
       name: 'curves',
       label: 'Load curves',

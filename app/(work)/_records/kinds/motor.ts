@@ -1,6 +1,7 @@
 import { column, type KindDescription } from '../kind-description'
 import { busField, noteField, tagField } from './fields-for-all'
 import { circuitField, interpolationField, saturationField, torquePointsField } from './motor-circuit'
+import { protectionField, thermalFields } from './protection'
 
 export const motor: KindDescription = {
   kind: 'motor',
@@ -92,9 +93,11 @@ export const motor: KindDescription = {
       optional: true,
       hint: 'At rated voltage.',
     },
+    ...thermalFields,
     { kind: 'whole', name: 'startsCold', label: 'Starts in succession, cold', optional: true },
     { kind: 'whole', name: 'startsHot', label: 'Starts in succession, hot', optional: true },
     { kind: 'whole', name: 'startsPerHour', label: 'Starts an hour at most', optional: true },
+    protectionField,
     noteField,
   ],
   columns: [
