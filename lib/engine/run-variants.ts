@@ -1,10 +1,10 @@
 import { synchronousSpeed } from '../units/speed'
 import { type CaseInput, isTabulated, type MachineModel } from './case-input'
 import type { CaseResult, CaseVariant } from './case-result'
-import { cutsIn, hasResidualTransient } from './criteria/only-transient'
 import { appliesTo } from './criteria/applies'
 import type { EnvelopePoint } from './criteria/envelope'
 import { figures } from './criteria/judge'
+import { cutsIn, hasResidualTransient } from './criteria/only-transient'
 import type { RuleInput } from './criteria/rule'
 import { directStartPeaks } from './direct-start-peaks'
 import { chosenModel } from './dynamic/chosen-model'
@@ -78,7 +78,8 @@ const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput 
 /** A case by the model that it asks for, beside it what the quasi-static model gives; where the model does not fit, that alone. */
 function runByModel(input: CaseInput): { result: CaseResult; steady: CaseResult | null } {
   const model = chosenModel(input)
-  if (model.kind === 'third-order') return { result: runProtected(input), steady: runProtected({ ...input, model: quasiStatic }) }
+  if (model.kind === 'third-order')
+    return { result: runProtected(input), steady: runProtected({ ...input, model: quasiStatic }) }
   const steady = runProtected(input)
   if (model.kind === 'quasi-static') return { result: steady, steady: null }
   const found = fifthOrderCase(input, steady, model.switchingAngle)
@@ -129,7 +130,12 @@ export function runWithVariants(input: CaseInput, rules: readonly RuleInput[] = 
       ? []
       : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runProtected({ ...low, model: quasiStatic })) }]),
     ...(result.model === 'quasi-static' && hasResidualTransient(input)
-      ? [{ kind: 'third-order' as const, result: withoutCurves(runProtected({ ...input, model: { kind: 'third-order' } })) }]
+      ? [
+          {
+            kind: 'third-order' as const,
+            result: withoutCurves(runProtected({ ...input, model: { kind: 'third-order' } })),
+          },
+        ]
       : []),
     ...(steady === null ? [] : [{ kind: 'quasi-static' as const, result: withoutCurves(steady) }]),
   ]
