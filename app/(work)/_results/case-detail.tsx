@@ -8,6 +8,7 @@ import { canBeDrawn, caseResult, type Results } from './results'
 import { CaseSentences, RunCounters } from './run-notes'
 import { ChangeOverTable, RunningTable, SupplyTable } from './running-table'
 import { StartTable } from './start-table'
+import { TransientTable } from './transient-table'
 import { VoltageTable } from './voltage-table'
 
 interface CaseDetailProps {
@@ -47,6 +48,7 @@ export function CaseDetail({ results, caseId, series }: CaseDetailProps) {
           ) : (
             <Notice>There are no curves of this case to draw.</Notice>
           )}
+          <TransientTable document={document} result={result} />
           <StartTable document={document} result={result} />
           <ProtectionTable document={document} result={result} />
           <HeatTable results={results} result={result} />

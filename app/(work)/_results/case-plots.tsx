@@ -3,6 +3,7 @@ import { currentPlot } from '@/lib/drawing/current-plot'
 import { speedPlot } from '@/lib/drawing/speed-plot'
 import { timeCurrentPlot } from '@/lib/drawing/time-current-plot'
 import { torqueSpeedPlot } from '@/lib/drawing/torque-speed-plot'
+import { transientPlots } from '@/lib/drawing/transient-plots'
 import { voltagePlot } from '@/lib/drawing/voltage-plot'
 import { busTag, motorTag } from '@/lib/study/words/tags'
 import { radianPerSecond } from '@/lib/units/si'
@@ -88,6 +89,27 @@ function TimeCurrentFigure({ figure, motorId }: { figure: CaseFigure; motorId: s
   return <Figure scene={scene} table={sampledTable(timeAxis(figure), curves)} />
 }
 
+/** First periods and envelopes of a start by the fifth-order model. */
+function TransientFigures({ figure }: { figure: CaseFigure }) {
+  const { transient } = figure.result.series
+  if (!transient) return null
+  const { time, current, peak, torque, torqueLow, torqueHigh, opening } = transient
+  const axis = (values: readonly number[]) => ({ head: 'Time from the first switching-on, s', values, decimals: 3 })
+  const ampere = (head: string, values: readonly number[]) => ({ head: `${head}, A`, values, decimals: 1 })
+  const kilo = (head: string, values: readonly number[]) => ({
+    head: `${head}, kN·m`,
+    values: values.map((value) => value / 1000),
+    decimals: 3,
+  })
+  const tables = [
+    sampledTable(axis(opening.time), [ampere('Current of phase a', opening.current)]),
+    sampledTable(axis(opening.time), [kilo('Torque', opening.torque)]),
+    sampledTable(axis(time), [ampere('RMS over half a period', current), ampere('Peak', peak)]),
+    sampledTable(axis(time), [kilo('Mean', torque), kilo('Least', torqueLow), kilo('Greatest', torqueHigh)]),
+  ]
+  return transientPlots(figure, size).map((scene, i) => <Figure key={scene.title} scene={scene} table={tables[i]!} />)
+}
+
 /** All figures of a case. */
 export function CasePlots({ figure }: { figure: CaseFigure }) {
   return (
@@ -107,6 +129,7 @@ export function CasePlots({ figure }: { figure: CaseFigure }) {
       {startedIds(figure).map((motorId) => (
         <TorqueFigure key={motorId} figure={figure} motorId={motorId} />
       ))}
+      <TransientFigures figure={figure} />
     </div>
   )
 }

@@ -1,5 +1,6 @@
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import type { CaseSummary } from '@/lib/study/summary'
+import { modelSentence, modelWords } from '@/lib/study/words/model-words'
 import { noticeSentence } from '@/lib/study/words/notice-words'
 import { caseOutcomeSentence, runningOutcomeSentence, startOutcomeSentence } from '@/lib/study/words/outcome-words'
 import { busTag, motorTag } from '@/lib/study/words/tags'
@@ -22,6 +23,7 @@ export function CaseSentences({ document, result }: { document: StudyDocument; r
           {sentence}
         </p>
       ))}
+      {result.model === 'quasi-static' ? null : <p className="m-0 text-soft">{modelSentence(result)}</p>}
       {notices.length > 0 ? (
         <ul className="m-0 mt-1 list-disc pl-5 text-close">
           {notices.map((notice) => (
@@ -38,9 +40,9 @@ export function RunCounters({ result, engineVersion }: { result: CaseSummary; en
   const { steps, rejected, evaluations, networkIterations, largestMismatch, largestErrorRatio } = result.counters
   return (
     <p className="m-0 text-label text-soft">
-      Quasi-static run of engine {engineVersion}: {steps} steps, {rejected} rejected, {evaluations} evaluations,{' '}
-      {networkIterations} network iterations; largest current mismatch {largestMismatch.toExponential(1)} of the largest
-      bus current, largest local error {largestErrorRatio.toFixed(2)} of the tolerance.
+      Run of engine {engineVersion}, {modelWords[result.model]} model: {steps} steps, {rejected} rejected, {evaluations}{' '}
+      evaluations, {networkIterations} network iterations; largest current mismatch {largestMismatch.toExponential(1)}{' '}
+      of the largest bus current, largest local error {largestErrorRatio.toFixed(2)} of the tolerance.
     </p>
   )
 }

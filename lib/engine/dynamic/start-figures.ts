@@ -10,10 +10,10 @@ import {
   volt,
 } from '../../units/si'
 import type { CaseInput, MotorInput } from '../case-input'
-import type { MotorState, StartOutcome, StartResult } from '../case-result'
+import type { StartOutcome, StartResult } from '../case-result'
 import type { DirectStartPeaks } from '../direct-start-peaks'
 import { loadTorqueAt } from '../driven/load-segments'
-import { motorState, placeOf } from '../runup/observation'
+import { placeOf } from '../runup/observation'
 import { heatUsed } from '../runup/results'
 import { type SampleStore, sampleAt } from '../runup/sampler'
 import type { System } from '../runup/system'
@@ -69,7 +69,10 @@ export function startResult(parts: {
     outcome,
     timeTo95: to95 === null || to95 === undefined ? null : second(to95),
     timeToCriterion: started ? second(toCriterion) : null,
-    standstill: { ...firstState(system, samples, motor, at), speed: radianPerSecond(from) },
+    standstill: {
+      ...steady.standstill,
+      motorVoltage: volt(firstVoltage(samples, placeOf(system, motor, 'motorVoltage'), at)),
+    },
     peakLineCurrent: current,
     peakMotorCurrent: current,
     leastAccelerating:
@@ -91,10 +94,10 @@ export function startResult(parts: {
   }
 }
 
-/** The first half period after switching on. */
-function firstState(system: System, samples: SampleStore, motor: number, at: number): MotorState {
+/** RMS voltage over the first half period after switching on. */
+function firstVoltage(samples: SampleStore, place: number, at: number): number {
   const index = samples.time.subarray(0, samples.count).findIndex((t) => t > at)
-  return motorState(system, sampleAt(samples, index), motor)
+  return sampleAt(samples, index)[place]!
 }
 
 /** How a start ended that did not reach the criterion. */

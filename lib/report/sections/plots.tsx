@@ -6,6 +6,7 @@ import { mostSeries } from '@/lib/drawing/series-style'
 import { speedPlot } from '@/lib/drawing/speed-plot'
 import { timeCurrentPlot } from '@/lib/drawing/time-current-plot'
 import { torqueSpeedPlot } from '@/lib/drawing/torque-speed-plot'
+import { transientPlots } from '@/lib/drawing/transient-plots'
 import { limitedBuses, voltagePlot } from '@/lib/drawing/voltage-plot'
 import { caseSentence } from '@/lib/study/words/case-sentence'
 import { caseOutcomeSentence } from '@/lib/study/words/outcome-words'
@@ -75,6 +76,7 @@ const plotsOf = (context: ReportContext, { record, result }: CaseRun): readonly 
     ...started.map((motorId) =>
       figure(context, torqueSpeedPlot(shown, { ...size, motorId }), say.torque(motorTag(document, motorId))),
     ),
+    ...transientPlots(shown, { ...size, height: 46 }).map((scene, i) => figure(context, scene, say.transient[i] ?? '')),
   ]
 }
 

@@ -13,6 +13,7 @@ const count = (value: number | null): FieldValue | null => (value === null ? nul
 
 export const motorFields = (words: Words, document: StudyDocument): readonly RecordField<MotorRecord>[] => [
   { label: words.bus, own: true, of: (one) => ofWords(busTag(document, one.bus)) },
+  { label: words.role, of: (one) => ofWords(one.role === 'generator' ? words.values.generator : '') },
   { label: words.maker, of: (one) => ofWords(one.maker) },
   { label: words.ratedPower, of: (one) => ofEntered(one.ratedPower) },
   { label: words.ratedVoltage, of: (one) => ofEntered(one.ratedVoltage) },

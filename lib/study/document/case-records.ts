@@ -59,6 +59,18 @@ export const caseRecord = z.strictObject({
   schedule: recordId,
   loadCondition: recordId,
   changes: z.array(caseChange).max(20).default([]),
+  model: z
+    .enum(['quasi-static', 'third-order', 'fifth-order'])
+    .default('quasi-static')
+    .describe(
+      'Model of the machines: steady circuits at every slip; rotor fluxes of every machine (third order); or the one directly started machine with its stator too, behind the network as resistance and inductance (fifth order). A machine switched on near synchronous speed is of fifth order in any case.',
+    ),
+  switchingAngle: entered('number')
+    .nullable()
+    .default(null)
+    .describe(
+      'Angle of the voltage of phase a at switching on, in degrees, for the fifth-order model; null: the worst.',
+    ),
   reason: z.string().max(500).default('').describe('Why the case is there; required in words for a sensitivity.'),
   role: z
     .enum(['design', 'sensitivity', 'comparison'])

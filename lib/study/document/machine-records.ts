@@ -8,6 +8,12 @@ export const motorRecord = z.strictObject({
   id: recordId,
   tag,
   bus: recordId,
+  role: z
+    .enum(['motor', 'generator'])
+    .default('motor')
+    .describe(
+      'A generator is an induction machine that its driven load drives: an active curve with torques below zero, switched in near synchronous speed.',
+    ),
   maker: z.string().max(120).default(''),
   ratedPower: entered('active-power').describe('Power at the shaft.'),
   ratedVoltage: entered('voltage'),

@@ -5,6 +5,7 @@ import type { StudyDocument } from '../document/study-document'
 import { curveOf, type RecordIndex } from '../references/record-index'
 import { lineInput, transformerInput } from './branch-inputs'
 import { factorOn } from './case-changes'
+import { caseModelInput } from './case-model-input'
 import { scaleAdmittance } from './circuit-input'
 import { loadCurveInput } from './load-curve-input'
 import { motorInput } from './motor-input'
@@ -107,6 +108,7 @@ export const caseInputOf = (
       }),
     ),
     ...(disturbance && { disturbance }),
+    ...caseModelInput(record),
     settings: {
       speedCriterion: perUnit(settings.speedCriterion.si),
       timeLimit: second(settings.timeLimit.si),

@@ -2,6 +2,7 @@ import type { CaseRecord } from '../document/case-records'
 import type { StudyDocument } from '../document/study-document'
 import { changePhrase } from './change-phrase'
 import { listed, listedTags } from './list-words'
+import { modelWords } from './model-words'
 import { starterPhrase } from './starter-phrase'
 import { motorTag, supplyTag } from './tags'
 
@@ -11,18 +12,23 @@ const unique = (words: readonly string[]): string[] => [...new Set(words)]
 const starts = (record: CaseRecord, document: StudyDocument): string => {
   const schedule = document.schedules.find(({ id }) => id === record.schedule)
   const groups = new Map<string, string[]>()
-  for (const { motor, starter, at, after, attempts } of schedule?.starts ?? []) {
+  for (const { motor, starter, at, after, attempts, initialSpeed } of schedule?.starts ?? []) {
     const method = document.plant.starters.find(({ id }) => id === starter)
     const fixed = at.si === 0 ? '' : `, ${at.text} later`
     const waiting = after && `, after ${motorTag(document, after.motor)} and at least ${after.interval.text} later`
     const again =
       attempts.length === 0 ? '' : `, with ${attempts.length} earlier ${attempts.length === 1 ? 'attempt' : 'attempts'}`
-    const when = (waiting ?? fixed) + again
-    const key = `${method ? starterPhrase(method) : starter}${when}`
+    const turning = initialSpeed ? `, turning at ${initialSpeed.text}` : ''
+    const generator = document.plant.motors.find(({ id }) => id === motor)?.role === 'generator'
+    const when = turning + (waiting ?? fixed) + again
+    const key = `${generator ? 'switched in' : 'started'} | ${method ? starterPhrase(method) : starter}${when}`
     groups.set(key, [...(groups.get(key) ?? []), motorTag(document, motor)])
   }
   return listed(
-    [...groups].map(([how, tags]) => `${listedTags(tags)} started ${tags.length > 1 ? 'together ' : ''}${how}`),
+    [...groups].map(([key, tags]) => {
+      const [what, how] = key.split(' | ')
+      return `${listedTags(tags)} ${what} ${tags.length > 1 ? 'together ' : ''}${how}`
+    }),
   )
 }
 
@@ -68,6 +74,7 @@ export const caseSentence = (record: CaseRecord, document: StudyDocument): strin
   return [
     `${listed(happening)} on the ${supplyTag(document, record.supply)} supply ${running(record, document)}`,
     ...(load === '' ? [] : [load]),
+    ...(record.model === 'quasi-static' ? [] : [`${modelWords[record.model]} model`]),
     ...(changes.length === 0 ? [] : [listed(changes)]),
   ].join('; ')
 }

@@ -72,6 +72,26 @@ export const studyCase: KindDescription = {
     { kind: 'reference', name: 'schedule', label: 'Start schedule', to: 'schedule' },
     { kind: 'reference', name: 'loadCondition', label: 'Load condition', to: 'load-condition' },
     {
+      kind: 'choice',
+      name: 'model',
+      label: 'Model of the machines',
+      initial: 'quasi-static',
+      hint: 'Fifth order takes one direct start; a machine switched on near synchronous speed is computed so in any case.',
+      options: [
+        { value: 'quasi-static', label: 'quasi-static' },
+        { value: 'third-order', label: 'third order: rotor fluxes of every machine' },
+        { value: 'fifth-order', label: 'fifth order: the started machine with its stator' },
+      ],
+    },
+    {
+      kind: 'quantity',
+      name: 'switchingAngle',
+      label: 'Switching angle, degrees',
+      quantity: 'number',
+      optional: true,
+      hint: 'Of the voltage of phase a, for the fifth order; empty for the worst.',
+    },
+    {
       kind: 'list',
       name: 'changes',
       label: 'Departures from the records',
@@ -93,6 +113,7 @@ export const studyCase: KindDescription = {
     column('Plant condition', 'plantCondition'),
     column('Start schedule', 'schedule'),
     column('Load condition', 'loadCondition'),
+    column('Model', 'model'),
     column('Departures', 'changes'),
   ],
 }

@@ -12,6 +12,17 @@ export const motor: KindDescription = {
   fields: [
     tagField(),
     busField('bus', 'At bus', 'The motor’s own terminals.'),
+    {
+      kind: 'choice',
+      name: 'role',
+      label: 'Works as',
+      initial: 'motor',
+      hint: 'A generator is driven by its load: an active curve with torques below zero.',
+      options: [
+        { value: 'motor', label: 'motor' },
+        { value: 'generator', label: 'induction generator' },
+      ],
+    },
     { kind: 'text', name: 'maker', label: 'Maker and sheet', optional: true },
     { kind: 'quantity', name: 'ratedPower', label: 'Rated power', quantity: 'active-power', hint: 'At the shaft.' },
     { kind: 'quantity', name: 'ratedVoltage', label: 'Rated voltage', quantity: 'voltage' },

@@ -35,7 +35,7 @@ export const schedule: KindDescription = {
           label: 'Speed before the start',
           quantity: 'speed',
           optional: true,
-          hint: 'Negative where the load turns the shaft backwards.',
+          hint: 'Negative where the load turns the shaft backwards; near synchronous for a generator that is switched in.',
         },
         {
           kind: 'list',

@@ -5,6 +5,7 @@ import { computedRuns, runsOf } from '../../values/roles'
 import type { Section } from '../section'
 import { changeOverTable } from './change-over-table'
 import { flickerTable } from './flicker-table'
+import { modelsTable } from './models-table'
 import { notices } from './notices'
 import { openRanges } from './open-ranges'
 import { peaksTable } from './peaks-table'
@@ -31,6 +32,7 @@ export const results: Section = (context) => {
     ...design.map((run) => voltageTable(context, run)),
     subsection(context, 'results-running', say.running.title),
     ...runningTable(context, ['design']),
+    ...modelsTable(context),
     ...peaksTable(context),
     ...protectionTable(context),
     ...heatTable(context),

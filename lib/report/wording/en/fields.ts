@@ -46,6 +46,7 @@ export const fields = {
   mix: 'Z / I / P',
   floor: 'Floor',
   capacity: 'Rating',
+  role: 'Works as',
   maker: 'Maker',
   ratedPower: 'Rated power',
   poles: 'Poles',
@@ -140,6 +141,7 @@ export const fields = {
   shared: (tag: string) => tag,
   /** Values that are words rather than quantities. */
   values: {
+    generator: 'induction generator',
     none: 'none',
     silent: 'not declared',
     unknown: 'unknown',

@@ -10,7 +10,7 @@ const formula = (tex: string, spoken: string): FormulaWords => ({ tex, spoken })
 export const method = {
   title: 'Method',
   intro:
-    'Each case is computed quasi-statically: the network is solved in balanced RMS values at every instant of the run-up, and the speeds of all machines are integrated through these solutions. Nothing is taken from rated voltage that depends on the actual one.',
+    'Each case is computed quasi-statically unless it says otherwise: the network is solved in balanced RMS values at every instant of the run-up, and the speeds of all machines are integrated through these solutions. Nothing is taken from rated voltage that depends on the actual one.',
   parts: [
     {
       id: 'method-network',
@@ -97,6 +97,24 @@ export const method = {
       ],
     },
     {
+      id: 'method-transient',
+      title: 'Models with transients',
+      content: [
+        'A case may ask for machines of third or fifth order. The third order keeps the flux of each cage in every machine that has a circuit, with stator and network steady: the stator sees a voltage behind a transient impedance, and a machine that is cut off keeps its flux, which decays while it turns. It fits several machines and all starting devices but drives, soft starters and windings in part; these, and machines by curves or with exponents of saturation, stay steady circuits. While the supply is away each machine counts as open by itself, and the turn of the phases between star and delta is left out. At switching on the torque is still zero; the least accelerating torque is looked for once the swing of the fluxes is over, 0.2 s after a switching or half way up:',
+        formula(
+          String.raw`\underline{U} = \underline{Z}'\,\underline{I} + \mathrm{j}X_\mathrm{p}\sum_k \frac{\underline{\psi}_k}{X_k},\qquad \underline{Z}' = \underline{Z}_\mathrm{s} + \mathrm{j}X_\mathrm{p},\qquad \frac{\mathrm{d}\underline{\psi}_k}{\mathrm{d}t} = -\omega_\mathrm{b}\left(R_k\,\underline{I}_k + \mathrm{j}s\,\underline{\psi}_k\right)`,
+          'Stator voltage as a voltage behind a transient impedance; each flux changes with the resistive drop of its cage and with slip.',
+        ),
+        'The fifth order follows one directly started machine with its stator too, in the synchronous frame without saturation and core loss, behind resistance and inductance of the network. Its equivalent is taken at up to 33 speeds along the quasi-static run-up: the voltage at the open terminals, and the impedance between open and loaded terminals, loads by their voltage and running machines at the speeds that they have there. The voltage of every other bus follows from the current through the transfer impedance as resistance and inductance; capacitors count by their value at supply frequency.',
+        formula(
+          String.raw`\frac{\mathrm{d}\psi_{q\mathrm{s}}}{\mathrm{d}t} = \omega_\mathrm{b}\left(v_q - \psi_{d\mathrm{s}} - R\,i_{q\mathrm{s}}\right),\qquad \frac{\mathrm{d}\psi_{qk}}{\mathrm{d}t} = -\omega_\mathrm{b}\left(s\,\psi_{dk} + R_k\,i_{qk}\right)`,
+          'Derivatives of the stator flux and of the rotor fluxes in the q axis; the d axis is alike with the signs of the coupling turned.',
+        ),
+        'Its voltages are root mean squares over half a period of the supply, in the lowest of the phases, its currents in the highest; the highest voltage is that of the highest phase. Where no switching angle is stated every figure is that of the worst angle, which need not be the same for all. Figures at standstill are those of the locked rotor without direct component, but for the voltage. Limits are held against the half periods; the least accelerating torque is a mean over five periods. Core loss and the friction of a shaft below a thousandth of synchronous speed are the two simplifications of its own.',
+        'A machine switched on directly within 10 % of synchronous speed, as an induction generator is, is of fifth order in any case: steady circuits see only where it settles. Open transitions and a supply that comes back while motors hold more than a quarter of their voltage are run by the third order too, and limits on voltage take the worse of both. Where neither model fits, such a limit is not assessed. Energising of transformers is in none of them.',
+      ],
+    },
+    {
       id: 'method-results',
       title: 'What is taken from a run',
       content: [
@@ -126,8 +144,8 @@ export const method = {
     id: 'method-excluded',
     title: 'What the model does not cover',
     items: [
-      'Direct-current components and the first cycles of the current: peaks of current and torque are higher than the RMS figures.',
-      'Transients on switching, on transfer and on reclosing; energising of transformers.',
+      'Direct-current components and the first cycles of the current, outside the cases of fifth order and the table of peaks: there they are higher than the RMS figures.',
+      'Transients on switching, on transfer and on reclosing, outside the cases with transient models; energising of transformers in all.',
       'Unbalance, harmonics, frequency excursions.',
       'Torsional vibration, water hammer and everything else on the process side.',
       'Warming of windings during the run: resistances are those of the records.',

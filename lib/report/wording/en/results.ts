@@ -93,10 +93,16 @@ export const results = {
       outcome: 'Outcome',
     },
   },
+  models: {
+    title: 'Models beside each other',
+    intro:
+      'Cases that were not computed by the quasi-static model, with the figures that the two models give differently. All tables and limits of these cases hold the figures of their own model.',
+    heads: { figure: 'Figure', difference: 'Difference' },
+  },
   peaks: {
     title: 'Peaks of direct starts',
     intro:
-      'By the transient model: the fifth-order equations of the motor behind the Thevenin equivalent at its bus, switched on at standstill without flux. The current is that of the worst phase at the worst instant of switching, with its decaying DC part. All other figures of this report are by the quasi-static model.',
+      'By the transient model: the fifth-order equations of the motor behind the Thevenin equivalent at its bus, switched on at standstill without flux. The current is that of the worst phase at the worst instant of switching, with its decaying DC part, unless the case states its switching angle. All other figures are by the model of their case.',
     heads: {
       case: 'Case',
       motor: 'Motor',
@@ -161,6 +167,12 @@ export const results = {
     current: 'Currents.',
     torque: (motor: string) =>
       `Torque of ${motor} at its actual voltage, and of its load, against speed. Shaded: what is left to accelerate.`,
+    transient: [
+      'Current of phase a in the first periods, by the fifth-order model, and the RMS of half a period times √2.',
+      'Torque in the first periods, and its mean over half a period.',
+      'Current over the start: RMS over half a period in the highest phase, and the largest instantaneous value.',
+      'Torque over the start: mean over half a period. Shaded: between which values it swings.',
+    ],
     figure: (number: number) => `Figure ${number}`,
   },
   record: {
