@@ -1,9 +1,10 @@
 import { estimateCircuit } from '../engine/estimate/estimate-circuit'
 import type { Nameplate } from '../engine/estimate/nameplate'
 import { runCase } from '../engine/run-case'
+import { runWithVariants } from '../engine/run-variants'
 import type { StudyDocument } from '../study/document/study-document'
 import { runDocument } from '../study/run-document'
-import { ampere, hertz, newtonMetre, volt, watt } from '../units/si'
+import { ampere, hertz, kilogramSquareMetre, newtonMetre, volt, watt } from '../units/si'
 import { fromRpm } from '../units/speed'
 import { type Figure, figure } from './figure'
 import { plainRunUp } from './plain-run-up'
@@ -41,6 +42,20 @@ const runUp = (name: string, runningMotors: number): Figure[] => {
   ]
 }
 
+/** The speed case with an inertia that makes its run-up last ten seconds, and beside two running motors, by the models with transients. */
+const withTransients = (): Figure[] => {
+  const slow = speedCase()
+  const long = { ...slow, motors: slow.motors.map((motor) => ({ ...motor, inertia: kilogramSquareMetre(376) })) }
+  const fifth = { ...long, model: { kind: 'fifth-order' as const, switchingAngle: null } }
+  const third = { ...speedCase(2), model: { kind: 'third-order' as const } }
+  const [first] = runWithVariants(fifth).motors
+  return [
+    figure('fifth order beside quasi-static: run-up', first?.start?.timeToCriterion ?? Number.NaN, 's'),
+    figure('fifth order beside quasi-static: time', timeOf(() => runWithVariants(fifth), patience).microseconds, 'µs'),
+    figure('third order, three motors: time', timeOf(() => runCase(third), patience).microseconds, 'µs'),
+  ]
+}
+
 /** Run-ups of the speed case, the same written by hand, one estimate and a whole study. */
 export const benchEngine = (study: StudyDocument): Figure[] => {
   const alone = runUp('run-up, one motor', 0)
@@ -55,6 +70,7 @@ export const benchEngine = (study: StudyDocument): Figure[] => {
     figure('run-up, one motor: hand-written loop of 2000 fixed steps', plain, 'µs'),
     figure('run-up, one motor: engine over hand-written loop', (alone[0]?.value ?? Number.NaN) / plain, '1'),
     ...runUp('run-up, two more motors running', 2),
+    ...withTransients(),
     figure('estimate of a circuit from a nameplate', estimate, 'µs'),
     figure('demo study: time of all cases', whole, 'ms'),
     figure('demo study: cases', cases.length, '1'),

@@ -1,7 +1,7 @@
 import type { InductionCircuit } from '../case-input'
 import { deepBarLaw } from '../machines/deep-bar'
 import { type TransientMachine, transientMachine } from '../transient/machine-equations'
-import type { NetworkAlong } from './network-along'
+import { type NetworkAlong, partOfWay, rowBelow } from './network-along'
 
 /**
  * The starting machine behind the network as it is along the run-up, skin effect by its slip. Phase a's EMF is at its
@@ -23,9 +23,8 @@ export function machineAlong(
   const { speeds, emf, resistance, reactance } = along
   machine.follow = (speed) => {
     if (last > 0) {
-      const place = ((speed - speeds[0]!) / (speeds[last]! - speeds[0]!)) * last
-      const row = Math.max(0, Math.min(last - 1, Math.floor(place)))
-      const part = Math.max(0, Math.min(1, place - row))
+      const row = rowBelow(speeds, speed)
+      const part = partOfWay(speeds, row, speed)
       machine.voltage.q = Math.sqrt(2 / 3) * (emf[row]! + part * (emf[row + 1]! - emf[row]!))
       machine.resistance = circuit.stator.re + resistance[row]! + part * (resistance[row + 1]! - resistance[row]!)
       machine.leakage = circuit.stator.im + reactance[row]! + part * (reactance[row + 1]! - reactance[row]!)

@@ -126,7 +126,9 @@ export function networkAlong(
   const rows = moves && high > low ? most : 1
   const nodes = new Float64Array(2 * (plant.network.order + 1))
   const along = {
-    speeds: Float64Array.from({ length: rows }, (_, k) => (rows === 1 ? low : low + (k * (high - low)) / (rows - 1))),
+    speeds: Float64Array.from({ length: rows }, (_, k) =>
+      rows === 1 ? low : low + ((high - low) * (1 - Math.cos((k * Math.PI) / (rows - 1)))) / 2,
+    ),
     emf: new Float64Array(rows),
     resistance: new Float64Array(rows),
     reactance: new Float64Array(rows),
@@ -154,13 +156,27 @@ export function networkAlong(
   }
 }
 
+/**
+ * The row below a speed. Rows stand closer towards both ends, where running machines slow down within a few turns of the
+ * starting one, and where its current falls away.
+ */
+export function rowBelow(speeds: Float64Array, speed: number): number {
+  const last = speeds.length - 1
+  if (last === 0) return 0
+  const way = Math.max(0, Math.min(1, (speed - speeds[0]!) / (speeds[last]! - speeds[0]!)))
+  return Math.min(last - 1, Math.floor((Math.acos(1 - 2 * way) * last) / Math.PI))
+}
+
+/** Part of the way from a row to the next; 0 and 1 beyond the ends. */
+export function partOfWay(speeds: Float64Array, row: number, speed: number): number {
+  if (speeds.length === 1) return 0
+  return Math.max(0, Math.min(1, (speed - speeds[row]!) / (speeds[row + 1]! - speeds[row]!)))
+}
+
 /** Place of a speed among rows: the row below and the part of the way to the next. */
 export function placeAmong({ speeds }: NetworkAlong, speed: number): { row: number; part: number } {
-  const last = speeds.length - 1
-  if (last === 0) return { row: 0, part: 0 }
-  const place = ((speed - speeds[0]!) / (speeds[last]! - speeds[0]!)) * last
-  const row = Math.max(0, Math.min(last - 1, Math.floor(place)))
-  return { row, part: Math.max(0, Math.min(1, place - row)) }
+  const row = rowBelow(speeds, speed)
+  return { row, part: partOfWay(speeds, row, speed) }
 }
 
 /** A quantity of the rows at a place among them. */

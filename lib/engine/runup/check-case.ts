@@ -37,6 +37,8 @@ function checkBuses(input: CaseInput): Refusal | null {
   if (!positive(speedCriterion) || speedCriterion >= 1.2)
     return bad([], 'The speed criterion must lie between 0 and 1.2 of rated speed.')
   if (!positive(timeLimit)) return bad([], 'The time limit of a start must be above zero.')
+  if (input.model?.kind === 'fifth-order' && !Number.isFinite(input.model.switchingAngle ?? 0))
+    return bad([], 'The switching angle must be a number.')
   if (!positive(tolerance) || tolerance > 1e-2)
     return bad([], 'The tolerance of the integration must lie between 0 and 0.01.')
   return null

@@ -194,6 +194,46 @@ describe('a start by the fifth-order model', () => {
   })
 })
 
+describe('limits on a start by the fifth-order model', () => {
+  const input: CaseInput = {
+    ...simplePlant([simpleMotor('M', started({ kind: 'direct' }, squareLoad(300), 1))]),
+    model: { kind: 'fifth-order', switchingAngle: null },
+  }
+  const result = runWithVariants(input)
+  const [place] = result.places
+
+  it('are held against the lowest half period, deeper than the quasi-static dip', () => {
+    const verdict = judge(dip, input, result, { perDay: 1, perHour: 1 }, margins)!
+    expect(verdict.value).toBeCloseTo(1 - place!.deepest.voltage / place!.before, 12)
+    expect(verdict.value!).toBeGreaterThan(1 - steadyOf(result).places[0]!.deepest.voltage / place!.before)
+    expect(verdict.at! - 1).toBeCloseTo(Math.round((verdict.at! - 1) / 0.01) * 0.01, 9)
+  })
+
+  it('with steps in time follow the half periods', () => {
+    const stepped: RuleInput = {
+      ...dip,
+      limit: {
+        kind: 'envelope',
+        steps: [
+          { from: second(0), value: perUnit(0.2) },
+          { from: second(0.005), value: perUnit(0.01) },
+        ],
+      },
+    }
+    const verdict = judge(stepped, input, result, { perDay: 1, perHour: 1 }, margins)!
+    expect(verdict.word).toBe('fails')
+    expect(verdict.value).toBeCloseTo(1 - place!.deepest.voltage / place!.before, 3)
+  })
+
+  it('say the first voltage by the first half period', () => {
+    const { time, busVoltage } = result.series
+    const first = time.findIndex((t) => t > 1)
+    expect(time[first]).toBeCloseTo(1.01, 9)
+    expect(place!.first).toBeCloseTo(busVoltage.B![first]!, 9)
+    expect(startOf(result).standstill.motorVoltage).toBeCloseTo(place!.first, 9)
+  })
+})
+
 describe('an induction generator switched in near synchronous speed', () => {
   const generator = (changes: Partial<MotorInput> = {}) =>
     simplePlant([simpleMotor('G', driven(1200, synchronous, 0.5), changes)], 0.03)
