@@ -1,4 +1,4 @@
-import { perUnit, type Second, second } from '../units/si'
+import { perUnit, radianPerSecond, type Second, second } from '../units/si'
 import type { CaseInput, MotorInput } from './case-input'
 import type { CaseResult, MotorResult, StartResult } from './case-result'
 import { judgeProtection } from './judge-protection'
@@ -71,6 +71,29 @@ export function runProtected(input: CaseInput): CaseResult {
     run = { ...run, motors: run.motors.map((motor) => (motor.id === next.motorId ? withTrip(motor, next) : motor)) }
     result = runCase(run)
   }
+}
+
+/**
+ * Judges a run that is not made again: a relay that operates on its start ends it as far as the outcome goes, while
+ * curves and figures are those of the start without the relay.
+ */
+export function protectOnce(input: CaseInput, result: CaseResult): CaseResult {
+  const judged = judgeProtection(input, result)
+  const found = withHeat(input, withProtection(result, judged, []))
+  const { time, motors: curves } = result.series
+  const motors = found.motors.map((motor) =>
+    withStarts(motor, (start) => {
+      const ended = start.protection?.endedAt
+      if (!ended) return start
+      const sample = Math.max(
+        0,
+        time.findLastIndex((t) => t <= ended.run),
+      )
+      const speed = radianPerSecond(curves[motor.motorId]?.speed[sample] ?? 0)
+      return { ...start, outcome: { kind: 'tripped', cause: 'protection', at: ended.start, speed } }
+    }),
+  )
+  return { ...found, motors }
 }
 
 type Judged = ReadonlyMap<string, readonly ProtectionResult[]>

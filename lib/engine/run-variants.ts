@@ -11,7 +11,7 @@ import { chosenModel } from './dynamic/chosen-model'
 import { fifthOrderCase } from './dynamic/fifth-order-case'
 import { startFlicker } from './flicker/start-flicker'
 import { breakdownSlip } from './machines/breakdown-slip'
-import { runProtected } from './run-protected'
+import { protectOnce, runProtected } from './run-protected'
 
 /** Power of the voltage that torque follows in the low-voltage variant (upper half of the typical 2.1 to 2.3). */
 export const lowVoltageExponent = 2.25
@@ -86,7 +86,7 @@ function runByModel(input: CaseInput): { result: CaseResult; steady: CaseResult 
   const notices = steady.notices.concat(
     input.motors.flatMap((motor) => (cutsIn(motor, input) ? [{ kind: 'cuts-in' as const, motorId: motor.id }] : [])),
   )
-  if (found.ok) return { result: { ...found.result, notices }, steady }
+  if (found.ok) return { result: protectOnce(input, { ...found.result, notices }), steady }
   return {
     result: { ...steady, notices: [...notices, { kind: 'transient-model-unfit', cause: found.cause }] },
     steady: null,
@@ -115,6 +115,13 @@ function onSamePlate(input: CaseInput, rules: readonly RuleInput[]): CaseVariant
   return { kind: 'same-plate', result: withoutCurves(result), ...underEnvelopes(input, result, rules) }
 }
 
+/** A case that closes on residual voltages by the third-order model, with all that limits are held against. */
+function withFluxes(input: CaseInput, rules: readonly RuleInput[]): CaseVariant {
+  const moving: CaseInput = { ...input, model: { kind: 'third-order' } }
+  const result = withFlicker(moving, runProtected(moving))
+  return { kind: 'third-order', result: withoutCurves(result), ...underEnvelopes(moving, result, rules) }
+}
+
 /**
  * A case with the variants that its input and its own result call for.
  *
@@ -129,14 +136,7 @@ export function runWithVariants(input: CaseInput, rules: readonly RuleInput[] = 
     ...(low === null
       ? []
       : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runProtected({ ...low, model: quasiStatic })) }]),
-    ...(result.model === 'quasi-static' && hasResidualTransient(input)
-      ? [
-          {
-            kind: 'third-order' as const,
-            result: withoutCurves(runProtected({ ...input, model: { kind: 'third-order' } })),
-          },
-        ]
-      : []),
+    ...(result.model === 'quasi-static' && hasResidualTransient(input) ? [withFluxes(input, rules)] : []),
     ...(steady === null ? [] : [{ kind: 'quasi-static' as const, result: withoutCurves(steady) }]),
   ]
   return variants.length === 0 ? result : { ...result, variants }

@@ -7,6 +7,7 @@ import { inverseTime } from '@/lib/engine/protection/inverse-curve'
 import type { RelayElement } from '@/lib/engine/protection-input'
 import { runCase } from '@/lib/engine/run-case'
 import { runProtected } from '@/lib/engine/run-protected'
+import { runWithVariants } from '@/lib/engine/run-variants'
 import { ampere, newtonMetre, perUnit, second } from '@/lib/units/si'
 import { constantLoad, simpleMotor, simplePlant, squareLoad, started } from '../support/simple-plant'
 
@@ -237,5 +238,31 @@ describe('attempts with a memory of their heat', () => {
     expect(first.outcome).toMatchObject({ kind: 'tripped', cause: 'protection' })
     expect(last.switchedOnAt).toBeCloseTo(runUp + 31, 9)
     expect(last.outcome).toMatchObject({ kind: 'tripped', cause: 'protection' })
+  })
+})
+
+describe('a start under its relay by the fifth-order model', () => {
+  const fifth = (elements: readonly RelayElement[]) =>
+    runWithVariants({ ...plant(motor(elements)), model: { kind: 'fifth-order', switchingAngle: null } })
+
+  it('has the margin of its own current, which lasts longer and is higher at first', () => {
+    const result = fifth([element(1)])
+    const own = result.motors[0]!.start!
+    expect(result.model).toBe('fifth-order')
+    const steady = startOf(plant(motor([element(1)])))
+    expect(own.protection!.startedAt).toBeCloseTo(own.timeToCriterion!, 9)
+    expect(own.protection!.tripMargin!).toBeLessThan(steady.protection!.tripMargin!)
+  })
+
+  it('ends where the relay operates though the quasi-static start gets through', () => {
+    // Between the two run-ups: a multiplier at which the steady start has some hundredths of a second left.
+    const multipliers = Array.from({ length: 400 }, (_, k) => 1 - k / 400)
+    const last = multipliers.findLast((each) => startOf(plant(motor([element(each)]))).outcome.kind === 'started')!
+    const result = fifth([element(last)])
+    expect(result.motors[0]!.start!.outcome).toMatchObject({ kind: 'tripped', cause: 'protection' })
+  })
+
+  it('is left to the quasi-static model where that one is tripped already', () => {
+    expect(fifth([element(0.001)]).notices).toContainEqual({ kind: 'transient-model-unfit', cause: 'trip' })
   })
 })

@@ -27,10 +27,12 @@ export function judgeOverPlate(
 ): Verdict | null {
   const steady = judge(rule, input, result, starts, margins)
   const third = (result.variants ?? []).find(({ kind }) => kind === 'third-order')
-  const moving = third ? judge(rule, input, { ...third.result, series: result.series }, starts, margins) : null
+  const points = third?.envelopes?.find(({ ruleId }) => ruleId === rule.id)?.points
+  const held = third !== undefined && (rule.limit.kind !== 'envelope' || points !== undefined)
+  const moving = held ? judge(rule, input, { ...third.result, series: noCurves }, starts, margins, points) : null
   /** What only a transient model may judge has its word from the third-order run, or from a quasi-static figure that is worse. */
   const assessed = (verdict: Verdict): Verdict => {
-    if (verdict.reason !== 'transient-only' || moving === null || rule.limit.kind === 'envelope') return verdict
+    if (verdict.reason !== 'transient-only' || moving === null) return verdict
     if (moving.margin === null || verdict.margin === null || moving.margin <= verdict.margin) return moving
     return { ...verdict, word: wordFor(rule, verdict.margin, verdict.limit, margins), reason: null }
   }

@@ -2,7 +2,15 @@ import { type CaseInput, type CaseModel, isTabulated } from '../case-input'
 import { cutsIn } from '../criteria/only-transient'
 
 /** Why a case cannot be computed by the fifth-order model; the quasi-static result then stands alone. */
-export type UnfitCause = 'several-starts' | 'device' | 'machine' | 'network' | 'schedule' | 'shaft' | 'no-start'
+export type UnfitCause =
+  | 'several-starts'
+  | 'device'
+  | 'machine'
+  | 'network'
+  | 'schedule'
+  | 'shaft'
+  | 'no-start'
+  | 'trip'
 
 /** The model that a case asks for: where it says nothing, quasi-static, or fifth order for a machine that cuts in. */
 export const chosenModel = (input: CaseInput): CaseModel => {

@@ -34,6 +34,7 @@ export function fifthOrderCase(
   if (unfit !== null) return { ok: false, cause: unfit }
   const motor = input.motors.findIndex(({ duty }) => duty.kind === 'starting')
   const steadyStart = steady.motors.find(({ motorId }) => motorId === input.motors[motor]!.id)?.start
+  if (steadyStart?.outcome.kind === 'tripped') return { ok: false, cause: 'trip' }
   const plant = preparePlant(input)
   const before = plant.ok ? beforeStart(plant.value) : plant
   if (!before.ok || !steadyStart) return { ok: false, cause: 'no-start' }

@@ -13,6 +13,7 @@ const unfitCauses: Record<UnfitCause, string> = {
   schedule: 'a dip, repeated attempts or contactors are in the schedule',
   shaft: 'two motors turn one shaft',
   'no-start': 'no motor is switched on',
+  trip: 'the start is switched off before it is over',
 }
 
 /** What the calculation noticed in a case and a reader must know, in one sentence. */
