@@ -114,7 +114,7 @@ export interface StartResult {
   /** From this motor's own switching-on; null when not reached. */
   timeTo95: Second | null
   timeToCriterion: Second | null
-  /** By the fifth-order model its voltage is that of the first half period, all else the locked rotor without direct component. */
+  /** By models with transients its voltage is that of the first half period or instant, all else the steady locked rotor. */
   standstill: MotorState
   peakLineCurrent: { current: Ampere; at: Second }
   peakMotorCurrent: { current: Ampere; at: Second }

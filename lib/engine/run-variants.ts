@@ -4,7 +4,7 @@ import type { CaseResult, CaseVariant } from './case-result'
 import { appliesTo } from './criteria/applies'
 import type { EnvelopePoint } from './criteria/envelope'
 import { figures } from './criteria/judge'
-import { cutsIn, hasResidualTransient } from './criteria/only-transient'
+import { cutsIn, followsResidual } from './criteria/only-transient'
 import type { RuleInput } from './criteria/rule'
 import { directStartPeaks } from './direct-start-peaks'
 import { chosenModel } from './dynamic/chosen-model'
@@ -75,11 +75,24 @@ const lowVoltageTorque = (input: CaseInput, { notices }: CaseResult): CaseInput 
   return models.size > 0 ? withModels(input, models) : null
 }
 
+/** At its first instant a machine without flux has no torque: the locked rotor is that of the steady circuit, but for the voltage. */
+function withLockedRotor(result: CaseResult, steady: CaseResult): CaseResult {
+  const motors = result.motors.map((motor) => {
+    const locked = steady.motors.find(({ motorId }) => motorId === motor.motorId)?.start?.standstill
+    if (!motor.start || !locked) return motor
+    const { motorVoltage } = motor.start.standstill
+    return { ...motor, start: { ...motor.start, standstill: { ...locked, motorVoltage } } }
+  })
+  return { ...result, motors }
+}
+
 /** A case by the model that it asks for, beside it what the quasi-static model gives; where the model does not fit, that alone. */
 function runByModel(input: CaseInput): { result: CaseResult; steady: CaseResult | null } {
   const model = chosenModel(input)
-  if (model.kind === 'third-order')
-    return { result: runProtected(input), steady: runProtected({ ...input, model: quasiStatic }) }
+  if (model.kind === 'third-order') {
+    const steady = runProtected({ ...input, model: quasiStatic })
+    return { result: withLockedRotor(runProtected(input), steady), steady }
+  }
   const steady = runProtected(input)
   if (model.kind === 'quasi-static') return { result: steady, steady: null }
   const found = fifthOrderCase(input, steady, model.switchingAngle)
@@ -136,7 +149,7 @@ export function runWithVariants(input: CaseInput, rules: readonly RuleInput[] = 
     ...(low === null
       ? []
       : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runProtected({ ...low, model: quasiStatic })) }]),
-    ...(result.model === 'quasi-static' && hasResidualTransient(input) ? [withFluxes(input, rules)] : []),
+    ...(result.model === 'quasi-static' && followsResidual(input) ? [withFluxes(input, rules)] : []),
     ...(steady === null ? [] : [{ kind: 'quasi-static' as const, result: withoutCurves(steady) }]),
   ]
   return variants.length === 0 ? result : { ...result, variants }

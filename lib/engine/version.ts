@@ -1,11 +1,16 @@
 /** Rises whenever a number of the engine moves, so that stored results say what computed them. */
-export const ENGINE_VERSION = '1.3.0'
+export const ENGINE_VERSION = '1.4.0'
 
 /**
  * What changed in the numbers and why, newest first.
  * @public
  */
 export const ENGINE_LOG: readonly { version: string; change: string }[] = [
+  {
+    version: '1.4.0',
+    change:
+      'Limits on voltage where the network closes on residual voltages have the worse of steady circuits and rotor fluxes; machines switched on near synchronous speed are of fifth order.',
+  },
   {
     version: '1.3.0',
     change: 'Limits on flicker and with an envelope in time come from the worst of the circuits that meet a plate.',

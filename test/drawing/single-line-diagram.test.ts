@@ -95,6 +95,21 @@ describe('the single-line diagram', () => {
     await expect(sceneToSvg(drawn(demo))).toMatchFileSnapshot('../golden/drawing/single-line-diagram-velmoor.svg')
   })
 
+  test('marks an induction generator as one', () => {
+    const letters = (document: StudyDocument) =>
+      texts(drawn(document))
+        .filter(({ text }) => text === 'G' || text === 'M')
+        .map(({ text }) => text)
+    const [first, ...others] = demo.plant.motors
+    const changed = {
+      ...demo,
+      plant: { ...demo.plant, motors: [{ ...first!, role: 'generator' as const }, ...others] },
+    }
+    expect(letters(demo)).not.toContain('G')
+    expect(letters(changed).filter((letter) => letter === 'G').length).toBe(1)
+    expect(letters(changed).length).toBe(letters(demo).length)
+  })
+
   test('starts at the source on the left and flows to the right', () => {
     const at = (tag: string) => texts(drawn(demo)).find((item) => item.text === tag && item.weight === 'semibold')!.x
     expect(at('PCC')).toBeLessThan(at('S33'))

@@ -33,7 +33,12 @@ const deviceSymbol =
     if (device.kind === 'load') return loadSymbol(x, y)
     if (device.kind === 'capacitor') return capacitorSymbol(x, y)
     const schedule = document.schedules.find((each) => each.id === one?.schedule)
-    return motorSymbol(x, y, schedule?.starts.some((start) => start.motor === device.record.id) ?? false)
+    return motorSymbol(
+      x,
+      y,
+      schedule?.starts.some((start) => start.motor === device.record.id) ?? false,
+      device.record.role === 'generator' ? 'G' : 'M',
+    )
   }
 
 /** One sheet of a diagram: the trees on it, and the buses whose part is drawn apart. */

@@ -52,13 +52,14 @@ export const lineSymbol = (x: number, y: number, kind: 'cable' | 'overhead'): re
   ]
 }
 
-export const motorSymbol = (x: number, y: number, emphasis: boolean): readonly SceneItem[] => {
+/** A machine: M for a motor, G for a generator; emphasised where it starts. */
+export const motorSymbol = (x: number, y: number, emphasis: boolean, letter: 'M' | 'G' = 'M'): readonly SceneItem[] => {
   const r = 3
   const at = x + symbolWidth - r - 0.6
   return [
     path(wire(x, at - r, y), stroke),
     path(circle(at, y, r), { ...stroke, width: emphasis ? 0.6 : 0.3, fill: 'sheet' }),
-    text(at, y + 0.2, 'M', { size: 2.8, anchor: 'middle', weight: 'semibold' }),
+    text(at, y + 0.2, letter, { size: 2.8, anchor: 'middle', weight: 'semibold' }),
     text(at, y + 2.2, '3~', { size: 1.9, anchor: 'middle' }),
   ]
 }

@@ -2,6 +2,7 @@ import { synchronousSpeed } from '../../units/speed'
 import type { CaseInput, MotorInput } from '../case-input'
 import type { CaseResult } from '../case-result'
 import { residualDecayTime } from '../machines/residual-voltage'
+import { hasFluxes } from '../runup/flux-model'
 import type { RuleInput } from './rule'
 
 /** A gap shorter than the residual voltage lasts; gaps of unknown machines always are. */
@@ -17,11 +18,11 @@ function gapOf({ duty }: MotorInput): number {
   return 'gap' in starter ? starter.gap : 0
 }
 
-/** Whether a supply that was away finds motors that still hold a voltage of their own. */
-function closesOnResidual({ disturbance, motors, frequency }: CaseInput): boolean {
-  if (!disturbance || disturbance.remaining > 0) return false
+/** Motors that still hold a voltage of their own when a supply that was away finds them on. */
+function heldByResidual({ disturbance, motors, frequency }: CaseInput): readonly MotorInput[] {
+  if (!disturbance || disturbance.remaining > 0) return []
   const { duration } = disturbance
-  return motors.some((motor) => {
+  return motors.filter((motor) => {
     const { duty } = motor
     if (duty.kind !== 'running' || !isFast(motor, duration, frequency)) return false
     // A contactor that opens in the gap takes the motor off until it closes again.
@@ -29,17 +30,27 @@ function closesOnResidual({ disturbance, motors, frequency }: CaseInput): boolea
   })
 }
 
-/** Whether a case closes on residual voltages, which the third-order model follows. */
-export const hasResidualTransient = (input: CaseInput): boolean =>
-  closesOnResidual(input) ||
-  input.motors.some((motor) => {
+/** Motors that the network closes on while they hold a residual voltage. */
+const residualMotors = (input: CaseInput): readonly MotorInput[] => [
+  ...heldByResidual(input),
+  ...input.motors.filter((motor) => {
     const gap = gapOf(motor)
     return gap > 0 && isFast(motor, gap, input.frequency)
-  })
+  }),
+]
 
-/** Whether a start begins or goes on with a transient that RMS values of steady circuits cannot show. */
-const hasTransient = (input: CaseInput): boolean =>
-  hasResidualTransient(input) || input.motors.some((motor) => cutsIn(motor, input))
+/** Whether a case closes on residual voltages that the third-order model can follow, all of them. */
+export function followsResidual(input: CaseInput): boolean {
+  const motors = residualMotors(input)
+  return motors.length > 0 && motors.every(hasFluxes)
+}
+
+/** Whether a start begins or goes on with a transient that the model of the case cannot show. */
+function hidesTransient(input: CaseInput, model: CaseResult['model']): boolean {
+  if (model === 'fifth-order') return false
+  const motors = [...residualMotors(input), ...input.motors.filter((motor) => cutsIn(motor, input))]
+  return motors.some((motor) => model === 'quasi-static' || !hasFluxes(motor))
+}
 
 /** Slip within which a machine that is switched on counts as near synchronous speed. */
 const nearSynchronous = 0.1
@@ -55,15 +66,14 @@ export function cutsIn({ duty, poles }: MotorInput, { frequency }: CaseInput): b
  * transition or a supply that comes back on residual voltages. A quasi-static figure beyond the limit still fails it;
  * settled voltages, and the first instant of a start that has not yet come to its gap, are those of any model.
  */
-export function onlyTransientJudges(
-  { quantity, instant, limit }: RuleInput,
-  input: CaseInput,
-  { model }: CaseResult,
-): boolean {
-  if (model !== 'quasi-static') return false
-  if (quantity === 'flicker-short-term' || quantity === 'flicker-long-term') return hasTransient(input)
+export function onlyTransientJudges(rule: RuleInput, input: CaseInput, { model }: CaseResult): boolean {
+  const { quantity, instant, limit } = rule
+  if (quantity === 'flicker-short-term' || quantity === 'flicker-long-term') return hidesTransient(input, model)
   if (quantity !== 'voltage-change' && quantity !== 'remaining-voltage') return false
-  if (instant === 'first' && limit.kind === 'value') return input.motors.some((motor) => cutsIn(motor, input))
+  if (instant === 'first' && limit.kind === 'value') {
+    const cutting = input.motors.filter((motor) => cutsIn(motor, input))
+    return cutting.length > 0 && hidesTransient({ ...input, motors: cutting }, model)
+  }
   const settled = instant === 'settled-after-start' || instant === 'settled-after-process'
-  return (limit.kind === 'envelope' || !settled) && hasTransient(input)
+  return (limit.kind === 'envelope' || !settled) && hidesTransient(input, model)
 }

@@ -277,6 +277,18 @@ describe('an induction generator switched in near synchronous speed', () => {
   })
 })
 
+describe('a start by the third-order model', () => {
+  it('has the locked rotor of the steady circuit at standstill, at its own first voltage', () => {
+    const input = simplePlant([simpleMotor('M', started({ kind: 'direct' }, squareLoad(300)))])
+    const result = runWithVariants({ ...input, model: { kind: 'third-order' } })
+    const [own, steady] = [startOf(result).standstill, startOf(steadyOf(result)).standstill]
+    expect(own.torque).toBe(steady.torque)
+    expect(own.lineCurrent).toBe(steady.lineCurrent)
+    expect(own.motorVoltage).toBeCloseTo(result.places[0]!.first, 9)
+    expect(own.motorVoltage).not.toBe(steady.motorVoltage)
+  })
+})
+
 describe('limits that only a transient model may judge', () => {
   const open = simplePlant([simpleMotor('M', started(autotransformer(0.65, { rpm: 1450 }, 0.05), noLoad))], 0.003)
 
@@ -286,6 +298,15 @@ describe('limits that only a transient model may judge', () => {
     expect(judged(open, { ...dip, limit: { kind: 'value', value: 0.001 } }).word).toBe('fails')
     expect(judged(open, { ...dip, instant: 'first' }).reason).toBeNull()
     expect(judged(open, { ...dip, instant: 'settled-after-start' }).reason).toBeNull()
+  })
+
+  it('are not assessed where the machine on the gap has no circuit to follow', () => {
+    const circuit = { ...singleCage, saturation: { current: 1.1, torque: 2.2, noneBelow: 0.01, fullFrom: 0.1 } }
+    const input: CaseInput = { ...open, motors: open.motors.map((motor) => ({ ...motor, circuit })) }
+    const result = runWithVariants(input)
+    expect(result.variants?.some(({ kind }) => kind === 'third-order')).not.toBe(true)
+    expect(judgeOverPlate(dip, input, result, { perDay: 1, perHour: 1 }, margins)!.reason).toBe('transient-only')
+    expect(judged({ ...input, model: { kind: 'third-order' } }).reason).toBe('transient-only')
   })
 
   it('are assessed again after a gap in which the residual voltage is gone', () => {
