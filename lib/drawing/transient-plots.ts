@@ -49,13 +49,13 @@ const currentEnvelope = (figure: CaseFigure, size: FigureSize, transient: Transi
   })
 }
 
-/** Torque over the whole start: mean over half a period, and between which values it swings. */
+/** Torque over the whole start: mean over a period, and between which values it swings. */
 const torqueEnvelope = (figure: CaseFigure, size: FigureSize, transient: TransientSeries): Scene => {
   const { time: x, torque, torqueLow, torqueHigh } = transient
   return panel(figure, size, transient, {
     what: 'torque',
     unit: 'kN·m',
-    series: [{ name: 'mean over half a period', style: 0, x, y: scaled(torque, 1e3) }],
+    series: [{ name: 'mean over a period', style: 0, x, y: scaled(torque, 1e3) }],
     shade: { name: 'swing', x, lower: scaled(torqueLow, 1e3), upper: scaled(torqueHigh, 1e3) },
     description: `Between ${formatNumber(Math.min(...torqueLow) / 1e3, { digits: 4 })} and ${formatNumber(Math.max(...torqueHigh) / 1e3, { digits: 4 })} kN·m.`,
   })
@@ -82,7 +82,7 @@ const openingCurrent = (figure: CaseFigure, size: FigureSize, transient: Transie
   })
 }
 
-/** Torque in the first periods, with its mean over half a period. */
+/** Torque in the first periods, with its mean over a period. */
 const openingTorque = (figure: CaseFigure, size: FigureSize, transient: TransientSeries): Scene => {
   const { time, torque, opening } = transient
   const shown = within(transient)
@@ -91,7 +91,7 @@ const openingTorque = (figure: CaseFigure, size: FigureSize, transient: Transien
     unit: 'kN·m',
     series: [
       { name: 'torque', style: 0, x: opening.time, y: scaled(opening.torque, 1e3) },
-      { name: 'mean over half a period', style: 1, x: time.slice(0, shown), y: scaled(torque.slice(0, shown), 1e3) },
+      { name: 'mean over a period', style: 1, x: time.slice(0, shown), y: scaled(torque.slice(0, shown), 1e3) },
     ],
     description: `Largest value ${formatNumber(Math.max(...opening.torque) / 1e3, { digits: 4 })} kN·m.`,
   })

@@ -31,7 +31,7 @@ describe('the figures of a start by the fifth-order model', () => {
       for (const scene of transientPlots(shown, size)) {
         expect(overlappingTexts(scene)).toEqual([])
         expect(textsOutside(scene)).toEqual([])
-        expect(texts(scene).some(({ text }) => text.includes('half a period') || text === 'peak')).toBe(true)
+        expect(texts(scene).some(({ text }) => text.includes(' period') || text === 'peak')).toBe(true)
       }
   })
 

@@ -24,7 +24,7 @@ describe('the report of a case by the fifth-order model', () => {
   })
 
   test('draws its first periods and envelopes, and says its method', () => {
-    expect(text).toContain('Torque over the start: mean over half a period')
+    expect(text).toContain('Torque over the start: mean over a period')
     expect(text).toContain('Models with transients')
   })
 })

@@ -3,7 +3,7 @@ import { addSample, type SampleStore, sampleStore } from '../runup/sampler'
 import { currentRms, type HalfCycle, meanPower, meanSquareCurrent, voltageRms } from '../transient/half-cycle'
 import { between, type NetworkAlong, placeAmong } from './network-along'
 
-/** Curves of a start by half periods: RMS of the phases, peaks and torque. Voltages are line to line. */
+/** Curves of a start by half periods: RMS of the phases and peaks; torque over whole ones. Voltages are line to line. */
 export interface EnvelopeRecord {
   /** Observations in the layout of the run-up, at the end of each half period; the lowest phase of every voltage. */
   samples: SampleStore
@@ -60,6 +60,8 @@ export function createEnvelopeRecord(
   }
   const now = new Float64Array(width)
   const before = { re: 0, im: 0 }
+  /** Torque of the half period before: it pulses with the supply, so that only whole periods have a steady mean. */
+  let former: HalfCycle['torque'] | null = null
   const seenAt = (bus: number, here: { row: number; part: number }) => {
     const { row, part } = here
     const next = part === 0 ? row : row + 1
@@ -89,7 +91,8 @@ export function createEnvelopeRecord(
     }
     const { most } = currentRms(half, angle)
     const { active, reactive } = meanPower(half, seenAt(busOfMotor, here))
-    const torque = factor * half.torque.mean
+    const previous = former ?? half.torque
+    const torque = (factor * (half.torque.mean + previous.mean)) / 2
     const against = load(half.speed)
     now[place + channel.speed] = half.speed
     now[place + channel.torque] = torque
@@ -107,12 +110,13 @@ export function createEnvelopeRecord(
     record.time.push(t)
     record.current.push(most)
     record.peak.push(half.peak)
-    record.torqueLow.push(factor * half.torque.low)
+    record.torqueLow.push(factor * Math.min(half.torque.low, previous.low))
     record.torque.push(torque)
-    record.torqueHigh.push(factor * half.torque.high)
+    record.torqueHigh.push(factor * Math.max(half.torque.high, previous.high))
     record.direct.push(Math.hypot(before.re + half.mean.re, before.im + half.mean.im) / 2)
     before.re = half.mean.re
     before.im = half.mean.im
+    former = { ...half.torque }
   }
   return { record, note }
 }

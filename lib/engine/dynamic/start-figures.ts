@@ -143,7 +143,7 @@ export function peaksOf(own: MotorInput, { run }: FollowedStart, at: number, ang
   }
 }
 
-/** Torque averaged over two successive half periods: greatest and least, the first whole period left out. */
+/** Torque over whole periods: greatest and least, the first whole period left out. */
 export function averagedTorque({
   torque,
   time,
@@ -153,7 +153,7 @@ export function averagedTorque({
     { torque: Number.POSITIVE_INFINITY, at: 0 },
   ]
   for (let i = 3; i < torque.length; i++) {
-    const mean = (torque[i]! + torque[i - 1]!) / 2
+    const mean = torque[i]!
     if (mean > most.torque) Object.assign(most, { torque: mean, at: time[i]! })
     if (mean < least.torque) Object.assign(least, { torque: mean, at: time[i]! })
   }

@@ -28,6 +28,7 @@ export interface TransientSeries {
   /** RMS of the highest phase, and largest instantaneous value of any. */
   current: readonly number[]
   peak: readonly number[]
+  /** Over the whole period that ends there. */
   torqueLow: readonly number[]
   torque: readonly number[]
   torqueHigh: readonly number[]

@@ -169,9 +169,9 @@ export const results = {
       `Torque of ${motor} at its actual voltage, and of its load, against speed. Shaded: what is left to accelerate.`,
     transient: [
       'Current of phase a in the first periods, by the fifth-order model, and the RMS of half a period times √2.',
-      'Torque in the first periods, and its mean over half a period.',
+      'Torque in the first periods, and its mean over a period.',
       'Current over the start: RMS over half a period in the highest phase, and the largest instantaneous value.',
-      'Torque over the start: mean over half a period. Shaded: between which values it swings.',
+      'Torque over the start: mean over a period. Shaded: between which values it swings.',
     ],
     figure: (number: number) => `Figure ${number}`,
   },
