@@ -177,6 +177,8 @@ export type Notice =
   | { kind: 'change-over-too-early'; motorId: string }
   /** A start waited for another that never came. */
   | { kind: 'not-switched-on'; motorId: string; waitsFor: string }
+  /** A stage of the relay without delay lies below what the first cycles bring with their direct-current part (peak over √2). */
+  | { kind: 'stage-below-offset'; motorId: string; pickUp: Ampere; offset: Ampere }
   | { kind: 'residual-voltage-not-modelled' }
   | { kind: 'starter-duty-exceeded'; motorId: string; time: Second }
   | { kind: 'open-transition-without-transient'; motorId: string }

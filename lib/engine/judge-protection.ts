@@ -6,8 +6,9 @@ import { followProtection, limitMargin, type ProtectionResult, type StartWindow 
 import { limitPoints, permissibleTime } from './protection/permissible-time'
 import { leastOf } from './protection/steady-time'
 
-/** A start that stays where it is, so that its current goes on after the run. */
-const hanging: ReadonlySet<StartResult['outcome']['kind']> = new Set([
+/** A start that stays where it is, running or hanging, so that its current goes on after the run. */
+const staying: ReadonlySet<StartResult['outcome']['kind']> = new Set([
+  'started',
   'not-transferred',
   'below-criterion',
   'stalled',
@@ -22,7 +23,7 @@ function windowsOf(motor: MotorInput, starts: readonly StartResult[], end: numbe
     const switchedOff = outcome.kind === 'tripped' || outcome.kind === 'abandoned' ? from + outcome.at : end
     const off = runFor === undefined ? switchedOff : from + runFor
     const over = outcome.kind === 'started' ? Math.min(off, from + outcome.at) : off
-    return { from, over, off, hangs: k === starts.length - 1 && hanging.has(outcome.kind) }
+    return { from, over, off, stays: k === starts.length - 1 && staying.has(outcome.kind) }
   })
 }
 

@@ -152,14 +152,14 @@ function balancesOf({ declared, duty }: MotorInput, motor: MotorResult) {
   const { thermal, permissibleTime } = declared
   if (thermal === undefined || permissibleTime === null || duty.kind !== 'starting') return null
   const starts = allAttempts(motor)
-  const used = starts.flatMap(({ heatUsed, switchedOnAt, timeToCriterion }, k) => {
+  const used = starts.flatMap(({ heatUsed, switchedOnAt, timeToCriterion, outcome }, k) => {
     if (heatUsed.figure === null) return []
     const { runFor, rest } = duty.attempts?.[k] ?? { runFor: null, rest: 0 }
     const off = switchedOnAt + (runFor ?? timeToCriterion ?? 0)
     const next = starts[k + 1]?.switchedOnAt
-    return [
-      { used: heatUsed.figure, lasts: timeToCriterion ?? runFor ?? 0, rest: next === undefined ? rest : next - off },
-    ]
+    const complete = outcome.kind === 'started'
+    const lasts = timeToCriterion ?? runFor ?? 0
+    return [{ used: heatUsed.figure, lasts, rest: next === undefined ? rest : next - off, complete }]
   })
   return used.length === starts.length ? heatBalances(thermal, permissibleTime.state, used) : null
 }

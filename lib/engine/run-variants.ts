@@ -1,12 +1,13 @@
+import { ampere } from '../units/si'
 import { synchronousSpeed } from '../units/speed'
 import { type CaseInput, isTabulated, type MachineModel } from './case-input'
-import type { CaseResult, CaseVariant } from './case-result'
+import type { CaseResult, CaseVariant, Notice } from './case-result'
 import { appliesTo } from './criteria/applies'
 import type { EnvelopePoint } from './criteria/envelope'
 import { figures } from './criteria/judge'
 import { cutsIn, followsResidual } from './criteria/only-transient'
 import type { RuleInput } from './criteria/rule'
-import { directStartPeaks } from './direct-start-peaks'
+import { type DirectStartPeaks, directStartPeaks } from './direct-start-peaks'
 import { chosenModel } from './dynamic/chosen-model'
 import { fifthOrderCase } from './dynamic/fifth-order-case'
 import { startFlicker } from './flicker/start-flicker'
@@ -35,11 +36,26 @@ function withFlicker(input: CaseInput, result: CaseResult): CaseResult {
   return flicker.length > 0 ? { ...result, flicker } : result
 }
 
+/** Delay in s below which a stage may act on the direct-current part of the first cycles. */
+const undelayed = 0.1
+
+/** Stages of relays without delay that lie below the first cycles of a direct start. */
+const belowOffset = ({ motors }: CaseInput, peaks: readonly DirectStartPeaks[]): Notice[] =>
+  peaks.flatMap(({ motorId, peakCurrent }) => {
+    const offset = ampere(peakCurrent.current / Math.SQRT2)
+    const elements = motors.find(({ id }) => id === motorId)?.protection?.elements ?? []
+    return elements.flatMap((element): Notice[] =>
+      element.kind === 'definite' && element.delay < undelayed && element.pickUp < offset
+        ? [{ kind: 'stage-below-offset', motorId, pickUp: element.pickUp, offset }]
+        : [],
+    )
+  })
+
 /** Adds the peaks of direct starts by the transient model. */
 function withPeaks(input: CaseInput, result: CaseResult): CaseResult {
   if (result.outcome.kind !== 'complete' || result.peaks) return result
   const peaks = directStartPeaks(input)
-  return peaks.length > 0 ? { ...result, peaks } : result
+  return peaks.length > 0 ? { ...result, peaks, notices: [...result.notices, ...belowOffset(input, peaks)] } : result
 }
 
 const withModels = (input: CaseInput, models: ReadonlyMap<string, MachineModel>): CaseInput => ({

@@ -266,3 +266,28 @@ describe('a start under its relay by the fifth-order model', () => {
     expect(fifth([element(0.001)]).notices).toContainEqual({ kind: 'transient-model-unfit', cause: 'trip' })
   })
 })
+
+describe('what a reader must know of a relay', () => {
+  it('is a stage without delay below the first cycles of a direct start', () => {
+    const stage = (pickUp: number, delay: number): RelayElement => ({
+      kind: 'definite',
+      pickUp: ampere(pickUp),
+      delay: second(delay),
+    })
+    const noticed = (element_: RelayElement) =>
+      runWithVariants(plant(motor([element_]))).notices.filter(({ kind }) => kind === 'stage-below-offset')
+    const rms = free.peakMotorCurrent.current
+    expect(noticed(stage(1.1 * rms, 0.02))).toMatchObject([{ motorId: 'M', pickUp: 1.1 * rms }])
+    expect(noticed(stage(2 * rms, 0.02))).toEqual([])
+    expect(noticed(stage(1.1 * rms, 0.3))).toEqual([])
+  })
+
+  it('is a running current above the setting, by the instant at which it will trip', () => {
+    const input = plant(motor([element(60, 100)]))
+    const { protection, outcome, settledSpeed } = startOf(input)
+    expect(outcome.kind).toBe('started')
+    expect(settledSpeed).not.toBeNull()
+    expect(protection!.elements[0]!.operatesAt!).toBeGreaterThan(protection!.startedAt!)
+    expect(protection!.tripMargin!).toBeGreaterThan(0)
+  })
+})

@@ -8,7 +8,7 @@ const failing = (document: StudyDocument) =>
     .filter(({ passed }) => !passed)
     .map(({ id }) => id)
 
-test('the demo study leaves three questions open: pull-up points, editions, and the duty of star-delta', () => {
+test('the demo study leaves four questions open: pull-up points, editions, the duty of star-delta, the relay of the blower', () => {
   expect(failing(example('velmoor'))).toEqual(['pull-up', 'editions', 'duty', 'relay'])
 })
 
@@ -44,4 +44,10 @@ test.each<[string, (document: StudyDocument) => unknown]>([
   const check = preIssueChecks(document).find((one) => one.id === id)
   expect(check?.passed).toBe(false)
   expect(check?.issues[0]?.message).toMatch(/\.$/)
+})
+
+test('a motor that starts without a relay beside it is named', () => {
+  const document = example('velmoor')
+  document.plant.motors[3]!.protection = null
+  expect(failing(document)).toContain('relay')
 })

@@ -135,7 +135,7 @@ export function HeatTable({ results, result }: { results: Results; result: CaseS
     {
       label: 'Starts in succession by heat, from cold and from hot',
       print: ({ start: { heatBalance } }) =>
-        heatBalance ? `${heatBalance.inSuccession.cold}, ${heatBalance.inSuccession.hot ?? '–'}` : '–',
+        heatBalance?.inSuccession ? `${heatBalance.inSuccession.cold}, ${heatBalance.inSuccession.hot ?? '–'}` : '–',
     },
     {
       label: 'Standstill before the same start fits again',

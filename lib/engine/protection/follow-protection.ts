@@ -12,14 +12,14 @@ export interface StartWindow {
   over: number
   /** When the motor is off the line again; the end of the run where it stays on. */
   off: number
-  /** Whether the current at the end of the run goes on: a start that hangs. */
-  hangs: boolean
+  /** Whether the current at the end of the run goes on: a start that runs or hangs. */
+  stays: boolean
 }
 
 /** How one element takes a start; times from the motor's own switching-on. */
 export interface ElementResult {
   kind: RelayElement['kind']
-  /** Operates while the motor is on, on the way or later; beyond the run where a hanging start keeps its current. */
+  /** Operates while the motor is on, on the way or later; beyond the run where the current at its end would make it. */
   operatesAt: Second | null
   /** Least time that it still needs, at any instant of the start, if the current of that instant stayed. */
   least: { time: Second; at: Second } | null
@@ -87,7 +87,7 @@ function followElement(
     }
   }
   return open.map(({ window, before, after, operatesAt, least }, k) => {
-    const beyond = window.hangs && operatesAt === null ? course.timeLeft(current.at(-1)!) : null
+    const beyond = window.stays && operatesAt === null ? course.timeLeft(current.at(-1)!) : null
     const operates = operatesAt ?? (beyond === null ? null : time.at(-1)! + beyond)
     const since = (t: number): Second => second(t - window.from)
     const held = steadyTime(element, lockedRotor[k]!, before)

@@ -8,8 +8,8 @@ export interface HeatBalance {
   ofStart: PerUnit
   before: PerUnit
   after: PerUnit
-  /** Starts in succession without cooling between them; from hot null where that state is unknown. */
-  inSuccession: { cold: number; hot: number | null }
+  /** Starts in succession without cooling between them; from hot null where that state is unknown. Null for a start that did not get there. */
+  inSuccession: { cold: number; hot: number | null } | null
   /** Standstill before the same start fits again; null where cooling is unknown or it never fits. */
   restBeforeNext: Second | null
   /** Starts an hour without end: the least over motors stopped and running in between, as far as known; null where neither is. */
@@ -34,21 +34,22 @@ export const heatOfRunning = ({ cold, hot }: ThermalData): number | null =>
  * Heat of starts one after the other: each adds its own, a rest lets it fall towards ambient with the constant of
  * standstill (not at all where that is unknown). First-order, one body; common practice for repeated starts.
  *
- * @param starts heat used by each in parts of the permissible in `state`, how long it lasts and the rest after it, s
+ * @param starts heat used by each in parts of the permissible in `state`, how long it lasts and the rest after it, s,
+ *   and whether it got there, so that it can be repeated
  * @param state the motor's before the first
  * @returns one balance a start; null where no permissible time fits the state
  */
 export function heatBalances(
   thermal: ThermalData,
   state: 'hot' | 'cold',
-  starts: readonly { used: number; lasts: number; rest: number }[],
+  starts: readonly { used: number; lasts: number; rest: number; complete: boolean }[],
 ): HeatBalance[] | null {
   const own = state === 'hot' ? thermal.hot : thermal.cold
   const base = thermal.cold ?? thermal.hot
   if (own === null || base === null) return null
   const running = heatOfRunning(thermal)
   let heat = state === 'hot' ? (running ?? 0) : 0
-  return starts.map(({ used, lasts, rest }) => {
+  return starts.map(({ used, lasts, rest, complete }) => {
     const ofStart = (used * own) / base
     const before = heat
     const after = before + ofStart
@@ -58,10 +59,13 @@ export function heatBalances(
       ofStart: perUnit(ofStart),
       before: perUnit(before),
       after: perUnit(after),
-      ...repetition(thermal, ofStart, after, lasts, running),
+      ...(complete ? repetition(thermal, ofStart, after, lasts, running) : unrepeated),
     }
   })
 }
+
+/** What a start that did not get there says about more of them: nothing. */
+const unrepeated = { inSuccession: null, restBeforeNext: null, perHour: null }
 
 function repetition(
   { cold, coolingStopped, coolingRunning }: ThermalData,

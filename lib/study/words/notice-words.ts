@@ -25,6 +25,8 @@ export const noticeSentence = (notice: Notice, document: StudyDocument): string 
       return `${motorTag(document, notice.motorId)} changes over while its slip is above breakdown: the current and the dip after the change-over are near those of a direct start.`
     case 'not-switched-on':
       return `${motorTag(document, notice.motorId)} is not switched on: it waits for ${motorTag(document, notice.waitsFor)}, which does not start.`
+    case 'stage-below-offset':
+      return `A stage of the relay of ${motorTag(document, notice.motorId)} without delay is set at ${printQuantity(notice.pickUp, 'current', { unit: 'A', digits: 3 })}; the first cycles bring up to ${printQuantity(notice.offset, 'current', { unit: 'A', digits: 3 })} with their direct-current part (peak over √2). A relay that does not filter it may trip on switching-on.`
     case 'residual-voltage-not-modelled':
       return 'The supply is away for a time. Motors that still turn hold a voltage of their own when it comes back; closing on it is not in this model and can draw more current and torque than a start.'
     case 'starter-duty-exceeded':

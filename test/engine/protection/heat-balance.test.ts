@@ -11,7 +11,7 @@ const thermal: ThermalData = {
   coolingRunning: second(1800),
   coolingStopped: second(5400),
 }
-const start = (used: number, rest = 0) => ({ used, lasts: 10, rest })
+const start = (used: number, rest = 0) => ({ used, lasts: 10, rest, complete: true })
 
 describe('heat of starts one after the other', () => {
   it('begins at ambient from cold and at 1 − t_hot/t_cold from hot, on one scale', () => {
@@ -43,6 +43,11 @@ describe('heat of starts one after the other', () => {
     const [, second_] = heatBalances(thermal, 'cold', [start(0.7, rest), start(0.7)])!
     expect(second_!.after).toBeCloseTo(1, 9)
     expect(heatBalances(thermal, 'cold', [start(1.2)])![0]!.restBeforeNext).toBeNull()
+  })
+
+  it('says nothing about more starts where this one did not get there', () => {
+    const [one] = heatBalances(thermal, 'cold', [{ ...start(0.3), complete: false }])!
+    expect(one).toMatchObject({ after: 0.3, inSuccession: null, restBeforeNext: null, perHour: null })
   })
 
   it('says nothing without the permissible time of its state, and no number an hour without cooling', () => {

@@ -117,6 +117,10 @@ export const heatTable = (context: ReportContext): readonly ReactElement[] => {
     )
     return found ? startsAllowedPhrase(found.allowed) : dash
   }
+  const ofMaker = (id: string): string => {
+    const motor = input.document.plant.motors.find((each) => each.id === id)
+    return `${motor?.startsCold ?? dash} / ${motor?.startsHot ?? dash}`
+  }
   return [
     subsection(context, 'results-heat', say.title),
     ...paragraph(paper, say.intro, { width }),
@@ -129,6 +133,7 @@ export const heatTable = (context: ReportContext): readonly ReactElement[] => {
         { head: say.heads.ofStart, width: 0.8, align: right },
         { head: say.heads.before, width: 0.8, align: right },
         { head: say.heads.after, width: 0.8, align: right },
+        { head: say.heads.makers, width: 0.8, align: right },
         { head: say.heads.succession, width: 1, align: right },
         { head: say.heads.rest, width: 1, align: right },
         { head: say.heads.perHour, width: 0.8, align: right },
@@ -142,7 +147,8 @@ export const heatTable = (context: ReportContext): readonly ReactElement[] => {
           percent(heat?.ofStart ?? null, 1),
           percent(heat?.before ?? null, 1),
           percent(heat?.after ?? null, 1),
-          heat ? `${heat.inSuccession.cold} / ${heat.inSuccession.hot ?? dash}` : dash,
+          ofMaker(one.motorId),
+          heat?.inSuccession ? `${heat.inSuccession.cold} / ${heat.inSuccession.hot ?? dash}` : dash,
           decimals(heat?.restBeforeNext === null || heat === undefined ? null : heat.restBeforeNext / 60, 1),
           heat?.perHour === null || heat === undefined ? dash : String(heat.perHour),
           allowed(one),

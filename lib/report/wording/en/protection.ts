@@ -42,14 +42,15 @@ export const protection = {
   heat: {
     title: 'Heat of starts and starts allowed',
     intro:
-      'Heat in per cent of what a locked rotor may bring from cold. Starts an hour are the least that the maker of the motor, the starting device, the class of starts of the limits and the process allow; the heat balance lowers that number and never raises it, nor stands for a number that nobody states.',
+      'Heat in per cent of what a locked rotor may bring from cold. Starts an hour are the least that the maker of the motor, the starting device, the class of starts of the limits and the process allow; the heat balance lowers that number and never raises it, nor stands for a number that nobody states. Starts in succession are those of the maker; by heat they can only be fewer.',
     heads: {
       case: 'Case',
       motor: 'Motor',
       ofStart: 'Of the start, %',
       before: 'Before, %',
       after: 'After, %',
-      succession: 'In succession, cold / hot',
+      makers: 'Maker, cold / hot',
+      succession: 'By heat, cold / hot',
       rest: 'Rest before the next, min',
       perHour: 'An hour, by heat',
       allowed: 'Starts an hour allowed',
