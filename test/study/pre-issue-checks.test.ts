@@ -8,7 +8,7 @@ const failing = (document: StudyDocument) =>
     .filter(({ passed }) => !passed)
     .map(({ id }) => id)
 
-test('the demo study leaves four questions open: pull-up points, editions, the duty of star-delta, the relay of the blower', () => {
+test('the demo study leaves four questions open: pull-up points, editions, the duty of star-delta, the relay of the booster', () => {
   expect(failing(example('velmoor'))).toEqual(['pull-up', 'editions', 'duty', 'relay'])
 })
 
