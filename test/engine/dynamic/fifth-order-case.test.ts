@@ -146,6 +146,20 @@ describe('a start by the fifth-order model', () => {
     close(atWorst.peaks![0]!.peakCurrent.current, worst.peaks![0]!.peakCurrent.current, 1e-3)
   })
 
+  it('dips less on a stiffer supply, and is never faster with more inertia', () => {
+    const at = (reactance: number, inertia: number) =>
+      fifth(
+        simplePlant(
+          [simpleMotor('M', started({ kind: 'direct' }, squareLoad(300)), { inertia: kilogramSquareMetre(inertia) })],
+          reactance,
+        ),
+      )
+    const dips = [0.0005, 0.001, 0.004, 0.016].map((reactance) => at(reactance, 10).places[0]!.deepest.voltage)
+    expect(dips.toSorted((a, b) => b - a)).toEqual(dips)
+    const times = [5, 10, 20, 40].map((inertia) => startOf(at(0.004, inertia)).timeToCriterion!)
+    expect(times.toSorted((a, b) => a - b)).toEqual(times)
+  })
+
   it('keeps envelopes and the first periods to draw, few enough for any length of run', () => {
     const motor = simpleMotor('M', started({ kind: 'direct' }, squareLoad(900), 1), {
       inertia: kilogramSquareMetre(200),
