@@ -165,7 +165,7 @@ export function runWithVariants(input: CaseInput, rules: readonly RuleInput[] = 
     ...(low === null
       ? []
       : [{ kind: 'low-voltage-torque' as const, result: withoutCurves(runProtected({ ...low, model: quasiStatic })) }]),
-    ...(result.model === 'quasi-static' && followsResidual(input) ? [withFluxes(input, rules)] : []),
+    ...(result.model === 'quasi-static' && followsResidual(input, result) ? [withFluxes(input, rules)] : []),
     ...(steady === null ? [] : [{ kind: 'quasi-static' as const, result: withoutCurves(steady) }]),
   ]
   return variants.length === 0 ? result : { ...result, variants }

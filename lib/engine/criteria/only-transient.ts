@@ -5,6 +5,8 @@ import { residualDecayTime } from '../machines/residual-voltage'
 import { hasFluxes } from '../runup/flux-model'
 import type { RuleInput } from './rule'
 
+type Motors = Pick<CaseResult, 'motors' | 'model'>
+
 /** A gap shorter than the residual voltage lasts; gaps of unknown machines always are. */
 function isFast({ circuit }: MotorInput, gap: number, frequency: number): boolean {
   const decay = residualDecayTime(circuit, frequency)
@@ -30,9 +32,17 @@ function heldByResidual({ disturbance, motors, frequency }: CaseInput): readonly
   })
 }
 
+/** Motors whose contactors came back while they held a residual voltage. */
+const reclosed = ({ motors, frequency }: CaseInput, result: Motors): readonly MotorInput[] =>
+  motors.filter((motor) => {
+    const outcome = result.motors.find(({ motorId }) => motorId === motor.id)?.running?.outcome
+    return outcome?.kind === 're-accelerated' && isFast(motor, outcome.reclosedAt - outcome.droppedAt, frequency)
+  })
+
 /** Motors that the network closes on while they hold a residual voltage. */
-const residualMotors = (input: CaseInput): readonly MotorInput[] => [
+const residualMotors = (input: CaseInput, result: Motors): readonly MotorInput[] => [
   ...heldByResidual(input),
+  ...reclosed(input, result),
   ...input.motors.filter((motor) => {
     const gap = gapOf(motor)
     return gap > 0 && isFast(motor, gap, input.frequency)
@@ -40,15 +50,16 @@ const residualMotors = (input: CaseInput): readonly MotorInput[] => [
 ]
 
 /** Whether a case closes on residual voltages that the third-order model can follow, all of them. */
-export function followsResidual(input: CaseInput): boolean {
-  const motors = residualMotors(input)
+export function followsResidual(input: CaseInput, result: Motors): boolean {
+  const motors = residualMotors(input, result)
   return motors.length > 0 && motors.every(hasFluxes)
 }
 
 /** Whether a start begins or goes on with a transient that the model of the case cannot show. */
-function hidesTransient(input: CaseInput, model: CaseResult['model']): boolean {
+function hidesTransient(input: CaseInput, result: Motors): boolean {
+  const { model } = result
   if (model === 'fifth-order') return false
-  const motors = [...residualMotors(input), ...input.motors.filter((motor) => cutsIn(motor, input))]
+  const motors = [...residualMotors(input, result), ...input.motors.filter((motor) => cutsIn(motor, input))]
   return motors.some((motor) => model === 'quasi-static' || !hasFluxes(motor))
 }
 
@@ -66,14 +77,14 @@ export function cutsIn({ duty, poles }: MotorInput, { frequency }: CaseInput): b
  * transition or a supply that comes back on residual voltages. A quasi-static figure beyond the limit still fails it;
  * settled voltages, and the first instant of a start that has not yet come to its gap, are those of any model.
  */
-export function onlyTransientJudges(rule: RuleInput, input: CaseInput, { model }: CaseResult): boolean {
+export function onlyTransientJudges(rule: RuleInput, input: CaseInput, result: Motors): boolean {
   const { quantity, instant, limit } = rule
-  if (quantity === 'flicker-short-term' || quantity === 'flicker-long-term') return hidesTransient(input, model)
+  if (quantity === 'flicker-short-term' || quantity === 'flicker-long-term') return hidesTransient(input, result)
   if (quantity !== 'voltage-change' && quantity !== 'remaining-voltage') return false
   if (instant === 'first' && limit.kind === 'value') {
     const cutting = input.motors.filter((motor) => cutsIn(motor, input))
-    return cutting.length > 0 && hidesTransient({ ...input, motors: cutting }, model)
+    return cutting.length > 0 && hidesTransient({ ...input, motors: cutting }, result)
   }
   const settled = instant === 'settled-after-start' || instant === 'settled-after-process'
-  return (limit.kind === 'envelope' || !settled) && hidesTransient(input, model)
+  return (limit.kind === 'envelope' || !settled) && hidesTransient(input, result)
 }

@@ -338,6 +338,26 @@ describe('limits that only a transient model may judge', () => {
     expect([0.2, 2].map(only)).toEqual([true, false])
   })
 
+  it('are those after a contactor that comes back at once, by the rotor fluxes that the motor still has', () => {
+    const running = (delay: number) =>
+      simpleMotor('R', {
+        kind: 'running',
+        load: squareLoad(600),
+        contactor: { dropOut: volt(260), delay: second(0.02), reclose: { above: volt(320), delay: second(delay) } },
+      })
+    const cameBack = (delay: number) => {
+      const input: CaseInput = {
+        ...simplePlant([running(delay)], 0.003),
+        disturbance: { at: second(1), duration: second(0.1), remaining: perUnit(0.5) },
+      }
+      const result = runWithVariants(input)
+      expect(result.motors[0]!.running!.outcome.kind).toBe('re-accelerated')
+      return { only: onlyTransientJudges(dip, input, result), kinds: (result.variants ?? []).map(({ kind }) => kind) }
+    }
+    expect(cameBack(0.1)).toEqual({ only: true, kinds: ['third-order'] })
+    expect(cameBack(1.5)).toEqual({ only: false, kinds: [] })
+  })
+
   it('are taken from the third-order model beside a quasi-static case with a gap, the worse of both speaking', () => {
     const result = runWithVariants(open)
     const third = result.variants!.find(({ kind }) => kind === 'third-order')!.result
