@@ -14,7 +14,12 @@ export const liveActions = [
 /** What is done to one frozen revision. */
 export const revisionActions = [
   'read-revision',
+  'read-comments',
   'comment',
+  'respond-comment',
+  'close-comment',
+  'tick-input',
+  'waive',
   'send-for-check',
   'accept-check',
   'reject-check',

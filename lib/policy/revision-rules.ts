@@ -43,6 +43,16 @@ const comments: Rule = (actor, subject) =>
         holds(actor, ['engineer', 'checker', 'approver', 'commenter'], 'Only those who review this revision comment.'),
       )
 
+/** What is said in a review is for those who work on it; whoever receives the report reads the sheet that it prints. */
+const readsComments: Rule = (actor, subject) =>
+  all(
+    reads(actor, subject),
+    holds(actor, [...team, 'commenter'], 'Comments are for those who review; the report prints their sheet.'),
+  )
+
+/** Until the review is closed a comment can be settled, also while its revision is back at the preparer. */
+const unsettled: readonly RevisionState[] = ['draft', 'in-check', 'in-review']
+
 const checks =
   (move: 'accept-check' | 'reject-check'): Rule =>
   (actor, subject) =>
@@ -73,7 +83,27 @@ export const revisionRules: Record<RevisionAction, Rule> = {
   // what no longer stands is not handed out anew; links that are out can still be ended
   'share-report': shares(['issued']),
   'end-share': shares(published),
+  'read-comments': readsComments,
   comment: comments,
+  'respond-comment': (actor, subject) =>
+    all(
+      holds(
+        actor,
+        ['engineer', 'checker', 'approver'],
+        'Only an engineer, a checker or an approver answers for the study.',
+      ),
+      inState(subject, unsettled),
+    ),
+  // whose comment it is stands with the comment: see comment-rules
+  'close-comment': (actor, subject) =>
+    all(
+      readsComments(actor, subject),
+      holds(actor, [...team, 'commenter'], 'Only those who review close comments.'),
+      inState(subject, unsettled),
+    ),
+  'tick-input': (actor, subject) => all(checker(actor), isNotPreparer(actor, subject), inState(subject, ['in-check'])),
+  waive: (actor, subject) =>
+    all(approver(actor), isNotPreparer(actor, subject), isNotChecker(actor, subject), inState(subject, ['in-review'])),
   'send-for-check': (actor, subject) =>
     all(engineer(actor), isPreparer(actor, subject), moves(subject, 'send-for-check')),
   'accept-check': checks('accept-check'),

@@ -33,6 +33,22 @@ export interface ReportWaiver {
   at: string
 }
 
+/** A comment of the review with how it was settled, as the comment sheet prints it. */
+export interface ReportComment {
+  number: number
+  /** What it is about, in words, with the value of its time where it has one. */
+  about: string
+  /** `error`, `request`, `question` or `editorial`. */
+  kind: string
+  text: string
+  who: string
+  at: string
+  /** Answers and replies in their order. */
+  thread: readonly { what: string; who: string; at: string; text: string }[]
+  /** `open`, `answered` or `closed`. */
+  state: string
+}
+
 /** What the frozen revision adds to study and result; every date in the report comes from here, never from the clock. */
 export interface ReportRevision {
   number: string
@@ -51,6 +67,8 @@ export interface ReportRevision {
   table: readonly RevisionTableRow[]
   decisions: readonly ReportDecision[]
   waivers: readonly ReportWaiver[]
+  /** Comments that stand in this revision; absent where the report is made without a review. */
+  comments?: readonly ReportComment[]
 }
 
 /** The engine's result for one motor alone at standstill, everything else switched off (see `reducedCase`). */

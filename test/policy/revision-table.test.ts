@@ -65,7 +65,12 @@ test('each person may do at each moment of a revision exactly what the table say
   expect(`\n${table}\n`).toBe(`
                 draft      in check   in review  accepted   round 0    round 1    round 2    round 3    issued     superseded withdrawn
 read-revision   PeCcAasX   PeCcAasX   PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamlsX PeCcAamlsX PeCcAamlsX
+read-comments   PeCcAasX   PeCcAasX   PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX  PeCcAamsX
 comment         -          PeCcX      PeCcAamX   PeCcAamX   -          -          -          -          -          -          -
+respond-comment PeCcAaX    PeCcAaX    PeCcAaX    PeCcAaX    -          -          -          -          -          -          -
+close-comment   PeCcAasX   PeCcAasX   PeCcAamsX  PeCcAamsX  -          -          -          -          -          -          -
+tick-input      -          Cc         -          -          -          -          -          -          -          -          -
+waive           -          -          Aa         Aa         -          -          -          -          -          -          -
 send-for-check  PX         -          -          -          -          -          -          -          -          -          -
 accept-check    -          Cc         -          -          -          -          -          -          -          -          -
 reject-check    -          Cc         -          -          -          -          -          -          -          -          -

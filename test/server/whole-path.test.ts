@@ -26,7 +26,7 @@ import { demo } from '@/prisma/seed/seed-demo'
 import { actorAs } from './support/cast-actor'
 import { breakOf } from './support/chain'
 import { useDemo } from './support/demo'
-import { computed, signingBegun } from './support/path-to-signing'
+import { computed, signingBegun, waiveAll } from './support/path-to-signing'
 import { signAs } from './support/signing'
 import { until, useWorker } from './support/worker'
 
@@ -141,6 +141,7 @@ describe.sequential('from records to an issued report', () => {
     await expect(perform(decideReview, obede, review)).rejects.toMatchObject(forbidden(/^Whoever checked/))
     await expect(perform(closeReview, tharow, close)).rejects.toMatchObject(forbidden(/^Accept the review before/))
     await perform(decideReview, tharow, review)
+    await waiveAll(revisionId)
     await perform(closeReview, tharow, close)
     const { renderFailure, roundStartedAt } = await signingBegun(revisionId)
     expect(renderFailure).toBe(null)

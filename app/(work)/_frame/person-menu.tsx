@@ -4,8 +4,8 @@ import Link from 'next/link'
 import { useState } from 'react'
 import { Button } from '@/lib/ui/button'
 
-/** Who is signed in, the way to their own page, and out. */
-export function PersonMenu({ name }: { name: string }) {
+/** What waits for who is signed in, the way to their own page, and out. */
+export function PersonMenu({ name, unread }: { name: string; unread: number }) {
   const [failed, setFailed] = useState(false)
   const signOut = async () => {
     const answer = await fetch('/api/auth/sign-out', {
@@ -18,6 +18,9 @@ export function PersonMenu({ name }: { name: string }) {
   }
   return (
     <div className="flex shrink-0 items-center gap-2 text-dense">
+      <Link prefetch={false} href="/inbox" className="link">
+        Inbox{unread > 0 ? ` (${unread})` : ''}
+      </Link>
       <Link prefetch={false} href="/profile" className="link">
         {name}
       </Link>

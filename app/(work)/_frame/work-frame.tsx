@@ -1,6 +1,9 @@
 import Link from 'next/link'
 import type { ReactNode } from 'react'
+import { seek } from '@/app/_action/ask'
 import { signedIn } from '@/app/_action/signed-in'
+import { Live, type LiveProps } from '@/app/(work)/_live/live'
+import { unreadNotices } from '@/lib/server/reviews/queries'
 import { PersonMenu } from './person-menu'
 import { TitleBlock, type TitleCell } from './title-block'
 
@@ -14,11 +17,13 @@ interface WorkFrameProps {
   /** Left column; absent where there is only one place. */
   places?: ReactNode
   cells?: readonly TitleCell[]
+  /** The page follows what happens in its project. */
+  live?: LiveProps
   children: ReactNode
 }
 
 /** The sheet that all work is done on: path on top, places at the left, title block along the bottom. */
-export async function WorkFrame({ path, places, cells, children }: WorkFrameProps) {
+export async function WorkFrame({ path, places, cells, live, children }: WorkFrameProps) {
   const actor = await signedIn()
   return (
     <div className="flex min-h-dvh flex-col">
@@ -54,7 +59,10 @@ export async function WorkFrame({ path, places, cells, children }: WorkFrameProp
             ))}
           </ol>
         </nav>
-        <PersonMenu name={actor.name} />
+        <div className="flex shrink-0 items-center gap-3">
+          {live ? <Live {...live} /> : null}
+          <PersonMenu name={actor.name} unread={(await seek(unreadNotices, {})) ?? 0} />
+        </div>
       </header>
       {actor.initialPassword ? (
         <p className="m-0 border-b border-close bg-sheet px-3 py-1.5">

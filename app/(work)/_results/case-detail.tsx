@@ -1,4 +1,6 @@
+import { Anchored } from '@/app/(work)/_comments/anchored'
 import type { CaseSeries } from '@/lib/engine/case-result'
+import { printAnchor } from '@/lib/study/anchors/anchor'
 import { caseSentence } from '@/lib/study/words/case-sentence'
 import { Notice } from '@/lib/ui/notice'
 import { CasePlots } from './case-plots'
@@ -29,7 +31,7 @@ export function CaseDetail({ results, caseId, series }: CaseDetailProps) {
     <section id="case" aria-labelledby="case-title" className="flex scroll-mt-4 flex-col gap-3">
       <div>
         <h2 id="case-title" className="m-0 text-title font-semibold">
-          Case {record.tag}
+          <Anchored on={printAnchor({ kind: 'case', caseId })}>Case {record.tag}</Anchored>
         </h2>
         <p className="m-0 max-w-4xl text-soft">
           {caseSentence(record, document)}.{record.reason ? ` ${record.reason}` : ''}
@@ -54,7 +56,7 @@ export function CaseDetail({ results, caseId, series }: CaseDetailProps) {
           <HeatTable results={results} result={result} />
           <ChangeOverTable document={document} result={result} />
           <RunningTable document={document} result={result} />
-          <VoltageTable document={document} places={result.places} />
+          <VoltageTable document={document} caseId={caseId} places={result.places} />
           <FlickerTable document={document} result={result} />
           <SupplyTable document={document} result={result} />
           <RunCounters result={result} engineVersion={summary.engineVersion} />

@@ -38,12 +38,20 @@ function VoltageFigure({ figure, busId }: { figure: CaseFigure; busId: string })
   const values = (figure.result.series.busVoltage[busId] ?? []).map((value) => (100 * value) / nominal)
   const curve = { head: `${busTag(figure.document, busId)}, % of nominal`, values, decimals: 2 }
   return (
-    <Figure scene={voltagePlot(figure, { ...size, busIds: [busId] })} table={sampledTable(timeAxis(figure), [curve])} />
+    <Figure
+      scene={voltagePlot(figure, { ...size, busIds: [busId] })}
+      table={sampledTable(timeAxis(figure), [curve])}
+      anchor={`series/${figure.result.caseId}/voltage/${busId}`}
+    />
   )
 }
 
 const startedIds = ({ result }: CaseFigure): readonly string[] =>
   result.motors.filter(({ start }) => start).map(({ motorId }) => motorId)
+
+/** The curves of what starts are spoken of by the first motor. */
+const curveAnchor = (figure: CaseFigure, curve: 'speed' | 'current'): string =>
+  `series/${figure.result.caseId}/${curve}/${startedIds(figure)[0] ?? ''}`
 
 function SpeedFigure({ figure }: { figure: CaseFigure }) {
   const curves = startedIds(figure).map((id) => ({
@@ -51,7 +59,13 @@ function SpeedFigure({ figure }: { figure: CaseFigure }) {
     values: rpm(figure.result.series.motors[id]?.speed),
     decimals: 1,
   }))
-  return <Figure scene={speedPlot(figure, size)} table={sampledTable(timeAxis(figure), curves)} />
+  return (
+    <Figure
+      scene={speedPlot(figure, size)}
+      table={sampledTable(timeAxis(figure), curves)}
+      anchor={curveAnchor(figure, 'speed')}
+    />
+  )
 }
 
 function CurrentFigure({ figure }: { figure: CaseFigure }) {
@@ -63,7 +77,13 @@ function CurrentFigure({ figure }: { figure: CaseFigure }) {
       { head: `${tag} motor current, A`, values: series?.motorCurrent ?? [], decimals: 1 },
     ]
   })
-  return <Figure scene={currentPlot(figure, size)} table={sampledTable(timeAxis(figure), curves)} />
+  return (
+    <Figure
+      scene={currentPlot(figure, size)}
+      table={sampledTable(timeAxis(figure), curves)}
+      anchor={curveAnchor(figure, 'current')}
+    />
+  )
 }
 
 function TorqueFigure({ figure, motorId }: { figure: CaseFigure; motorId: string }) {

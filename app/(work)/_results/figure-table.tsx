@@ -1,7 +1,10 @@
+import { Anchored } from '@/app/(work)/_comments/anchored'
 import { ScrollRegion } from '@/lib/ui/scroll-region'
 
 export interface FigureRow<Item> {
   label: string
+  /** By which a comment names this figure. */
+  anchor?: (item: Item) => string | undefined
   print: (item: Item) => string
 }
 
@@ -31,14 +34,14 @@ export function FigureTable<Item>({ caption, items, itemId, name, rows }: Figure
           </tr>
         </thead>
         <tbody>
-          {rows.map(({ label, print }) => (
+          {rows.map(({ label, anchor, print }) => (
             <tr key={label}>
               <th scope="row" className="font-normal">
                 {label}
               </th>
               {items.map((item) => (
                 <td key={itemId(item)} className="number">
-                  {print(item)}
+                  <Anchored on={anchor?.(item)}>{print(item)}</Anchored>
                 </td>
               ))}
             </tr>

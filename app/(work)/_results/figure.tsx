@@ -4,9 +4,16 @@ import { ScrollRegion } from '@/lib/ui/scroll-region'
 import type { SampledTable } from './sampled-table'
 
 /** A plot, its words, and the same curves as a table. */
-export function Figure({ scene, table }: { scene: Scene; table: SampledTable }) {
+interface FigureProps {
+  scene: Scene
+  table: SampledTable
+  /** By which a comment names the curve; the instant is asked for. */
+  anchor?: string
+}
+
+export function Figure({ scene, table, anchor }: FigureProps) {
   return (
-    <figure className="m-0 border border-hair bg-sheet p-2">
+    <figure className="m-0 border border-hair bg-sheet p-2" data-anchor={anchor} data-words={scene.title}>
       <figcaption className="px-1 pb-1 font-semibold">{scene.title}</figcaption>
       <ScrollRegion label={`${scene.title}, drawn`}>
         <SceneSvg scene={scene} className="block min-w-116" />

@@ -1,4 +1,6 @@
+import { Anchored } from '@/app/(work)/_comments/anchored'
 import type { Verdict as VerdictRow } from '@/lib/engine/criteria/rule'
+import { printAnchor } from '@/lib/study/anchors/anchor'
 import type { LimitRecord } from '@/lib/study/document/limit-record'
 import { caseSentence } from '@/lib/study/words/case-sentence'
 import { formatVerdict } from '@/lib/study/words/format-verdict'
@@ -61,7 +63,9 @@ export function LimitsMatrix({ results }: { results: Results }) {
                       key={record.id}
                       className={governs ? 'bg-tint outline-2 -outline-offset-2 outline-ink' : undefined}
                     >
-                      {row ? <Cell results={results} rule={rule} row={row} governs={governs} /> : <NotApplicable />}
+                      <Anchored on={printAnchor({ kind: 'verdict', limitId: rule.id, caseId: record.id })}>
+                        {row ? <Cell results={results} rule={rule} row={row} governs={governs} /> : <NotApplicable />}
+                      </Anchored>
                     </td>
                   )
                 })}

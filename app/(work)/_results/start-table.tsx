@@ -1,6 +1,7 @@
 import type { StartResult } from '@/lib/engine/case-result'
 import type { DirectStartPeaks } from '@/lib/engine/direct-start-peaks'
 import { formatNumber } from '@/lib/quantity/format-number'
+import { printAnchor, type StartFigure } from '@/lib/study/anchors/anchor'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import type { CaseSummary } from '@/lib/study/summary'
 import { type Range, type VariantRange, variantRanges } from '@/lib/study/variant-ranges'
@@ -16,6 +17,8 @@ interface Item {
   motorId: string
   /** Which attempt, from 1; null where there was one only. */
   attempt: number | null
+  /** Whether it is the start that counts. */
+  last: boolean
   start: StartResult
   ratedVoltage: number
 }
@@ -29,7 +32,13 @@ const dutyWords = {
   none: '–',
 }
 
-const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
+/** The start that counts is spoken of; earlier attempts are not. */
+const spokenOf =
+  (caseId: string, figure: StartFigure) =>
+  ({ motorId, last }: Item): string | undefined =>
+    last ? printAnchor({ kind: 'start', caseId, motorId, figure }) : undefined
+
+const rowsFor = (document: StudyDocument, caseId: string): readonly FigureRow<Item>[] => [
   { label: 'Outcome', print: ({ start }) => startOutcomeWords[start.outcome.kind] },
   { label: 'Switched on, from the beginning of the schedule', print: ({ start }) => seconds(start.switchedOnAt) },
   {
@@ -51,6 +60,7 @@ const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
   { label: 'Torque at standstill', print: ({ start }) => torque(start.standstill.torque) },
   {
     label: 'Largest line current',
+    anchor: spokenOf(caseId, 'line-current'),
     print: ({ start }) => `${current(start.peakLineCurrent.current)} at ${seconds(start.peakLineCurrent.at)}`,
   },
   {
@@ -64,12 +74,14 @@ const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
   },
   {
     label: 'Least accelerating torque to 95 % of rated speed',
+    anchor: spokenOf(caseId, 'accelerating-torque'),
     print: ({ start }) =>
       `${torque(start.leastAccelerating.torque)}, ${percent(start.leastAccelerating.ofRated, 1)} of rated, at ${speed(start.leastAccelerating.speed)}`,
   },
   { label: 'Time to 95 % of rated speed, from switching on', print: ({ start }) => orDash(start.timeTo95, seconds) },
   {
     label: `Time to ${document.settings.speedCriterion.text} of rated speed, from switching on`,
+    anchor: spokenOf(caseId, 'run-up-time'),
     print: ({ start }) => orDash(start.timeToCriterion, seconds),
   },
   {
@@ -94,6 +106,7 @@ const rowsFor = (document: StudyDocument): readonly FigureRow<Item>[] => [
   },
   {
     label: `Heat used, the larger, ${document.settings.thermalState}`,
+    anchor: spokenOf(caseId, 'heat-used'),
     print: ({ start }) => orDash(start.heatUsed.figure, (value) => percent(value, 1)),
   },
 ]
@@ -146,6 +159,7 @@ export function StartTable({ document, result }: { document: StudyDocument; resu
       key: `${motorId}-${i}`,
       motorId,
       attempt: all.length > 1 ? i + 1 : null,
+      last: i === all.length - 1 && start !== null,
       start: each,
       ratedVoltage,
       // Variants tell of the last attempt.
@@ -160,7 +174,7 @@ export function StartTable({ document, result }: { document: StudyDocument; resu
       itemId={({ key }) => key}
       name={({ motorId, attempt }) => `${motorTag(document, motorId)}${attempt === null ? '' : `, attempt ${attempt}`}`}
       rows={[
-        ...rowsFor(document),
+        ...rowsFor(document, result.caseId),
         ...(items.some(({ ranges }) => ranges.length > 0) ? rangeRows : []),
         ...(items.some(({ peaks }) => peaks) ? peakRows : []),
       ]}

@@ -1,5 +1,7 @@
+import { Anchored } from '@/app/(work)/_comments/anchored'
 import type { PlaceResult } from '@/lib/engine/case-result'
 import type { RuleInstant } from '@/lib/engine/criteria/rule'
+import { printAnchor } from '@/lib/study/anchors/anchor'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import { relativeVoltage, voltageAt } from '@/lib/study/voltage-change'
 import { changeReferenceNames, instantNames } from '@/lib/study/words/quantity-words'
@@ -11,7 +13,13 @@ const instants: readonly RuleInstant[] = ['first', 'deepest', 'settled-after-sta
 const references = ['change-of-before', 'change-of-nominal', 'remaining-of-nominal'] as const
 
 /** Every place at every instant, against each of the three references. */
-export function VoltageTable({ document, places }: { document: StudyDocument; places: readonly PlaceResult[] }) {
+interface VoltageTableProps {
+  document: StudyDocument
+  caseId: string
+  places: readonly PlaceResult[]
+}
+
+export function VoltageTable({ document, caseId, places }: VoltageTableProps) {
   return (
     <ScrollRegion label="Voltages" className="w-fit max-w-full border border-hair bg-sheet">
       <table className="dense">
@@ -41,14 +49,18 @@ export function VoltageTable({ document, places }: { document: StudyDocument; pl
                 <span className="block font-normal text-soft">nominal {voltage(place.nominal)}</span>
               </th>
               <td>before the start</td>
-              <td className="number">{voltage(place.before)}</td>
+              <td className="number">
+                <Anchored on={printAnchor({ kind: 'voltage', caseId, busId: place.busId, instant: 'before' })}>
+                  {voltage(place.before)}
+                </Anchored>
+              </td>
               <td className="number">–</td>
               <td className="number">–</td>
               <td className="number">{percent(place.before / place.nominal)}</td>
               <td className="number">–</td>
             </tr>
             {instants.map((instant) => (
-              <Row key={instant} place={place} instant={instant} />
+              <Row key={instant} caseId={caseId} place={place} instant={instant} />
             ))}
           </tbody>
         ))}
@@ -57,7 +69,7 @@ export function VoltageTable({ document, places }: { document: StudyDocument; pl
   )
 }
 
-function Row({ place, instant }: { place: PlaceResult; instant: RuleInstant }) {
+function Row({ caseId, place, instant }: { caseId: string; place: PlaceResult; instant: RuleInstant }) {
   const found = voltageAt(place, instant)
   const strong = instant === 'deepest' ? 'number font-semibold' : 'number'
   if (!found)
@@ -72,7 +84,11 @@ function Row({ place, instant }: { place: PlaceResult; instant: RuleInstant }) {
   return (
     <tr>
       <td>{instantNames[instant]}</td>
-      <td className={strong}>{voltage(found.voltage)}</td>
+      <td className={strong}>
+        <Anchored on={printAnchor({ kind: 'voltage', caseId, busId: place.busId, instant })}>
+          {voltage(found.voltage)}
+        </Anchored>
+      </td>
       {references.map((reference) => (
         <td key={reference} className={strong}>
           {percent(relativeVoltage(place, found.voltage, reference))}

@@ -3,9 +3,17 @@ import type { RevisionAction } from '@/lib/policy/action'
 import * as actions from './actions'
 import { Decision, type DecisionWords } from './decision'
 
-type Decided = Exclude<
+type Decided = Extract<
   RevisionAction,
-  `sign-${string}` | 'read-revision' | 'download-report' | 'comment' | 'share-report' | 'end-share'
+  | 'send-for-check'
+  | 'accept-check'
+  | 'reject-check'
+  | 'accept-review'
+  | 'reject-review'
+  | 'close-review'
+  | 'back-to-draft'
+  | 'issue'
+  | 'withdraw'
 >
 
 interface Offer extends DecisionWords {

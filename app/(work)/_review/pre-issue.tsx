@@ -1,29 +1,8 @@
-interface Check {
-  id: string
-  sentence: string
-  passed: boolean
-  issues: readonly { message: string }[]
-}
-
-const isRecord = (value: unknown): value is Record<string, unknown> => typeof value === 'object' && value !== null
-
-/** The checks as they were kept with the revision; what has another form is left out. */
-const readChecks = (kept: unknown): readonly Check[] => {
-  const list = isRecord(kept) && Array.isArray(kept.checks) ? kept.checks : []
-  return list
-    .filter(isRecord)
-    .flatMap(({ id, sentence, passed, issues }) =>
-      typeof id === 'string' && typeof sentence === 'string' && typeof passed === 'boolean'
-        ? [{ id, sentence, passed, issues: (Array.isArray(issues) ? issues : []).filter(isIssue) }]
-        : [],
-    )
-}
-
-const isIssue = (value: unknown): value is { message: string } => isRecord(value) && typeof value.message === 'string'
+import { Anchored } from '@/app/(work)/_comments/anchored'
+import type { KeptCheck } from '@/lib/server/revisions/kept-checks'
 
 /** What reviewers always ask, asked before they do. */
-export function PreIssueChecks({ kept }: { kept: unknown }) {
-  const checks = readChecks(kept)
+export function PreIssueChecks({ checks }: { checks: readonly KeptCheck[] }) {
   if (checks.length === 0) return null
   const open = checks.filter(({ passed }) => !passed)
   const passed = checks.filter((check) => check.passed)
@@ -37,7 +16,8 @@ export function PreIssueChecks({ kept }: { kept: unknown }) {
           <li key={id} className="border-b border-hair px-3 py-1.5">
             <details>
               <summary>
-                <span className="font-semibold text-close">to answer</span> {sentence}
+                <span className="font-semibold text-close">to answer</span>{' '}
+                <Anchored on={`check/${id}`}>{sentence}</Anchored>
                 {issues.length > 1 ? <span className="text-soft"> ({issues.length})</span> : null}
               </summary>
               <ul className="m-0 list-disc pl-8 text-dense text-soft">

@@ -49,5 +49,39 @@ export const decisions: Section = (context) => {
             ]),
           }),
         ]),
+    ...commentSheet(context),
+  ]
+}
+
+/** Every comment with its answer, in the order of their numbers; left out where the report was made without a review. */
+const commentSheet: Section = (context) => {
+  const { paper, input, words, width } = context
+  const { decisions: say } = words.results
+  const { comments } = input.revision
+  if (!comments) return []
+  const signed = (who: string, at: string): string => `${who}, ${printInstant(at, words)}`
+  return [
+    subsection(context, 'comments', say.comments),
+    ...(comments.length === 0
+      ? paragraph(paper, say.noComments, { width })
+      : [
+          dataTable(paper, {
+            width,
+            columns: [
+              { head: say.commentHeads.number, width: 0.3 },
+              { head: say.commentHeads.about, width: 1.1 },
+              { head: say.commentHeads.text, width: 1.7 },
+              { head: say.commentHeads.answer, width: 1.7 },
+              { head: say.commentHeads.state, width: 0.6 },
+            ],
+            rows: comments.map(({ number, about, kind, text, who, at, thread, state }) => [
+              String(number),
+              about,
+              `${kind}: ${text} (${signed(who, at)})`,
+              thread.map((one) => `${one.what}: ${one.text} (${signed(one.who, one.at)})`).join(' ') || '–',
+              state,
+            ]),
+          }),
+        ]),
   ]
 }

@@ -3,6 +3,8 @@ import type { CaseResult, CaseSeries } from '@/lib/engine/case-result'
 import type { ReportDecision, ReportInput, RevisionTableRow } from '@/lib/report/report-input'
 import { readFrozenStudy } from '@/lib/study/read/read-frozen-study'
 import type { Tx } from '../db'
+import { commentSheetOf } from '../reviews/comment-sheet'
+import { waiversOf } from '../reviews/waive'
 import { revisionState } from '../revisions/subject'
 import { unpackSeries } from '../series'
 import { loadSummary } from '../studies/run-state'
@@ -49,7 +51,8 @@ export async function reportInputOf(tx: Tx, revisionId: string, draft: boolean):
         const what = decisionWords[move]
         return what ? [{ what, who: personName, at: at.toISOString(), note }] : []
       }),
-      waivers: [],
+      waivers: await waiversOf(tx, revisionId),
+      comments: await commentSheetOf(tx, revisionId),
     },
     draft,
   }

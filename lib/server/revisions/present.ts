@@ -20,7 +20,7 @@ export async function presentRevision(
   const row = await tx.revision.findFirstOrThrow({
     where: { id: revisionId },
     include: {
-      study: { select: { title: true, documentNumber: true } },
+      study: { select: { title: true, documentNumber: true, project: { select: { sequence: true } } } },
       run: { select: { id: true, result: true } },
       decisions: { orderBy: { at: 'asc' } },
       rounds: { where: { endedAt: null }, include: { signoffs: { orderBy: { at: 'asc' } } } },
@@ -33,6 +33,7 @@ export async function presentRevision(
   })
   const { report, renderState, renderFailure } = await currentReport(tx, row.id)
   return {
+    sequence: row.study.project.sequence,
     revisionId: row.id,
     studyId: row.studyId,
     projectId: row.projectId,

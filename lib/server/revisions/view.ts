@@ -47,6 +47,8 @@ export interface Moved {
 
 /** A frozen revision as its page shows it. */
 export interface RevisionView {
+  /** Place in the project's chain of events that this view stands at; whoever follows starts from here. */
+  sequence: number
   revisionId: string
   studyId: string
   projectId: string

@@ -35,6 +35,7 @@ export const studyView = query({
     const newest = revisions[0]
     const input = document ? await inputHashIfAny(document) : null
     return {
+      sequence: project.sequence,
       studyId,
       projectId: study.projectId,
       organisationId: place.organisationId,

@@ -36,6 +36,8 @@ export interface RevisionLine {
 
 /** A study in work as its pages show it. */
 export interface StudyView {
+  /** Place in the project's chain of events that this view stands at; whoever follows starts from here. */
+  sequence: number
   studyId: string
   projectId: string
   organisationId: string

@@ -2,6 +2,7 @@ import type * as z from 'zod'
 import { DomainError } from '@/lib/errors'
 import type { Actor } from '@/lib/server/actor'
 import { type Database, database } from '@/lib/server/db'
+import { livePlace } from '@/lib/server/live/queries'
 import { createProject } from '@/lib/server/people/commands'
 import { inviteMember, withdrawInvitation } from '@/lib/server/people/invite'
 import { changeMember } from '@/lib/server/people/member-commands'
@@ -10,6 +11,8 @@ import { type Command, perform } from '@/lib/server/perform'
 import { addRecord, changeRecord, removeRecord } from '@/lib/server/plants/commands'
 import { plantRecords } from '@/lib/server/plants/queries'
 import { type Query, read } from '@/lib/server/read'
+import * as reviews from '@/lib/server/reviews/commands'
+import * as reviewQueries from '@/lib/server/reviews/queries'
 import * as revisions from '@/lib/server/revisions/commands'
 import * as revisionQueries from '@/lib/server/revisions/queries'
 import { endShare, shareReport } from '@/lib/server/share/commands'
@@ -99,6 +102,10 @@ const ofProject = ({ projectId }: Place) => ({ projectId })
 const ofStudy = ({ studyId }: Place) => ({ studyId })
 const ofRevision = ({ revisionId }: Place) => ({ revisionId })
 const reason = 'Tried by a test.'
+/** A comment that is not there: its absence is told after policy has been asked. */
+const ofNothing =
+  (more: object) =>
+  ({ revisionId }: Place) => ({ revisionId, commentId: 'none', ...more })
 
 /** What concerns the live records and the people of a project, whatever state a revision is in. */
 export const liveAttempts: readonly Attempt[] = [
@@ -110,6 +117,7 @@ export const liveAttempts: readonly Attempt[] = [
   does('withdrawInvitation', withdrawInvitation, ({ projectId }) => ({ projectId, invitationId: 'none' })),
   does('changeMember', changeMember, ({ projectId }) => ({ projectId, userId: 'demo-obede', roles: ['engineer'] })),
   asks('projectMembers', projectMembers, ofProject),
+  asks('livePlace', livePlace, ofProject),
   asks('plantRecords', plantRecords, ofProject),
   does('addRecord', addRecord, ({ projectId }) => ({ projectId, kind: 'bus', values: {} })),
   does('changeRecord', changeRecord, ({ projectId }) => ({ projectId, ...bus, values: {} })),
@@ -135,6 +143,18 @@ export const revisionAttempts: readonly Attempt[] = [
   asks('revisionView', revisionQueries.revisionView, ofRevision),
   asks('revisionDocument', revisionQueries.revisionDocument, ofRevision),
   asks('revisionSeries', revisionQueries.revisionSeries, ({ revisionId }) => ({ revisionId, caseId: 'none' })),
+  asks('revisionComments', reviewQueries.revisionComments, ofRevision),
+  asks('inputTicks', reviewQueries.inputTicks, ofRevision),
+  does('addComment', reviews.addComment, ({ revisionId }) => {
+    return { revisionId, anchor: 'revision', kind: 'question', text: 'Is this so?' }
+  }),
+  does('respondToComment', reviews.respondToComment, ofNothing({ response: 'accepted', text: 'Done.' })),
+  does('replyToComment', reviews.replyToComment, ofNothing({ text: 'And this?' })),
+  does('closeComment', reviews.closeComment, ofNothing({})),
+  does('reopenComment', reviews.reopenComment, ofNothing({})),
+  does('waive', reviews.waive, ({ revisionId }) => ({ revisionId, kind: 'check', subjectId: 'none', reason })),
+  does('tickInput', reviews.tickInput, ({ revisionId }) => ({ revisionId, anchor: 'revision', ticked: false })),
+  does('readNotices', reviews.readNotices, ofRevision),
   does('sendForCheck', revisions.sendForCheck, ofRevision),
   does('decideCheck yes', revisions.decideCheck, ({ revisionId }) => ({ revisionId, accepted: true })),
   does('decideCheck no', revisions.decideCheck, ({ revisionId }) => ({ revisionId, accepted: false, note: reason })),

@@ -1,5 +1,7 @@
 import { perform } from '@/lib/server/perform'
 import { read } from '@/lib/server/read'
+import { waive } from '@/lib/server/reviews/commands'
+import { revisionComments } from '@/lib/server/reviews/queries'
 import { closeReview, decideCheck, decideReview, freezeRevision, sendForCheck } from '@/lib/server/revisions/commands'
 import { revisionView } from '@/lib/server/revisions/queries'
 import { studyView } from '@/lib/server/studies/queries'
@@ -14,6 +16,14 @@ export const computed = () =>
     ({ run }) => run.state === 'done' || run.state === 'failed',
   )
 
+/** The approver waives whatever holds up the closing of a review. */
+export async function waiveAll(revisionId: string): Promise<void> {
+  const { holdUps } = await read(revisionComments, actorAs('approver'), { revisionId })
+  for (const { kind, subjectId } of holdUps) {
+    await perform(waive, actorAs('approver'), { revisionId, kind, subjectId, reason: 'Known, and agreed.' })
+  }
+}
+
 /** Waits until a worker has rendered the final report, with which the signing begins. */
 export const signingBegun = (revisionId: string) =>
   until(
@@ -27,6 +37,7 @@ export async function bringToSigning(): Promise<string> {
   await perform(sendForCheck, actorAs('engineer'), { revisionId })
   await perform(decideCheck, actorAs('checker'), { revisionId, accepted: true })
   await perform(decideReview, actorAs('approver'), { revisionId, accepted: true })
+  await waiveAll(revisionId)
   await perform(closeReview, actorAs('approver'), { revisionId, purpose: 'For approval by the utility' })
   await signingBegun(revisionId)
   return revisionId

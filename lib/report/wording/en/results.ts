@@ -206,6 +206,9 @@ export const results = {
     noDecisions: 'No decision is recorded for this revision.',
     noWaivers: 'No waiver and no deviation is recorded: every limit stands as written.',
     heads: { what: 'Decision', who: 'By', at: 'On', note: 'Note' },
+    comments: 'Comment sheet',
+    noComments: 'No comment was made on this revision.',
+    commentHeads: { number: 'No.', about: 'On', text: 'Comment', answer: 'Answer', state: 'State' },
     waiverHeads: { limit: 'Limit', what: 'Waiver or deviation', reason: 'Reason', who: 'Accepted by', at: 'On' },
   },
 }

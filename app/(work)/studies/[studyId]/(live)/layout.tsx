@@ -17,6 +17,7 @@ export default async function StudyLayout({ params, children }: LayoutProps<'/st
       ]}
       places={<PlaceList label="Places of the study" places={studyPlaces(projectId, studyId)} />}
       cells={studyTitleCells(study)}
+      live={{ projectId, after: study.sequence, where: `study/${studyId}` }}
     >
       {children}
     </WorkFrame>

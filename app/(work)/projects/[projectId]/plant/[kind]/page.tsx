@@ -46,6 +46,7 @@ export default async function PlantPage({ params, searchParams }: PageProps<'/pr
       path={path}
       places={<PlantPlaces projectId={projectId} studyId={studyId} rows={rows} />}
       cells={study ? studyTitleCells(study) : undefined}
+      live={study ? { projectId, after: study.sequence, where: `study/${study.studyId}` } : undefined}
     >
       <Suspense>
         <RecordWorkspace
