@@ -2,7 +2,7 @@ import fs from 'node:fs'
 import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { atAnotherDesk, signIn } from './pages/session'
-import { computeCases, decide, openStudy, sign } from './pages/study'
+import { computeCases, decide, openStudy, sign, waiveAll } from './pages/study'
 import { person } from './support/people'
 import { expect, test } from './support/test'
 
@@ -48,6 +48,7 @@ test('an engineer computes, three people sign, the client downloads and anyone v
     await decide(checker, 'Accept check', { label: 'Note', text: 'Inputs ticked against letter OR-1147.' })
     await approver.goto(revision)
     await decide(approver, 'Accept review')
+    await waiveAll(approver)
     await decide(approver, 'Close review', { label: 'Purpose of issue', text: 'For approval by the utility' })
     await expect(approver.getByText('The report is being rendered')).toBeVisible()
     await expect(approver.getByText('The report is being rendered')).toBeHidden({ timeout: 90_000 })

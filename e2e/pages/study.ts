@@ -30,6 +30,22 @@ export async function decide(page: Page, verb: string, field?: { label: string; 
   await expect(dialog).toBeHidden()
 }
 
+/** Waives whatever holds up the closing of the review, each with a reason. */
+export async function waiveAll(page: Page): Promise<void> {
+  const holdUps = page.getByRole('region', { name: 'Before the review is closed' })
+  await expect(holdUps).toBeVisible()
+  for (;;) {
+    const left = await holdUps.getByRole('button', { name: 'Waive' }).count()
+    if (left === 0) return
+    await holdUps.getByRole('button', { name: 'Waive' }).first().click()
+    const dialog = page.getByRole('alertdialog')
+    await dialog.getByLabel('Reason').fill('Known, and agreed with the utility.')
+    await dialog.getByRole('button', { name: 'Waive' }).click()
+    await expect(dialog).toBeHidden()
+    await expect(holdUps.getByRole('button', { name: 'Waive' })).toHaveCount(left - 1)
+  }
+}
+
 /** Signs with the person's key file and passphrase, in this browser. */
 export async function sign(page: Page, name: string, label: string): Promise<void> {
   const { passphrase, keyFile } = person(name)

@@ -81,6 +81,7 @@ inviteMember        s
 withdrawInvitation  s
 changeMember        s
 projectMembers      PCAs
+livePlace           PCAmls
 plantRecords        PCAs
 addRecord           P
 changeRecord        P
@@ -129,6 +130,16 @@ freezeRevision      P
 revisionView        PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAmls    PCAmls
 revisionDocument    PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAmls    PCAmls
 revisionSeries      PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAmls    PCAmls
+revisionComments    PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms
+inputTicks          PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms
+addComment          -         PC        PCAm      PCAm      -         -         -         -         -         -
+respondToComment    PCA       PCA       PCA       PCA       -         -         -         -         -         -
+replyToComment      -         PC        PCAm      PCAm      -         -         -         -         -         -
+closeComment        PCAs      PCAs      PCAms     PCAms     -         -         -         -         -         -
+reopenComment       PCAs      PCAs      PCAms     PCAms     -         -         -         -         -         -
+waive               -         -         A         A         -         -         -         -         -         -
+tickInput           -         C         -         -         -         -         -         -         -         -
+readNotices         PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms
 sendForCheck        P         -         -         -         -         -         -         -         -         -
 decideCheck yes     -         C         -         -         -         -         -         -         -         -
 decideCheck no      -         C         -         -         -         -         -         -         -         -

@@ -43,7 +43,7 @@ beforeAll(async () => {
 
 /** An open invitation, and a share link with a download behind it. */
 async function withLinks(revisionId: string) {
-  const { organisationId, projectId } = demo
+  const { organisationId, projectId, studyId } = demo
   const invited = { projectId, name: 'N. Newcomer', email: 'n@newcomers.example', guest: false }
   await perform(inviteMember, actorAs('administrator'), { ...invited, roles: ['engineer'] })
   await database().$transaction(async (tx) => {
@@ -51,6 +51,15 @@ async function withLinks(revisionId: string) {
     const by = { createdById: 'demo-tharow', createdByName: 'S. Tharow', createdAt: now() }
     const link = { organisationId, id: 'link', revisionId, tokenHash: 'a hash', recipient: 'the client', ...by }
     await tx.shareLink.create({ data: { ...link, expiresAt: now() } })
+    const comment = { organisationId, projectId, studyId, revisionId, id: 'comment', number: 1, anchor: 'revision' }
+    const said = { anchorLabel: 'The revision as a whole', kind: 'question', text: 'Why?', state: 'open' }
+    await tx.comment.create({ data: { ...comment, ...said, authorId: 'a', authorName: 'A', at: now() } })
+    const below = { organisationId, commentId: 'comment', id: 'below', at: now() }
+    const entry = { kind: 'reply', text: 'Because.', position: 1, authorId: 'a', authorName: 'A' }
+    await tx.commentEntry.create({ data: { ...below, ...entry } })
+    await tx.notice.create({ data: { ...below, userId: 'a', revisionId, kind: 'reply', byName: 'A', excerpt: '' } })
+    const tick = { organisationId, revisionId, anchor: 'record/motors/m1/poles', value: '4' }
+    await tx.inputTick.create({ data: { ...tick, personId: 'a', personName: 'A', at: now() } })
     await tx.shareDownload.create({ data: { organisationId, id: 'download', linkId: 'link', at: now(), sha256: '' } })
   })
 }

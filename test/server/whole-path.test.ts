@@ -227,6 +227,7 @@ describe.sequential('from records to an issued report', () => {
     await perform(sendForCheck, lindqvar, { revisionId: next.revisionId })
     await perform(decideCheck, obede, { revisionId: next.revisionId, accepted: true })
     await perform(decideReview, tharow, { revisionId: next.revisionId, accepted: true })
+    await waiveAll(next.revisionId)
     await perform(closeReview, tharow, { revisionId: next.revisionId, purpose: 'For construction' })
     await signingBegun(next.revisionId)
     await signAs(lindqvar, next.revisionId, 'prepared', await keyOf('engineer'))

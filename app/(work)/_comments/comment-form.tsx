@@ -1,6 +1,6 @@
 'use client'
 
-import { type FormEvent, useCallback, useId, useState } from 'react'
+import { type FormEvent, useCallback, useId, useRef, useState } from 'react'
 import { answered, type Refusal } from '@/app/_action/outcome'
 import type { Participant } from '@/lib/study/review-view'
 import { type CommentClass, commentClasses } from '@/lib/study/review-words'
@@ -46,11 +46,12 @@ export function CommentForm({ revisionId, people, groups, onMade }: CommentFormP
   const [busy, setBusy] = useState(false)
   const [refusal, setRefusal] = useState<Refusal | null>(null)
   const hint = useId()
+  const written = useRef<HTMLTextAreaElement>(null)
   const choose = useCallback((chosen: string, words: string) => {
     setPointed({ anchor: chosen, words })
     setAnchor(chosen)
     setPointing(false)
-    document.getElementById('comment-text')?.focus()
+    written.current?.focus()
   }, [])
   const giveUp = useCallback(() => setPointing(false), [])
   usePointing(pointing, choose, giveUp)
@@ -68,6 +69,7 @@ export function CommentForm({ revisionId, people, groups, onMade }: CommentFormP
     setText('')
     setPointed(null)
     setAnchor('revision')
+    setKind('question')
     setDueOn('')
     setAssigneeId('')
     onMade()
@@ -155,7 +157,7 @@ export function CommentForm({ revisionId, people, groups, onMade }: CommentFormP
         {(control) => (
           <textarea
             {...control}
-            id="comment-text"
+            ref={written}
             className="control"
             rows={3}
             value={text}

@@ -5,6 +5,7 @@ import { useEffect, useRef, useState } from 'react'
 import { follow, type Other } from './follow'
 import { tellHappened } from './happened'
 import { happenedSentence } from './happened-words'
+import { whenOnline } from './when-online'
 
 export interface LiveProps {
   projectId: string
@@ -36,7 +37,7 @@ export function Live({ projectId, after, where }: LiveProps) {
     let timer: ReturnType<typeof setTimeout> | undefined
     const refresh = () => {
       clearTimeout(timer)
-      timer = setTimeout(() => router.refresh(), gather)
+      timer = setTimeout(() => whenOnline(() => router.refresh()), gather)
     }
     const end = follow({
       projectId,
