@@ -57,6 +57,11 @@ export async function enterAsJob(tx: Tx, organisationId: string): Promise<void> 
   await setFor.org(tx, organisationId)
 }
 
+/** Looks at what a person belongs to, for a command of the console: no organisation is entered. */
+export async function enterAsPerson(tx: Tx, userId: string): Promise<void> {
+  await setFor.user(tx, userId)
+}
+
 /** Lets whoever founds an organisation into it, before anybody has a part in it. */
 export async function enterAsFounder(tx: Tx, organisationId: string): Promise<void> {
   await setFor.org(tx, organisationId)

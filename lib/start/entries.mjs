@@ -14,6 +14,7 @@ export const entries = {
   study: 'lib/cli/main.ts',
   bench: 'lib/cli/bench.ts',
   seed: 'prisma/seed.ts',
+  audit: 'lib/server/console/audit/main.ts',
   queues: 'lib/server/console/install-queues.ts',
 }
 

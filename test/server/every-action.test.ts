@@ -82,6 +82,7 @@ withdrawInvitation  s
 changeMember        s
 projectMembers      PCAs
 livePlace           PCAmls
+projectTimeline     PCAs
 plantRecords        PCAs
 addRecord           P
 changeRecord        P
@@ -181,7 +182,7 @@ shareLinks          -         -         -         -         -         -         
 
 test('every command and query of the server is tried here', async () => {
   const files = import.meta.glob(
-    '/lib/server/{live,people,plants,reviews,studies,revisions,share,signoff}/*{commands,queries,invite}.ts',
+    '/lib/server/{live,people,plants,reviews,studies,timeline,revisions,share,signoff}/*{commands,queries,invite}.ts',
     { eager: true },
   )
   const isAction = (one: unknown) => typeof one === 'object' && one !== null && 'scope' in one && 'may' in one

@@ -25,9 +25,14 @@ export function ProjectSheet({ project, userId }: { project: ProjectLine; userId
         </h2>
         <span className="flex gap-4">
           {team ? (
-            <Link prefetch={false} href={`/projects/${projectId}/members`} className="link">
-              Members
-            </Link>
+            <>
+              <Link prefetch={false} href={`/projects/${projectId}/members`} className="link">
+                Members
+              </Link>
+              <Link prefetch={false} href={`/projects/${projectId}/timeline`} className="link">
+                Timeline
+              </Link>
+            </>
           ) : null}
           {can(actor, 'read-plant').allowed ? (
             <Link prefetch={false} href={`/projects/${projectId}/plant/bus`} className="link">

@@ -1,4 +1,4 @@
-import { chainStart, eventHash } from '@/lib/server/audit'
+import { chainBreak } from '@/lib/server/chain-break'
 import type { Tx } from '@/lib/server/db'
 import { enterAsJob } from '@/lib/server/enter'
 import { demo } from '@/prisma/seed/seed-demo'
@@ -14,11 +14,5 @@ export async function chainOf(tx: Tx) {
 /** Where the demo project's chain breaks: the first sequence that does not follow from what stands before it; null if it holds. */
 export async function breakOf(tx: Tx): Promise<number | null> {
   const { events, head } = await chainOf(tx)
-  let previousHash = chainStart
-  for (const [index, event] of events.entries()) {
-    const follows = event.sequence === index + 1 && event.previousHash === previousHash
-    if (!follows || event.hash !== eventHash(event)) return index + 1
-    previousHash = event.hash
-  }
-  return head.sequence === events.length && head.auditHash === previousHash ? null : events.length + 1
+  return chainBreak(events, head)
 }

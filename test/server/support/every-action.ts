@@ -20,6 +20,7 @@ import { shareLinks } from '@/lib/server/share/queries'
 import { completeSignature, prepareSignature } from '@/lib/server/signoff/commands'
 import * as studies from '@/lib/server/studies/commands'
 import * as studyQueries from '@/lib/server/studies/queries'
+import { projectTimeline } from '@/lib/server/timeline/queries'
 
 /** What the actions are tried on. */
 export interface Place {
@@ -118,6 +119,7 @@ export const liveAttempts: readonly Attempt[] = [
   does('changeMember', changeMember, ({ projectId }) => ({ projectId, userId: 'demo-obede', roles: ['engineer'] })),
   asks('projectMembers', projectMembers, ofProject),
   asks('livePlace', livePlace, ofProject),
+  asks('projectTimeline', projectTimeline, ofProject),
   asks('plantRecords', plantRecords, ofProject),
   does('addRecord', addRecord, ({ projectId }) => ({ projectId, kind: 'bus', values: {} })),
   does('changeRecord', changeRecord, ({ projectId }) => ({ projectId, ...bus, values: {} })),

@@ -98,4 +98,6 @@ test('a checker points at a number, the preparer sees it at once and answers, th
     for (const error of consoleErrors.splice(0)) expect(error).toContain('ERR_INTERNET_DISCONNECTED')
   })
   await checker.context().close()
+  await decide(page, 'Take back to draft', { label: 'Reason', text: 'The walk ends here.' })
+  await expect(page.getByText('taken back to draft')).toBeVisible()
 })
