@@ -28,6 +28,9 @@ async function addressesOf(page: Page): Promise<string[]> {
   return [
     '/projects',
     '/profile',
+    '/inbox',
+    plant.replace(/plant$/, 'members'),
+    plant.replace(/plant$/, 'timeline'),
     ...['bus', 'supply', 'motor', 'driven-load'].map((kind) => `${plant}/${kind}`),
     ...parts.map((part) => `${study}/${part}`),
   ]
