@@ -30,11 +30,7 @@ test('an engineer computes, three people sign, the client downloads and anyone v
   await test.step('the preparer freezes a revision and sends it for check', async () => {
     await page.goto(`${study}/review`)
     await decide(page, 'Freeze revision', { label: 'What this revision is about', text: 'First issue.' })
-    await page
-      .getByRole('row')
-      .nth(1)
-      .getByRole('link')
-      .click()
+    await page.getByRole('row').nth(1).getByRole('link').click()
     await page.waitForURL(/\/revisions\//)
     revision = new URL(page.url()).pathname
     await decide(page, 'Send for check')
