@@ -7,6 +7,7 @@ import { runDocument } from '../study/run-document'
 import { ampere, hertz, kilogramSquareMetre, newtonMetre, volt, watt } from '../units/si'
 import { fromRpm } from '../units/speed'
 import { type Figure, figure } from './figure'
+import { largePlant } from './large-plant'
 import { plainRunUp } from './plain-run-up'
 import { speedCase } from './speed-case'
 import { timeOf } from './timing'
@@ -56,6 +57,27 @@ const withTransients = (): Figure[] => {
   ]
 }
 
+/** How the time of a re-acceleration grows with buses and motors: everything fails for 0.3 s and comes back together. */
+const growth = (): Figure[] =>
+  [
+    [50, 5],
+    [100, 10],
+    [200, 10],
+    [200, 40],
+    [500, 10],
+    [500, 50],
+  ].flatMap(([buses = 0, motors = 0]) => {
+    const input = largePlant(buses, motors, true)
+    const { counters, outcome } = runCase(input)
+    if (outcome.kind !== 'complete') throw new Error(`the plant of ${buses} buses was not computed`)
+    const { microseconds } = timeOf(() => runCase(input), patience)
+    const name = `re-acceleration, ${buses} buses, ${motors} motors`
+    return [
+      figure(`${name}: time`, microseconds / 1000, 'ms'),
+      figure(`${name}: evaluations`, counters.evaluations, '1'),
+    ]
+  })
+
 /** Run-ups of the speed case, the same written by hand, one estimate and a whole study. */
 export const benchEngine = (study: StudyDocument): Figure[] => {
   const alone = runUp('run-up, one motor', 0)
@@ -71,6 +93,7 @@ export const benchEngine = (study: StudyDocument): Figure[] => {
     figure('run-up, one motor: engine over hand-written loop', (alone[0]?.value ?? Number.NaN) / plain, '1'),
     ...runUp('run-up, two more motors running', 2),
     ...withTransients(),
+    ...growth(),
     figure('estimate of a circuit from a nameplate', estimate, 'µs'),
     figure('demo study: time of all cases', whole, 'ms'),
     figure('demo study: cases', cases.length, '1'),

@@ -23,7 +23,7 @@ const byRatio = (size: number, xOverR: number): Complex<Ohm> => {
 }
 
 /** A 1500 kW pump motor of four poles with a double cage, started or running, scaled in power. */
-function motor(id: string, busId: string, share: number, running: boolean): MotorInput {
+export function benchMotor(id: string, busId: string, share: number, running: boolean): MotorInput {
   const base = 6600 ** 2 / (1.75e6 * share)
   const ratedSpeed = fromRpm(1487)
   const load = {
@@ -99,8 +99,8 @@ export function speedCase(runningMotors = 0): CaseInput {
     ],
     capacitors: [],
     motors: [
-      motor('M', 'M', 1, false),
-      ...Array.from({ length: runningMotors }, (_, i) => motor(`R${i + 1}`, 'MV', 0.25, true)),
+      benchMotor('M', 'M', 1, false),
+      ...Array.from({ length: runningMotors }, (_, i) => benchMotor(`R${i + 1}`, 'MV', 0.25, true)),
     ],
     settings: { speedCriterion: perUnit(0.98), timeLimit: second(60), tolerance: 1e-8 },
   }

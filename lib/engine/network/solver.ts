@@ -1,6 +1,8 @@
 import { solveReal } from '../numeric/real-lu'
+import { loadTerms } from './load-terms'
 import type { ReducedNetwork } from './reduce'
 import type { NonlinearLoads } from './static-load'
+import { createVoltageSearch } from './voltage-search'
 
 /** Currents and voltages of a reduced network for given admittances at its nodes; nothing is allocated while solving. */
 export interface NetworkSolver {
@@ -24,20 +26,11 @@ export interface NetworkSolver {
   recover(into: Float64Array): void
 }
 
-/** A relative voltage change below which Newton's next one would be lost in round-off. */
-const settled = 1e-8
-const maxIterations = 25
-const maxHalvings = 12
-/** Smallest step of the share of the nonlinear load in the continuation. */
-const smallestShare = 1e-4
-
 /**
  * Solves f(V) = A·V − s·E − J + y·V + Σ conj(S(V)/V) = 0, J the injected currents.
  *
  * Nodes without nonlinear loads come first and are eliminated directly (a motor on its own cable costs one row
- * operation); Newton's method, with both ∂f/∂V and ∂f/∂V*, runs on the nodes with nonlinear loads only. The step is
- * halved while the mismatch does not fall. Where that fails the nonlinear share is raised from none to all by
- * continuation; where that fails too, a solution with all loads below their floors is tried.
+ * operation); the search of voltage-search runs on the nodes with nonlinear loads only.
  *
  * @param linear number of leading kept nodes without nonlinear loads
  * @param nominal nominal voltage of each kept node, V
@@ -60,12 +53,11 @@ export function createSolver(
   const jacobian = new Float64Array(4 * q * q)
   const residual = new Float64Array(2 * q)
   const step = new Float64Array(2 * q)
-  const kept = new Float64Array(2 * n)
+  const terms = new Float64Array(6)
   const drawn = new Float64Array(2 * n)
   const rowOfLoad = Int32Array.from(loads.node, (node) => network.rowOf[node]!)
   const counters = { solutions: 0, iterations: 0, continuations: 0 }
   let warm = false
-  let weakest = 0
 
   /** A + y with the linear nodes eliminated from the rows below them. */
   function eliminate(): void {
@@ -147,34 +139,16 @@ export function createSolver(
       const i = row - linear
       const vRe = voltage[2 * row]!
       const vIm = voltage[2 * row + 1]!
-      const square = vRe * vRe + vIm * vIm
-      const inside = square > loads.floor[l]!
-      const w = inside ? square : loads.floor[l]!
-      const inverse = 1 / w
-      const root = loads.current[l]! === 0 ? 0 : loads.current[l]! / Math.sqrt(w)
-      const power = loads.share[l]! * inverse
-      const g = share * (root + power)
-      const sRe = loads.power[2 * l]!
-      const sIm = loads.power[2 * l + 1]!
-      residual[2 * i] = residual[2 * i]! + g * (sRe * vRe - sIm * vIm)
-      residual[2 * i + 1] = residual[2 * i + 1]! + g * (sRe * vIm + sIm * vRe)
+      loadTerms(loads, l, vRe, vIm, share, terms)
+      residual[2 * i] = residual[2 * i]! + terms[0]!
+      residual[2 * i + 1] = residual[2 * i + 1]! + terms[1]!
       if (!derive) continue
-      // dg/dw of the voltage-dependent part; zero below the floor.
-      const slope = inside ? -share * (root / 2 + power) * inverse : 0
-      const own = g + slope * square
-      // ∂I/∂V = S*·own, ∂I/∂V* = S*·slope·V².
-      const squareRe = slope * (vRe * vRe - vIm * vIm)
-      const squareIm = slope * 2 * vRe * vIm
-      const aRe = sRe * own
-      const aIm = sIm * own
-      const bRe = sRe * squareRe - sIm * squareIm
-      const bIm = sRe * squareIm + sIm * squareRe
       const top = 4 * i * q + 2 * i
       const bottom = (2 * i + 1) * 2 * q + 2 * i
-      jacobian[top] = jacobian[top]! + aRe + bRe
-      jacobian[top + 1] = jacobian[top + 1]! - aIm + bIm
-      jacobian[bottom] = jacobian[bottom]! + aIm + bIm
-      jacobian[bottom + 1] = jacobian[bottom + 1]! + aRe - bRe
+      jacobian[top] = jacobian[top]! + terms[2]!
+      jacobian[top + 1] = jacobian[top + 1]! + terms[3]!
+      jacobian[bottom] = jacobian[bottom]! + terms[4]!
+      jacobian[bottom + 1] = jacobian[bottom + 1]! + terms[5]!
     }
     let size = 0
     for (let i = 0; i < q; i++) {
@@ -186,108 +160,32 @@ export function createSolver(
     return size
   }
 
-  function newton(share: number): boolean {
-    let size = balance(share, true)
-    for (let round = 0; round < maxIterations; round++) {
-      counters.iterations++
-      for (let i = 0; i < 2 * q; i++) step[i] = -residual[i]!
-      if (!solveReal(jacobian, step, 2 * q)) return false
-      let change = 0
-      for (let i = 0; i < q; i++) {
-        const at = 2 * (linear + i)
-        const here =
-          (Math.abs(step[2 * i]!) + Math.abs(step[2 * i + 1]!)) / (Math.abs(voltage[at]!) + Math.abs(voltage[at + 1]!))
-        if (!(here <= change)) change = here
-      }
-      if (Number.isNaN(change)) return false
-      for (let i = 0; i < 2 * q; i++) voltage[2 * linear + i] = voltage[2 * linear + i]! + step[i]!
-      if (change < settled) return true
-      let after = balance(share, true)
-      let part = 1
-      for (let halving = 0; !(after < size) && after > 1e-10; halving++) {
-        if (halving === maxHalvings) return false
-        part /= 2
-        for (let i = 0; i < 2 * q; i++) voltage[2 * linear + i] = voltage[2 * linear + i]! - part * step[i]!
-        after = balance(share, true)
-      }
-      size = after
-    }
-    return false
-  }
-
-  /** Voltages with every nonlinear load replaced by a constant admittance, or left out. */
-  function startFrom(kind: 'nothing' | 'nominal' | 'floor'): boolean {
-    for (let i = 0; i < q; i++) {
-      voltage[2 * (linear + i)] = nominal[linear + i]!
-      voltage[2 * (linear + i) + 1] = 0
-    }
-    balance(0, true)
-    for (let l = 0; kind !== 'nothing' && l < loads.count; l++) {
-      const i = rowOfLoad[l]! - linear
-      if (i < 0) continue
-      const w = kind === 'floor' ? loads.floor[l]! : nominal[linear + i]! ** 2
-      if (w === 0) return false
-      const g = loads.current[l]! / Math.sqrt(w) + loads.share[l]! / w
-      const [re, im] = [g * loads.power[2 * l]!, g * loads.power[2 * l + 1]!]
-      const [vRe, vIm] = [voltage[2 * (linear + i)]!, voltage[2 * (linear + i) + 1]!]
-      residual[2 * i] = residual[2 * i]! + re * vRe - im * vIm
-      residual[2 * i + 1] = residual[2 * i + 1]! + re * vIm + im * vRe
-      const top = 4 * i * q + 2 * i
-      const bottom = (2 * i + 1) * 2 * q + 2 * i
-      jacobian[top] = jacobian[top]! + re
-      jacobian[top + 1] = jacobian[top + 1]! - im
-      jacobian[bottom] = jacobian[bottom]! + im
-      jacobian[bottom + 1] = jacobian[bottom + 1]! + re
-    }
-    for (let i = 0; i < 2 * q; i++) step[i] = -residual[i]!
-    if (!solveReal(jacobian, step, 2 * q)) return false
-    for (let i = 0; i < 2 * q; i++) voltage[2 * linear + i] = voltage[2 * linear + i]! + step[i]!
-    return true
-  }
-
-  /** From no nonlinear load to all of it, in steps that shrink where Newton fails. */
-  function continuation(): boolean {
-    counters.continuations++
-    if (!startFrom('nothing')) return false
-    let share = 0
-    let stride = 0.25
-    while (share < 1) {
-      kept.set(voltage)
-      const next = Math.min(1, share + stride)
-      if (newton(next)) {
-        share = next
-        stride *= 2
-        continue
-      }
-      voltage.set(kept)
-      stride /= 4
-      if (stride < smallestShare) return false
-    }
-    return true
-  }
-
-  function noteWeakest(): void {
-    let least = Number.POSITIVE_INFINITY
-    for (let i = linear; i < n; i++) {
-      const level = Math.hypot(voltage[2 * i]!, voltage[2 * i + 1]!) / nominal[i]!
-      if (level < least) {
-        least = level
-        weakest = i
-      }
-    }
-  }
-
-  function search(): boolean {
-    if (q === 0) return true
-    if (warm) {
-      kept.set(voltage)
-      if (newton(1)) return true
-      voltage.set(kept)
-    } else if (startFrom('nominal') && newton(1)) return true
-    if (continuation()) return true
-    noteWeakest()
-    return startFrom('floor') && newton(1)
-  }
+  const search = createVoltageSearch(
+    {
+      voltage: voltage.subarray(2 * linear),
+      nominal: nominal.subarray(linear),
+      step,
+      placeOfLoad: rowOfLoad.map((row) => row - linear),
+      balance,
+      addAdmittance(i, re, im) {
+        const [vRe, vIm] = [voltage[2 * (linear + i)]!, voltage[2 * (linear + i) + 1]!]
+        residual[2 * i] = residual[2 * i]! + re * vRe - im * vIm
+        residual[2 * i + 1] = residual[2 * i + 1]! + re * vIm + im * vRe
+        const top = 4 * i * q + 2 * i
+        const bottom = (2 * i + 1) * 2 * q + 2 * i
+        jacobian[top] = jacobian[top]! + re
+        jacobian[top + 1] = jacobian[top + 1]! - im
+        jacobian[bottom] = jacobian[bottom]! + im
+        jacobian[bottom + 1] = jacobian[bottom + 1]! + re
+      },
+      solve() {
+        for (let i = 0; i < 2 * q; i++) step[i] = -residual[i]!
+        return solveReal(jacobian, step, 2 * q)
+      },
+    },
+    loads,
+    counters,
+  )
 
   return {
     driven,
@@ -296,7 +194,7 @@ export function createSolver(
     voltage,
     counters,
     get weakest() {
-      return weakest
+      return linear + search.weakest
     },
     resume() {
       warm = true
@@ -304,7 +202,7 @@ export function createSolver(
     solve() {
       counters.solutions++
       eliminate()
-      if (!search()) {
+      if (!search.find(warm)) {
         warm = false
         return false
       }

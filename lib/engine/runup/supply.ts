@@ -1,8 +1,9 @@
 import { type Complex, type VoltAmpere, voltAmpere } from '../../units/si'
 import { atSlip } from '../machines/at-slip'
-import { addElement } from '../network/admittance'
-import { reduceNetwork } from '../network/reduce'
+import { type AdmittanceMatrix, addElement } from '../network/admittance'
 import { refuse, type Setup } from '../network/refusal'
+import { createSparseSolver } from '../network/sparse-solver'
+import { type NonlinearLoads, nonlinearLoads } from '../network/static-load'
 import { magnitude, reciprocal, subtract } from '../numeric/complex'
 import type { Plant } from './plant'
 
@@ -11,6 +12,26 @@ export interface SourceImpedance {
   impedance: Complex
   /** Short-circuit power of the plant's motors in the stated level at nominal voltage; null when it contains none. */
   takenOut: VoltAmpere | null
+}
+
+const noLoads: NonlinearLoads = nonlinearLoads([], new Map())
+
+/** Admittance of the network at the supply's bus: the current into it with 1 V there; null where it is singular. */
+function seenFrom({ supplyNode, topology }: Plant, matrix: AdmittanceMatrix): Complex | null {
+  const { order, data } = matrix
+  const nominalOf = (node: number): number => topology.busOfNode[node]!.nominal
+  const { solver } = createSparseSolver(matrix, noLoads, supplyNode, nominalOf)
+  solver.driven.set([1, 0])
+  if (!solver.solve()) return null
+  const voltages = new Float64Array(2 * order)
+  solver.recover(voltages)
+  let [re, im] = [0, 0]
+  for (let j = 0; j < order; j++) {
+    const at = 2 * (supplyNode * order + j)
+    re += data[at]! * voltages[2 * j]! - data[at + 1]! * voltages[2 * j + 1]!
+    im += data[at]! * voltages[2 * j + 1]! + data[at + 1]! * voltages[2 * j]!
+  }
+  return { re, im }
 }
 
 /**
@@ -27,9 +48,8 @@ export function sourceImpedance(plant: Plant): Setup<SourceImpedance> {
     const node = plant.topology.nodeOf.get(motor.busId)!
     addElement(matrix, node, node, atSlip(motor.circuit, 1).admittance)
   }
-  const seen = reduceNetwork(matrix, [plant.supplyNode], null)
-  if (seen === null) return refuse('bad-value', [supply.busId], 'The network between supply and motors is singular.')
-  const motors: Complex = { re: seen.admittance[0]!, im: seen.admittance[1]! }
+  const motors = seenFrom(plant, matrix)
+  if (motors === null) return refuse('bad-value', [supply.busId], 'The network between supply and motors is singular.')
   const rest = subtract(reciprocal(supply.impedance), motors)
   if (!(rest.re >= 0 && rest.im < 0)) {
     return refuse(

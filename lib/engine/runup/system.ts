@@ -2,8 +2,9 @@ import { type LoadSegments, loadTorque, loadTorqueAt } from '../driven/load-segm
 import { evaluateMachine } from '../machines/machine-table'
 import { saturate, saturationOf } from '../machines/saturation'
 import type { AdmittanceMatrix } from '../network/admittance'
-import { type ReducedNetwork, reduceNetwork } from '../network/reduce'
+import { reduceNetwork } from '../network/reduce'
 import { createSolver, type NetworkSolver } from '../network/solver'
+import { createSparseSolver } from '../network/sparse-solver'
 import { codes, connect, connections, disconnect, evaluateConnection, isRegulated } from '../starters/connection'
 import { evaluateDrive } from '../starters/drive'
 import type { Step } from '../starters/position'
@@ -14,7 +15,8 @@ import { createRegulation } from './regulation'
 /** The plant with its network reduced for one driving node, motors in given positions. The run-up works on it in place. */
 export interface System {
   readonly plant: Plant
-  readonly network: ReducedNetwork
+  /** Place of each node among the solver's voltages, −1 for the others. */
+  readonly network: { readonly rowOf: Int32Array }
   readonly solver: NetworkSolver
   /** 1 where a shaft stands still because its torque does not exceed that of its load. */
   readonly resting: Uint8Array
@@ -65,17 +67,33 @@ function keptNodes(plant: Plant, driven: number): { nodes: number[]; linear: num
   return { nodes: [...linear, ...nonlinear], linear: linear.length }
 }
 
+/** Nodes that matter from which on the network is solved whole and sparse; with fewer the reduced dense one is faster. */
+const sparseFrom = 24
+
+/** The network made ready for solving; null where it is singular. */
+function solvable(
+  plant: Plant,
+  matrix: AdmittanceMatrix,
+  drivenNode: number,
+): { rowOf: Int32Array; solver: NetworkSolver } | null {
+  const kept = keptNodes(plant, drivenNode)
+  const nominalOf = (node: number): number => plant.topology.busOfNode[node]!.nominal
+  if (kept.nodes.length >= sparseFrom) return createSparseSolver(matrix, plant.loads, drivenNode, nominalOf)
+  const network = reduceNetwork(matrix, kept.nodes, drivenNode)
+  if (network === null) return null
+  const nominal = Float64Array.from(kept.nodes, nominalOf)
+  return { rowOf: network.rowOf, solver: createSolver(network, plant.loads, kept.linear, nominal) }
+}
+
 /**
  * Reduces the network to motors and nonlinear loads, driven at one node, and joins it with the motors.
  *
  * @returns null where the rest of the network is singular
  */
 export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode: number): System | null {
-  const kept = keptNodes(plant, drivenNode)
-  const network = reduceNetwork(matrix, kept.nodes, drivenNode)
+  const network = solvable(plant, matrix, drivenNode)
   if (network === null) return null
-  const nominal = Float64Array.from(kept.nodes, (node) => plant.topology.busOfNode[node]!.nominal)
-  const solver = createSolver(network, plant.loads, kept.linear, nominal)
+  const { solver } = network
   const count = plant.motors.length
   const { machines, synchronous, torqueFactor, inertia } = plant
   const row = Int32Array.from(plant.node, (node) => network.rowOf[node]!)
