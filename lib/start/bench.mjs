@@ -24,19 +24,24 @@ await runCommand(() =>
     if (outcome.status !== 0)
       throw new Failure(`${lastLines(outcome)}\nThe figures could not be measured: the lines above say why.`)
     const { serveFresh } = await import('./testing/serve-fresh.mjs')
+    const { engineSize } = await import('./testing/engine-size.mjs')
     const { scriptsOf } = await import('./testing/page-weight.mjs')
     const peopleFile = inRoot('.data', 'test', 'bench-people.json')
     const address = await serveFresh({ port: await anyFreePort(), peopleFile, say, undo })
     const { files, kilobytes } = await scriptsOf(address, page)
     const name = `first page ${page}: script as sent, compressed`
     const value = Number(kilobytes.toPrecision(4))
+    const engine = Number(((await engineSize()).compressed / 1000).toPrecision(4))
     if (asJson) {
       const measured = JSON.parse(outcome.stdout)
       measured.figures[name] = { value, unit: 'kB' }
       measured.figures[`first page ${page}: script files`] = { value: files, unit: '1' }
+      measured.figures['whole engine, compressed'] = { value: engine, unit: 'kB' }
       process.stdout.write(`${JSON.stringify(measured)}\n`)
     } else {
-      process.stdout.write(`${outcome.stdout}${name}  ${value} kB in ${files} files\n`)
+      process.stdout.write(
+        `${outcome.stdout}${name}  ${value} kB in ${files} files\nwhole engine, compressed  ${engine} kB\n`,
+      )
     }
   }),
 )
