@@ -4,7 +4,7 @@ import { loadTorqueAt } from './driven/load-segments'
 import { beforeStart } from './runup/before-start'
 import { preparePlant } from './runup/plant'
 import type { System } from './runup/system'
-import { transientMachine } from './transient/machine-equations'
+import { canBeFollowed, transientMachine } from './transient/machine-equations'
 import { transientStart } from './transient/transient-start'
 
 /** What the first instants of a direct start bring beyond the RMS model. */
@@ -62,8 +62,8 @@ function equivalentAt(system: System, motor: number, speeds: Float64Array) {
  * Thevenin equivalent of the network.
  *
  * The DC part of the current decays with the equivalent's own resistance, so its peak depends on the switching instant;
- * the figure is that of the worst phase at the worst instant. Later starts of the case, machines by curves and machines
- * with a negative equivalent resistance (capacitors near resonance) have none.
+ * the figure is that of the worst phase at the worst instant. Later starts of the case, machines by curves,
+ * machines with a negative equivalent resistance (capacitors near resonance) and those with next to no leakage reactance have none.
  */
 export function directStartPeaks(input: CaseInput): readonly DirectStartPeaks[] {
   const plant = preparePlant(input)
@@ -79,6 +79,9 @@ export function directStartPeaks(input: CaseInput): readonly DirectStartPeaks[] 
     if (equivalent === null || equivalent.impedance.re < 0 || equivalent.impedance.im < 0) return []
     // At standstill a deep bar has the values of slip 1, and the peaks lie there.
     const locked = circuit.deepBar?.law === 'linear' ? { ...circuit, cages: [circuit.deepBar] } : circuit
+    const { re, im } = equivalent.impedance
+    const stator = { resistance: locked.stator.re + re, reactance: locked.stator.im + im }
+    if (!canBeFollowed([stator, ...locked.cages], input.frequency)) return []
     const machine = transientMachine(locked, { ...equivalent, frequency: input.frequency }, motor.poles, 0)
     const load = system.driven[i]!
     const result = transientStart(machine, {

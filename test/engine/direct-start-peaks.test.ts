@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { directStartPeaks } from '@/lib/engine/direct-start-peaks'
 import { runCase } from '@/lib/engine/run-case'
+import { ohm } from '@/lib/units/si'
 import { autotransformer, simpleMotor, simplePlant, squareLoad, started } from '../support/simple-plant'
 
 const motor = (at = 0) => simpleMotor('M', started({ kind: 'direct' }, squareLoad(300), at))
@@ -30,6 +31,17 @@ describe('peaks of a direct start', () => {
       (reactance) => directStartPeaks(simplePlant([motor()], reactance))[0]!.peakCurrent.current,
     )
     expect(currents.toSorted((a, b) => b - a)).toEqual(currents)
+  })
+
+  it('are none of a rotor with next to no leakage, whose fluxes no time step follows; the run-up is there all the same', () => {
+    for (const reactance of [0, 1e-9]) {
+      const plain = motor()
+      if (!('cages' in plain.circuit)) throw new Error('the simple motor has a circuit')
+      const cages = plain.circuit.cages.map((cage) => ({ ...cage, reactance: ohm(reactance) }))
+      const input = simplePlant([{ ...plain, circuit: { ...plain.circuit, cages } }], 0.003)
+      expect(directStartPeaks(input)).toEqual([])
+      expect(runCase(input).motors[0]!.start!.outcome.kind).toBe('started')
+    }
   })
 
   it('are none of a start on a tap, of a later start, and of a case that cannot be set up', () => {

@@ -1,5 +1,6 @@
 import { type CaseInput, type CaseModel, isTabulated } from '../case-input'
 import { cutsIn } from '../criteria/only-transient'
+import { canBeFollowed } from '../transient/machine-equations'
 
 /** Why a case cannot be computed by the fifth-order model; the quasi-static result then stands alone. */
 export type UnfitCause =
@@ -32,7 +33,7 @@ export function unfitFor(input: CaseInput): UnfitCause | null {
   if (input.motors.some(({ duty }) => duty.kind === 'running' && duty.contactor)) return 'schedule'
   const { circuit } = motor
   const plain = !isTabulated(circuit) && !circuit.torqueCurve && !circuit.saturation
-  if (!plain || !circuit.cages.every(({ reactance }) => reactance > 0)) return 'machine'
+  if (!plain || !canBeFollowed(circuit.cages, input.frequency)) return 'machine'
   if (motor.shaft !== undefined && input.motors.some((other) => other !== motor && other.shaft === motor.shaft))
     return 'shaft'
   return null

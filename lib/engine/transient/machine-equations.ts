@@ -45,6 +45,21 @@ export function transientMachine(
   }
 }
 
+/** Decay of a flux beyond which a time step would have to be shorter than the pictures of these models are worth, 1/s. */
+const fastestDecay = 3e4
+
+/**
+ * Whether the equations can be followed in time: a winding without leakage reactance, or with hardly any beside its
+ * resistance, has fluxes that decay within microseconds.
+ *
+ * @param impedances stator with the supply in front of it, and each rotor circuit, ohm
+ */
+export const canBeFollowed = (
+  impedances: readonly { resistance: number; reactance: number }[],
+  frequency: number,
+): boolean =>
+  impedances.every(({ resistance, reactance }) => 2 * Math.PI * frequency * resistance < fastestDecay * reactance)
+
 /** What a state says: stator currents in q and d (A peak), and torque (N·m). */
 export interface TransientReading {
   q: number

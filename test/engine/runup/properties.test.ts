@@ -23,10 +23,16 @@ function numbersOf(value: unknown, path = ''): Map<string, number> {
   return found
 }
 
+/** What a start that never arrives gathers up to the end of the run grows with the run, whose end is no sharp instant. */
+const sharp = (motor: CaseResult['motors'][number]) =>
+  motor.start && motor.start.timeToCriterion === null
+    ? { ...motor, start: { ...motor.start, i2t: null, slipEnergy: null, heatUsed: null } }
+    : motor
+
 /** Places and motors by name, without what depends on the order of things. */
 const byName = ({ places, motors, supply }: CaseResult) => ({
   places: Object.fromEntries(places.map((place) => [place.busId, place])),
-  motors: Object.fromEntries(motors.map((motor) => [motor.motorId, motor])),
+  motors: Object.fromEntries(motors.map((motor) => [motor.motorId, sharp(motor)])),
   supply,
 })
 
