@@ -132,6 +132,7 @@ revisionView        PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     
 revisionDocument    PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAmls    PCAmls
 revisionSeries      PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAmls    PCAmls
 revisionComments    PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms
+compareRevisions    PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAmls    PCAmls
 inputTicks          PCAs      PCAs      PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms     PCAms
 addComment          -         PC        PCAm      PCAm      -         -         -         -         -         -
 respondToComment    PCA       PCA       PCA       PCA       -         -         -         -         -         -
@@ -182,7 +183,7 @@ shareLinks          -         -         -         -         -         -         
 
 test('every command and query of the server is tried here', async () => {
   const files = import.meta.glob(
-    '/lib/server/{live,people,plants,reviews,studies,timeline,revisions,share,signoff}/*{commands,queries,invite}.ts',
+    '/lib/server/{compare,live,people,plants,reviews,studies,timeline,revisions,share,signoff}/*{commands,queries,invite}.ts',
     { eager: true },
   )
   const isAction = (one: unknown) => typeof one === 'object' && one !== null && 'scope' in one && 'may' in one

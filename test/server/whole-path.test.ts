@@ -1,4 +1,5 @@
 import { beforeAll, describe, expect, test } from 'vitest'
+import { compareRevisions } from '@/lib/server/compare/queries'
 import { database } from '@/lib/server/db'
 import { changeMember } from '@/lib/server/people/member-commands'
 import { perform } from '@/lib/server/perform'
@@ -229,6 +230,9 @@ describe.sequential('from records to an issued report', () => {
     await perform(decideReview, tharow, { revisionId: next.revisionId, accepted: true })
     await waiveAll(next.revisionId)
     await perform(closeReview, tharow, { revisionId: next.revisionId, purpose: 'For construction' })
+    const compared = await read(compareRevisions, lindqvar, { from: revisionId, to: next.revisionId })
+    expect(compared.inputs).toMatchObject([{ field: 'note', after: 'After the freeze.' }])
+    expect(compared).toMatchObject({ verdicts: [], results: [] })
     await signingBegun(next.revisionId)
     await signAs(lindqvar, next.revisionId, 'prepared', await keyOf('engineer'))
     await signAs(obede, next.revisionId, 'checked', await keyOf('checker'))

@@ -1,9 +1,13 @@
 import 'server-only'
 import type { CaseResult, CaseSeries } from '@/lib/engine/case-result'
 import type { ReportDecision, ReportInput, RevisionTableRow } from '@/lib/report/report-input'
+import { changeSentence } from '@/lib/study/diff/change-sentence'
+import { diffInputs } from '@/lib/study/diff/diff-inputs'
+import { diffVerdicts } from '@/lib/study/diff/diff-verdicts'
 import { readFrozenStudy } from '@/lib/study/read/read-frozen-study'
 import type { Tx } from '../db'
 import { commentSheetOf } from '../reviews/comment-sheet'
+import { loadGround } from '../reviews/ground'
 import { waiversOf } from '../reviews/waive'
 import { revisionState } from '../revisions/subject'
 import { unpackSeries } from '../series'
@@ -80,12 +84,20 @@ interface TableSource {
   closedAt: Date | null
 }
 
+/** What the author says changed, and what did change against the revision that went out before. */
+async function changesOf(tx: Tx, { id, note }: TableSource, formerId: string | null): Promise<string> {
+  if (formerId === null) return note
+  const [before, after] = [await loadGround(tx, formerId), await loadGround(tx, id)]
+  const found = changeSentence(diffInputs(before.document, after.document), diffVerdicts(before, after))
+  return note === '' ? found : `${note} ${found}`
+}
+
 /** The revisions that went out before, and this one last. */
 async function revisionTable(tx: Tx, row: TableSource): Promise<RevisionTableRow[]> {
   const before = await tx.revision.findMany({
     where: { studyId: row.studyId, number: { lt: row.number }, issuedAt: { not: null } },
     orderBy: { number: 'asc' },
-    select: { number: true, issuedAt: true, purpose: true, note: true, frozenAt: true },
+    select: { id: true, number: true, issuedAt: true, purpose: true, note: true, frozenAt: true },
   })
   return [
     ...before.map(({ number, issuedAt, purpose, note, frozenAt }) => ({
@@ -98,7 +110,7 @@ async function revisionTable(tx: Tx, row: TableSource): Promise<RevisionTableRow
       number: String(row.number),
       date: (row.closedAt ?? row.frozenAt).toISOString(),
       purpose: row.purpose ?? '',
-      changes: row.note,
+      changes: await changesOf(tx, row, before.at(-1)?.id ?? null),
     },
   ]
 }

@@ -1,6 +1,7 @@
 import type * as z from 'zod'
 import { DomainError } from '@/lib/errors'
 import type { Actor } from '@/lib/server/actor'
+import { compareRevisions } from '@/lib/server/compare/queries'
 import { type Database, database } from '@/lib/server/db'
 import { livePlace } from '@/lib/server/live/queries'
 import { createProject } from '@/lib/server/people/commands'
@@ -146,6 +147,7 @@ export const revisionAttempts: readonly Attempt[] = [
   asks('revisionDocument', revisionQueries.revisionDocument, ofRevision),
   asks('revisionSeries', revisionQueries.revisionSeries, ({ revisionId }) => ({ revisionId, caseId: 'none' })),
   asks('revisionComments', reviewQueries.revisionComments, ofRevision),
+  asks('compareRevisions', compareRevisions, ({ revisionId }) => ({ from: revisionId, to: revisionId })),
   asks('inputTicks', reviewQueries.inputTicks, ofRevision),
   does('addComment', reviews.addComment, ({ revisionId }) => {
     return { revisionId, anchor: 'revision', kind: 'question', text: 'Is this so?' }

@@ -18,6 +18,11 @@ export default async function ReviewPage({ params }: PageProps<'/studies/[studyI
     <div className="flex flex-col gap-4">
       <div className="flex flex-wrap items-center justify-between gap-2">
         <h1 className="m-0 text-title font-semibold">Review</h1>
+        {revisions.length > 1 ? (
+          <Link prefetch={false} href={`/studies/${studyId}/revisions/compare`} className="link">
+            Compare revisions
+          </Link>
+        ) : null}
         {may.freeze && ready ? <FreezeRevision studyId={studyId} /> : null}
       </div>
       {may.freeze && !ready ? (
