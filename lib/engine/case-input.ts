@@ -13,6 +13,7 @@ import type {
   VoltAmpere,
   Watt,
 } from '../units/si'
+import type { GeneratorInput } from './generator-input'
 import type { ProtectionInput, ThermalData } from './protection-input'
 import type { Attempt, Contactor, Disturbance, StartAfter } from './schedule-input'
 import type { ChangeOver, FurtherStarter, StartCapacitor, StarterDuty } from './starter-input'
@@ -32,6 +33,8 @@ export interface SupplyInput {
   hold: { kind: 'bus-voltage'; voltage: Volt } | { kind: 'emf'; voltage: Volt }
   /** Plant motors whose contribution the stated level contains; it is taken out before the run. Empty when it contains none. */
   motorsInLevel: readonly { busId: string; circuit: MachineModel }[]
+  /** A generator in place of the network's equivalent: its own reactances stand for `impedance`, and the voltage at its bus is held. */
+  generator?: GeneratorInput
 }
 
 /** Two-winding transformer: ratio U_from(1 + tap/100)/U_to, impedance in ohm on the to side, unchanged by the tap. */

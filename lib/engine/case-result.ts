@@ -2,6 +2,7 @@ import type {
   Ampere,
   AmpereSquaredSecond,
   Complex,
+  Hertz,
   Joule,
   NewtonMetre,
   Ohm,
@@ -10,6 +11,7 @@ import type {
   Second,
   Volt,
   VoltAmpere,
+  Watt,
 } from '../units/si'
 import type { CaseModel } from './case-input'
 import type { EnvelopePoint } from './criteria/envelope'
@@ -188,6 +190,11 @@ export type Notice =
   /** Switched on near synchronous speed, so that the fifth-order model was taken unasked. */
   | { kind: 'cuts-in'; motorId: string }
   | { kind: 'load-below-floor'; loadId: string; at: Second }
+  /** Power asked of the prime mover, in parts of the largest that it gives. */
+  | { kind: 'prime-mover-overloaded'; share: PerUnit; at: Second }
+  | { kind: 'excitation-at-ceiling'; time: Second }
+  /** The plant comes on another supply before the residual voltage has decayed. */
+  | { kind: 'transfer-within-residual'; deadTime: Second; decayTime: Second }
 
 export interface MotorSeries {
   speed: readonly number[]
@@ -200,6 +207,34 @@ export interface MotorSeries {
   reactivePower: readonly number[]
 }
 
+/** How a generator came through the run that it supplied, at its own bus. */
+export interface GeneratorResult {
+  /**
+   * `not-recovered`: excitation at its ceiling at the end; `hunting`: voltage or speed never come to rest, as by a gain too
+   * high; `failed`: voltage or frequency broke down.
+   */
+  outcome: 'recovered' | 'not-recovered' | 'hunting' | 'failed'
+  /** Voltage held before the load step, just after it behind the first reactance, and the lowest of the run. */
+  held: Volt
+  first: Volt | null
+  lowest: VoltageAt
+  /** Voltage once the regulator has done what it can with every motor held at its speed just after the step; null where there is none. */
+  sustained: Volt | null
+  settled: Volt | null
+  lowestFrequency: FrequencyAt
+  highestFrequency: FrequencyAt
+  settledFrequency: Hertz | null
+  /** Across the air gap. */
+  largestPower: { power: Watt; at: Second }
+  /** Time that the excitation was at its ceiling. */
+  atCeiling: Second
+}
+
+export interface FrequencyAt {
+  frequency: Hertz
+  at: Second
+}
+
 /** Sampled run, SI; every array is as long as `time`. Two samples at one instant are the values before and after a switching. */
 export interface CaseSeries {
   time: readonly number[]
@@ -207,6 +242,15 @@ export interface CaseSeries {
   motors: Readonly<Record<string, MotorSeries>>
   /** Envelopes and first periods of a start by the fifth-order model; absent in other cases. */
   transient?: TransientSeries
+  /** Of the generator that supplies the plant; absent where none does. */
+  generator?: GeneratorSeries
+}
+
+/** Frequency in Hz, excitation as its open-circuit voltage in V, power across the air gap in W. */
+export interface GeneratorSeries {
+  frequency: readonly number[]
+  excitation: readonly number[]
+  power: readonly number[]
 }
 
 export interface Counters {
@@ -248,6 +292,8 @@ export interface CaseResult {
   flicker?: readonly FlickerResult[]
   /** The case once more with what the records leave open put otherwise, without curves; absent where nothing is open. */
   variants?: readonly CaseVariant[]
+  /** Absent where the network supplies the plant all the time. */
+  generator?: GeneratorResult
 }
 
 /**

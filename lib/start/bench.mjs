@@ -31,16 +31,18 @@ await runCommand(() =>
     const { files, kilobytes } = await scriptsOf(address, page)
     const name = `first page ${page}: script as sent, compressed`
     const value = Number(kilobytes.toPrecision(4))
-    const engine = Number(((await engineSize()).compressed / 1000).toPrecision(4))
+    const { gzip, brotli } = await engineSize()
+    const engine = { gzip: Number((gzip / 1000).toPrecision(4)), brotli: Number((brotli / 1000).toPrecision(4)) }
     if (asJson) {
       const measured = JSON.parse(outcome.stdout)
       measured.figures[name] = { value, unit: 'kB' }
       measured.figures[`first page ${page}: script files`] = { value: files, unit: '1' }
-      measured.figures['whole engine, compressed'] = { value: engine, unit: 'kB' }
+      for (const [way, size] of Object.entries(engine))
+        measured.figures[`whole engine, ${way}`] = { value: size, unit: 'kB' }
       process.stdout.write(`${JSON.stringify(measured)}\n`)
     } else {
       process.stdout.write(
-        `${outcome.stdout}${name}  ${value} kB in ${files} files\nwhole engine, compressed  ${engine} kB\n`,
+        `${outcome.stdout}${name}  ${value} kB in ${files} files\nwhole engine  ${engine.gzip} kB by gzip, ${engine.brotli} kB by brotli\n`,
       )
     }
   }),

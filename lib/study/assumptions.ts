@@ -1,5 +1,6 @@
 import type { StudyDocument } from './document/study-document'
 import { walkEntered } from './walk-entered'
+import { isShortCircuitLevel } from './words/level-text'
 
 type Path = readonly (string | number)[]
 
@@ -65,13 +66,13 @@ const supplyAssumptions = ({ plant }: StudyDocument): Assumption[] =>
       reason,
     })
     return [
-      ...(voltageFactor.kind === 'unknown' && level.form !== 'impedance'
+      ...(voltageFactor.kind === 'unknown' && isShortCircuitLevel({ level })
         ? [notStated('voltageFactor', '1.00', 'Unknown; a level that contains 1.1 makes every change a tenth deeper.')]
         : []),
-      ...(plantMotorsIncluded === 'unknown'
+      ...(plantMotorsIncluded === 'unknown' && level.form !== 'generator'
         ? [notStated('plantMotorsIncluded', 'no', "Unknown; a level that contains the plant's motors is too strong.")]
         : []),
-      ...(instant === 'unknown'
+      ...(instant === 'unknown' && level.form !== 'generator'
         ? [notStated('instant', 'as for the start', 'Unknown; an initial value is stronger than the supply is later.')]
         : []),
     ]

@@ -6,6 +6,7 @@ import type { StudyDocument } from './document/study-document'
 import { fieldPlace } from './field-place'
 import { loadCurveInput } from './to-engine/load-curve-input'
 import { nameplateOf } from './to-engine/nameplate-of-motor'
+import { isShortCircuitLevel } from './words/level-text'
 import { contradictionSentence } from './words/plate-words'
 
 /** A question that reviewers always ask, with what there is to say to it; passed when there is nothing. */
@@ -51,7 +52,7 @@ const weakestMissing: Finder = (document) => {
 
 const factorUnknown: Finder = ({ plant }) =>
   plant.supplies.flatMap(({ tag, voltageFactor, level }, i) =>
-    voltageFactor.kind === 'unknown' && level.form !== 'impedance'
+    voltageFactor.kind === 'unknown' && isShortCircuitLevel({ level })
       ? [
           issue(
             ['plant', 'supplies', i, 'voltageFactor'],

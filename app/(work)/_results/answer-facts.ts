@@ -3,6 +3,7 @@ import type { SupplyRecord } from '@/lib/study/document/network-records'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import type { CaseSummary } from '@/lib/study/summary'
 import { formatVerdict } from '@/lib/study/words/format-verdict'
+import { isShortCircuitLevel, levelText } from '@/lib/study/words/level-text'
 import { limitedQuantity, limitValuePhrase, placePhrase } from '@/lib/study/words/limit-sentence'
 import { busTag, caseTag, motorTag } from '@/lib/study/words/tags'
 import { current, orDash, percent, seconds, speed, torque, voltage } from './print'
@@ -35,12 +36,8 @@ const most = (starts: readonly StartOf[], figure: (start: StartResult) => number
     return value !== null && (known === null || known === undefined || value > known) ? one : best
   }, undefined)
 
-const supplyLevel = ({ level, xOverR }: SupplyRecord): string => {
-  const ratio = xOverR ? `, X/R ${xOverR.text}` : ''
-  if (level.form === 'power') return `${level.power.text}${ratio}`
-  if (level.form === 'current') return `${level.current.text}${ratio}`
-  return `${level.resistance.text} + j ${level.reactance.text}`
-}
+const supplyLevel = (supply: SupplyRecord): string =>
+  supply.xOverR && isShortCircuitLevel(supply) ? `${levelText(supply)}, X/R ${supply.xOverR.text}` : levelText(supply)
 
 const supplyOf = (document: StudyDocument, caseId: string): string => {
   const record = document.cases.find(({ id }) => id === caseId)

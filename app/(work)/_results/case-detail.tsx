@@ -5,6 +5,7 @@ import { caseSentence } from '@/lib/study/words/case-sentence'
 import { Notice } from '@/lib/ui/notice'
 import { CasePlots } from './case-plots'
 import { FlickerTable } from './flicker-table'
+import { GeneratorTable } from './generator-table'
 import { HeatTable, ProtectionTable } from './protection-table'
 import { canBeDrawn, caseResult, type Results } from './results'
 import { CaseSentences, RunCounters } from './run-notes'
@@ -55,6 +56,7 @@ export function CaseDetail({ results, caseId, series }: CaseDetailProps) {
           <ProtectionTable document={document} result={result} />
           <HeatTable results={results} result={result} />
           <ChangeOverTable document={document} result={result} />
+          <GeneratorTable result={result} />
           <RunningTable document={document} result={result} />
           <VoltageTable document={document} caseId={caseId} places={result.places} />
           <FlickerTable document={document} result={result} />

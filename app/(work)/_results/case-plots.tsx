@@ -1,5 +1,6 @@
 import type { CaseFigure } from '@/lib/drawing/case-figure'
 import { currentPlot } from '@/lib/drawing/current-plot'
+import { frequencyPlot } from '@/lib/drawing/frequency-plot'
 import { speedPlot } from '@/lib/drawing/speed-plot'
 import { timeCurrentPlot } from '@/lib/drawing/time-current-plot'
 import { torqueSpeedPlot } from '@/lib/drawing/torque-speed-plot'
@@ -130,6 +131,15 @@ function TransientFigures({ figure }: { figure: CaseFigure }) {
   return transientPlots(figure, size).map((scene, i) => <Figure key={scene.title} scene={scene} table={tables[i]!} />)
 }
 
+function FrequencyFigure({ figure }: { figure: CaseFigure }) {
+  const scene = frequencyPlot(figure, size)
+  const values = figure.result.series.generator?.frequency
+  if (!scene || !values) return null
+  return (
+    <Figure scene={scene} table={sampledTable(timeAxis(figure), [{ head: 'Frequency, Hz', values, decimals: 3 }])} />
+  )
+}
+
 /** All figures of a case. */
 export function CasePlots({ figure }: { figure: CaseFigure }) {
   return (
@@ -137,6 +147,7 @@ export function CasePlots({ figure }: { figure: CaseFigure }) {
       {placesToDraw(figure).map((busId) => (
         <VoltageFigure key={busId} figure={figure} busId={busId} />
       ))}
+      <FrequencyFigure figure={figure} />
       {startedIds(figure).length > 0 ? (
         <>
           <SpeedFigure figure={figure} />

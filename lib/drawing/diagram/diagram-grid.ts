@@ -7,6 +7,7 @@ import type { Branch, Device, Feeder, TreeBus } from './network-tree'
 import {
   capacitorSymbol,
   comingSymbol,
+  generatorSymbol,
   lineSymbol,
   loadSymbol,
   motorSymbol,
@@ -95,7 +96,8 @@ export const diagramGrid = (context: GridContext, { trees, apart, from }: Diagra
   }
 
   const start = { depth: -1, row: 0, through: true }
-  if (from === null) add({ ...start, symbol: sourceSymbol }, supplyLines(supply))
+  if (from === null)
+    add({ ...start, symbol: supply.level.form === 'generator' ? generatorSymbol : sourceSymbol }, supplyLines(supply))
   else add({ ...start, symbol: comingSymbol }, { tag: `from ${from}`, lines: [] })
   let rows = 0
   for (const [i, tree] of trees.entries()) rows = layBus(tree, 0, rows, 1, i === 0 ? '' : 'no way to the supply')

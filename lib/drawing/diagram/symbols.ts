@@ -139,6 +139,18 @@ export const comingSymbol = (x: number, y: number): readonly SceneItem[] => [
   path(wire(x + 3.2, x + symbolWidth, y), stroke),
 ]
 
+/** A generator that supplies the plant: a circle with its letter. */
+export const generatorSymbol = (x: number, y: number): readonly SceneItem[] => {
+  const r = 3
+  const at = x + r
+  return [
+    path(wire(at + r, x + symbolWidth, y), stroke),
+    path(circle(at, y, r), stroke),
+    text(at, y + 0.2, 'G', { size: 2.8, anchor: 'middle', weight: 'semibold' }),
+    text(at, y + 2.2, '3~', { size: 1.9, anchor: 'middle' }),
+  ]
+}
+
 /** The supply: a source behind its impedance. */
 export const sourceSymbol = (x: number, y: number): readonly SceneItem[] => {
   const r = 3

@@ -1,6 +1,8 @@
 import type { CaseRecord } from '@/lib/study/document/case-records'
+import type { GeneratorLevel } from '@/lib/study/document/generator-level'
 import type { SupplyRecord } from '@/lib/study/document/network-records'
 import type { StudyDocument } from '@/lib/study/document/study-document'
+import { levelText } from '@/lib/study/words/level-text'
 import type { Branch, Device } from './network-tree'
 
 /** The words of one value sheet: the tag, and the values a line each, the weightiest first. */
@@ -21,20 +23,21 @@ const factor = (supply: SupplyRecord): string => {
   return supply.voltageFactor.kind === 'unknown' ? 'c unknown' : `c ${supply.voltageFactor.kind}`
 }
 
+const generatorReactances = ({ subtransient, transient }: GeneratorLevel): string =>
+  [...(subtransient ? [`X″ ${subtransient.reactance.text}`] : []), `X′ ${transient.text}`].join(', ')
+
 export const supplyLines = (supply: SupplyRecord): ValueLines => {
   const { level } = supply
   const stated =
-    level.form === 'power'
-      ? level.power.text
-      : level.form === 'current'
-        ? level.current.text
-        : complexText(level.resistance.text, level.reactance.text)
+    level.form === 'impedance' ? complexText(level.resistance.text, level.reactance.text) : levelText(supply)
   const before = supply.before.voltage.text
   return {
     tag: `Supply, ${supply.tag}`,
     lines: [
       `${stated} at ${supply.statedAt.text}`,
-      [factor(supply), ...(supply.xOverR ? [`X/R ${supply.xOverR.text}`] : [])].join(', '),
+      level.form === 'generator'
+        ? generatorReactances(level)
+        : [factor(supply), ...(supply.xOverR ? [`X/R ${supply.xOverR.text}`] : [])].join(', '),
       supply.before.kind === 'bus-voltage' ? `${before} before the start` : `open circuit ${before}`,
     ],
   }

@@ -1,6 +1,7 @@
 import { synchronousSpeed } from '../../units/speed'
 import type { CaseInput, MotorInput } from '../case-input'
 import type { CaseResult } from '../case-result'
+import { onGenerator } from '../generator-input'
 import { residualDecayTime } from '../machines/residual-voltage'
 import { hasFluxes } from '../runup/flux-model'
 import type { RuleInput } from './rule'
@@ -23,10 +24,12 @@ function gapOf({ duty }: MotorInput): number {
 /** Motors that still hold a voltage of their own when a supply that was away finds them on. */
 function heldByResidual({ disturbance, motors, frequency }: CaseInput): readonly MotorInput[] {
   if (!disturbance || disturbance.remaining > 0) return []
-  const { duration } = disturbance
+  const { duration, decayTime } = disturbance
+  const isSoon = (motor: MotorInput): boolean =>
+    decayTime === undefined ? isFast(motor, duration, frequency) : duration < decayTime
   return motors.filter((motor) => {
     const { duty } = motor
-    if (duty.kind !== 'running' || !isFast(motor, duration, frequency)) return false
+    if (duty.kind !== 'running' || !isSoon(motor)) return false
     // A contactor that opens in the gap takes the motor off until it closes again.
     return !duty.contactor || duty.contactor.delay >= duration || duty.contactor.reclose !== null
   })
@@ -52,7 +55,7 @@ const residualMotors = (input: CaseInput, result: Motors): readonly MotorInput[]
 /** Whether a case closes on residual voltages that the third-order model can follow, all of them. */
 export function followsResidual(input: CaseInput, result: Motors): boolean {
   const motors = residualMotors(input, result)
-  return motors.length > 0 && motors.every(hasFluxes)
+  return motors.length > 0 && motors.every(hasFluxes) && !onGenerator(input)
 }
 
 /** Whether a start begins or goes on with a transient that the model of the case cannot show. */

@@ -31,6 +31,7 @@ export function unfitFor(input: CaseInput): UnfitCause | null {
   if (starter.kind !== 'direct' || (capacitors ?? []).length > 0) return 'device'
   if (input.disturbance || (attempts ?? []).length > 0 || contactor) return 'schedule'
   if (input.motors.some(({ duty }) => duty.kind === 'running' && duty.contactor)) return 'schedule'
+  if (input.supply.generator) return 'network'
   const { circuit } = motor
   const plain = !isTabulated(circuit) && !circuit.torqueCurve && !circuit.saturation
   if (!plain || !canBeFollowed(circuit.cages, input.frequency)) return 'machine'

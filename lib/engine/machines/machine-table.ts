@@ -11,6 +11,8 @@ export interface MachineTable {
   circuit: Float64Array
   /** 1 where a machine is more than the circuit in its row. */
   special: Uint8Array
+  /** Frequency in parts of rated, for the special ones; the reactances in `circuit` are rewritten with it. */
+  frequency: number
   deepBars: readonly (DeepBarLaw | null)[]
   /** Machines, or their torque alone, by typed curves. */
   curves: readonly (CurveMachine | null)[]
@@ -53,6 +55,7 @@ export function machineTable(models: readonly MachineModel[], synchronous: Array
     count: models.length,
     circuit: Float64Array.from(models.flatMap(rowOf)),
     special: Uint8Array.from(models, (_, i) => (curves[i] || deepBars[i] ? 1 : 0)),
+    frequency: 1,
     deepBars,
     curves,
     admittance: new Float64Array(2 * models.length),
@@ -76,12 +79,14 @@ export function evaluateMachine(table: MachineTable, i: number, slip: number): v
     const curve = table.curves[i]!
     if (curve?.current) {
       curve.write(table.admittance, table.airgap, i, slip)
+      if (table.frequency !== 1) atFrequency(table, i)
       return
     }
     const law = table.deepBars[i]
     if (law) {
-      r1 += law.addedResistance(slip)
-      x1 = law.reactance(slip)
+      const f = table.frequency
+      r1 += law.addedResistance(slip * f)
+      x1 = f * law.reactance(slip * f)
     }
   }
   const sx1 = slip * x1
@@ -105,7 +110,26 @@ export function evaluateMachine(table: MachineTable, i: number, slip: number): v
   table.admittance[2 * i] = (innerRe * dRe + innerIm * dIm) * inverse
   table.admittance[2 * i + 1] = (innerIm * dRe - innerRe * dIm) * inverse
   const curve = table.special[i] === 1 ? table.curves[i] : null
-  table.airgap[i] = curve ? curve.airgap(slip) : inverse * rotorRe
+  table.airgap[i] = curve ? curve.airgap(slip) / table.frequency : inverse * rotorRe
+}
+
+/** Curves at the flux of another frequency: I ∝ U/f, and T ∝ (U/f)², which with T = P/ω_s is P ∝ U²/f. */
+function atFrequency({ admittance, airgap, frequency }: MachineTable, i: number): void {
+  admittance[2 * i] = admittance[2 * i]! / frequency
+  admittance[2 * i + 1] = admittance[2 * i + 1]! / frequency
+  airgap[i] = airgap[i]! / frequency
+}
+
+/** Reactances of every circuit at a frequency in parts of rated, from those at rated frequency. */
+export function setMachineFrequency(table: MachineTable, rated: Float64Array, part: number): void {
+  table.frequency = part
+  const { circuit } = table
+  for (let at = 0; at < circuit.length; at += stride) {
+    circuit[at + 1] = part * rated[at + 1]!
+    circuit[at + 2] = rated[at + 2]! / part
+    circuit[at + 5] = part * rated[at + 5]!
+    circuit[at + 7] = part * rated[at + 7]!
+  }
 }
 
 /** Whether a machine with typed curves is at a slip that they do not reach. */

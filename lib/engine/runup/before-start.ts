@@ -1,6 +1,8 @@
 import type { Complex } from '../../units/si'
 import type { CaseOutcome } from '../case-result'
+import { ceilingOf, generatorBalance } from '../machines/generator'
 import { withSourceNode } from '../network/admittance'
+import { refuse } from '../network/refusal'
 import { type EquilibriumOutcome, runningEquilibrium } from './equilibrium'
 import type { Plant } from './plant'
 import { type SourceImpedance, sourceImpedance } from './supply'
@@ -137,7 +139,34 @@ function finish(
   speeds: Float64Array,
 ): { ok: true; value: BeforeStart } | NoStart {
   if (!system.solveAt(speeds)) return withoutStart(system, speeds, { kind: 'no-network' })
-  return { ok: true, value: { system, source, emf, speeds, power: supplyPower(system, source) } }
+  const power = supplyPower(system, source)
+  const beyond = beyondGenerator(system, power)
+  if (beyond !== null) return beyond
+  return { ok: true, value: { system, source, emf, speeds, power } }
+}
+
+/** A generator that cannot carry what runs before the start leaves nothing to compute. */
+function beyondGenerator({ plant, solver, network }: System, power: Complex): NoStart | null {
+  const { supply } = plant.input
+  if (!supply.generator) return null
+  const row = network.rowOf[plant.supplyNode]!
+  const voltage = { re: solver.voltage[2 * row]!, im: solver.voltage[2 * row + 1]! }
+  const square = voltage.re ** 2 + voltage.im ** 2
+  const current = {
+    re: (power.re * voltage.re + power.im * voltage.im) / square,
+    im: (power.re * voltage.im - power.im * voltage.re) / square,
+  }
+  const found = generatorBalance(supply.generator, voltage, current)
+  if (found.excitation > ceilingOf(supply.generator, Math.sqrt(square)))
+    return refuse('bad-value', [supply.busId], 'The generator lacks the excitation for what runs before the start.')
+  const most = supply.generator.governor?.largestPower ?? Number.POSITIVE_INFINITY
+  return found.power > most
+    ? refuse(
+        'bad-value',
+        [supply.busId],
+        'The prime mover of the generator lacks the power for what runs before the start.',
+      )
+    : null
 }
 
 /** Power from the source into the supply's bus for the present solution: V·conj((E − V)/Z). */

@@ -1,5 +1,7 @@
 import { type CaseInput, isTabulated, type LoadCurve, type MotorInput } from '../case-input'
+import { onGenerator } from '../generator-input'
 import { circuitProblem, machineProblem } from '../machines/check-machine'
+import { generatorProblem } from '../machines/generator'
 import { type Refusal, refuse } from '../network/refusal'
 import { couplings } from '../network/three-winding'
 import { isZero } from '../numeric/complex'
@@ -52,6 +54,13 @@ function checkSupply(input: CaseInput): Refusal | null {
   if (!finite(supply.impedance) || isZero(supply.impedance) || supply.impedance.re < 0) {
     return bad([supply.busId], 'The source impedance must be above zero.')
   }
+  if (supply.generator) {
+    const problem = generatorProblem(supply.generator)
+    if (problem !== null) return bad([supply.busId], `The generator ${problem}`)
+    if (supply.hold.kind !== 'bus-voltage') return bad([supply.busId], 'A generator holds the voltage of its bus.')
+  }
+  if (onGenerator(input) && input.model?.kind === 'third-order')
+    return bad([supply.busId], 'Rotor fluxes of motors are not computed on a generator; choose the steady circuits.')
   if (!positive(supply.hold.voltage)) return bad([supply.busId], 'The voltage of the supply must be above zero.')
   for (const motor of supply.motorsInLevel) {
     const problem = isTabulated(motor.circuit) ? null : circuitProblem(motor.circuit)

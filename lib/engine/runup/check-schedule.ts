@@ -1,5 +1,7 @@
 import type { CaseInput, MotorInput } from '../case-input'
+import { generatorProblem } from '../machines/generator'
 import { type Refusal, refuse } from '../network/refusal'
+import type { Disturbance } from '../schedule-input'
 
 const positive = (value: number): boolean => Number.isFinite(value) && value > 0
 const notNegative = (value: number): boolean => Number.isFinite(value) && value >= 0
@@ -42,6 +44,24 @@ function motorProblem(motor: MotorInput, motors: readonly MotorInput[]): string 
   return waitsForItself(motor, motors) ? 'its start waits for itself.' : null
 }
 
+function secondSupplyProblem({ remaining, to, decayTime }: Disturbance, onGenerator: boolean): string | null {
+  if (decayTime !== undefined && !notNegative(decayTime))
+    return 'The decay time of the residual voltage must be zero or more.'
+  if (onGenerator && remaining !== 0)
+    return 'A plant on a generator can lose its supply, but has no dip of the network.'
+  if (to === undefined) return null
+  if (remaining !== 0)
+    return 'A plant goes over to another supply with none in between: nothing of the voltage remains.'
+  const problem = to.generator ? generatorProblem(to.generator) : null
+  if (problem !== null) return `The generator ${problem}`
+  if (!positive(to.emf) || !Number.isFinite(to.angle))
+    return 'The second supply needs a voltage above zero and an angle.'
+  const { re, im } = to.impedance
+  return to.generator || (notNegative(re) && Number.isFinite(im) && re + Math.abs(im) > 0)
+    ? null
+    : 'The second supply needs an impedance above zero.'
+}
+
 /** The first thing in the order of starts and disturbances that no run can be made of, or null. */
 export function checkSchedule({ motors, disturbance, supply }: CaseInput): Refusal | null {
   for (const motor of motors) {
@@ -50,6 +70,8 @@ export function checkSchedule({ motors, disturbance, supply }: CaseInput): Refus
   }
   if (disturbance === undefined) return null
   const { at, duration, remaining } = disturbance
+  const second = secondSupplyProblem(disturbance, supply.generator !== undefined)
+  if (second !== null) return refuse('bad-value', [supply.busId], second).outcome
   if (notNegative(at) && positive(duration) && notNegative(remaining)) return null
   return refuse(
     'bad-value',

@@ -6,6 +6,8 @@ import { beforeStart, type NoStart, runningMotors } from './before-start'
 import { type ContactorCourse, contactorCourse } from './contactor'
 import type { Courses, StartCourse } from './course'
 import { watch } from './extremes'
+import { generatorCourse } from './generator-course'
+import { generatorResult } from './generator-result'
 import { notices } from './notices'
 import { createObserver, motorState, observationLength, placeOf } from './observation'
 import { motorOutsideItsCurves } from './outside-curves'
@@ -76,6 +78,7 @@ export function computeCase(input: CaseInput): CaseResult {
     notices: notices(before, courses, record),
     counters: { ...record.counters, networkIterations: system.solver.counters.iterations },
     series: caseSeries(system, record.samples),
+    ...(courses.generator !== null && { generator: generatorResult(system, courses, record) }),
   }
 }
 
@@ -176,6 +179,7 @@ function prepareCourses(system: System, before: Float64Array): Courses {
     })),
     buses: plant.input.buses.map((_, b) => ({ deepest: watch(b, 1, false), highest: watch(b, -1, true) })),
     changeOvers: [],
+    generator: generatorCourse(system, before),
   }
 }
 

@@ -5,6 +5,7 @@ import type { StartCapacitor } from '../starter-input'
 import type { Position, Step, Until } from '../starters/position'
 import type { ContactorCourse } from './contactor'
 import type { Watch } from './extremes'
+import type { GeneratorCourse } from './generator-course'
 
 /** How far one start has come. Instants are case time, s; null until reached. */
 export interface StartCourse {
@@ -77,4 +78,6 @@ export interface Courses {
   running: readonly RunningCourse[]
   buses: readonly BusWatches[]
   changeOvers: ChangeOverResult[]
+  /** Null where no generator supplies the plant at any time. */
+  generator: GeneratorCourse | null
 }

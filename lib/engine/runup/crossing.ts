@@ -1,3 +1,4 @@
+import { generatorState } from '../machines/generator'
 import type { Integrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
 import { codes } from '../starters/connection'
@@ -79,9 +80,18 @@ function candidates(system: System, courses: Courses, { state, time }: Integrato
   found.push(...contactorsMoved(system, courses, state, time))
   for (const { motor, pulledOutAt } of courses.running) {
     if (system.resting[motor]) continue
-    const limit = system.plant.breakdownSpeed[motor]!
-    if (pulledOutAt === null && state[motor]! < limit) note(motor, 'pull-out', limit)
-    if (pulledOutAt !== null && state[motor]! > limit) note(motor, 'recovery', limit)
+    const rated = system.plant.breakdownSpeed[motor]!
+    const { supply } = system
+    const frequencyIn = (at: Float64Array): number => (supply?.generator ? at[supply.at + generatorState.speed]! : 1)
+    const limit = rated * frequencyIn(state)
+    const kind = pulledOutAt === null ? 'pull-out' : 'recovery'
+    const sign = pulledOutAt === null ? 1 : -1
+    if (!(sign * (limit - state[motor]!) > 0)) continue
+    if (!supply?.generator) note(motor, kind, limit)
+    else {
+      const excess = (at: Float64Array): number => sign * (rated * frequencyIn(at) - at[motor]!)
+      found.push({ motor, kind, speed: null, excess, capacitor: -1, at: 0 })
+    }
   }
   return found
 }

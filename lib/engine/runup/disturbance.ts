@@ -11,8 +11,8 @@ export interface DisturbanceCourse {
   act(t: number): boolean
 }
 
-/** A dip or loss of the supply's EMF, which comes back as it was. */
-export function createDisturbance(system: System): DisturbanceCourse {
+/** A dip or loss of the supply's EMF, which comes back as it was, or another supply in its place. */
+export function createDisturbance(system: System, state: Float64Array): DisturbanceCourse {
   const { disturbance } = system.plant.input
   if (disturbance === undefined) return { nextAt: () => null, endsAt: 0, act: () => false }
   const { at, duration, remaining } = disturbance
@@ -25,7 +25,8 @@ export function createDisturbance(system: System): DisturbanceCourse {
     act(t) {
       const due = instants[passed]
       if (due === undefined || t < due - sameInstant) return false
-      system.setSource(parts[passed]!)
+      if (passed === 1 && disturbance.to) system.transfer(state)
+      else system.setSource(parts[passed]!)
       passed++
       return true
     },

@@ -1,12 +1,14 @@
 import { perUnit, second } from '../../units/si'
-import type { BusInput, StaticLoadInput } from '../case-input'
+import type { BusInput, CaseInput, StaticLoadInput } from '../case-input'
 import type { Notice } from '../case-result'
 import { judgeDuty } from '../starters/duty'
 import { hasGap } from '../starters/position'
 import type { BeforeStart } from './before-start'
 import type { Courses } from './course'
+import { generatorResult, overload } from './generator-result'
 import type { SampleStore } from './sampler'
 import type { RunRecord } from './simulate'
+import type { System } from './system'
 
 /** Below this part of rated voltage at the winding, torque falls faster than with the square of the voltage. */
 const reduced = 0.85
@@ -18,7 +20,7 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
   const found: Notice[] = []
   if (source.takenOut !== null) found.push({ kind: 'levels-motors-taken-out', level: source.takenOut })
   const steady = system.fluxModel === null
-  if (steady && plant.input.disturbance?.remaining === 0) found.push({ kind: 'residual-voltage-not-modelled' })
+  found.push(...(steady ? transferNotices(plant.input) : []), ...generatorNotices(system, courses, record))
   for (const start of courses.starts) {
     const former = start.switchedOn ? null : start.former
     if (former !== null)
@@ -50,6 +52,23 @@ export function notices(before: BeforeStart, courses: Courses, record: RunRecord
     if (at !== null) found.push({ kind: 'load-below-floor', loadId: load.id, at: second(at) })
   }
   return found
+}
+
+function transferNotices({ disturbance }: CaseInput): Notice[] {
+  if (disturbance?.remaining !== 0) return []
+  const { duration: deadTime, decayTime } = disturbance
+  if (decayTime === undefined) return [{ kind: 'residual-voltage-not-modelled' }]
+  return deadTime < decayTime ? [{ kind: 'transfer-within-residual', deadTime, decayTime }] : []
+}
+
+function generatorNotices(system: System, courses: Courses, record: RunRecord): Notice[] {
+  if (courses.generator === null) return []
+  const { atCeiling } = generatorResult(system, courses, record)
+  const beyond = overload(system, courses.generator)
+  return [
+    ...(beyond === null ? [] : [{ kind: 'prime-mover-overloaded' as const, ...beyond }]),
+    ...(atCeiling > 0 ? [{ kind: 'excitation-at-ceiling' as const, time: atCeiling }] : []),
+  ]
 }
 
 /** First sample at which a load that is not all impedance is below its floor. */

@@ -1,6 +1,8 @@
 import { ampere, newtonMetre, radianPerSecond, type Volt, volt, voltAmpere } from '../../units/si'
 import type { MotorState } from '../case-result'
 import { loadTorqueAt } from '../driven/load-segments'
+import { generatorState } from '../machines/generator'
+import { supplyStates } from './supply-model'
 import type { System } from './system'
 
 /**
@@ -21,8 +23,19 @@ export const channel = {
 
 export const perMotor = 9
 
-export const observationLength = (system: System): number =>
-  system.plant.input.buses.length + perMotor * system.plant.motors.length
+/** After the motors, where a generator may supply: frequency in Hz, excitation and its lack below the ceiling in V, power in W. */
+export const generatorChannel = { frequency: 0, excitation: 1, room: 2, power: 3 } as const
+
+const motorsEnd = ({ plant }: System): number => plant.input.buses.length + perMotor * plant.motors.length
+
+export const observationLength = (system: System): number => motorsEnd(system) + (generators(system) ? 4 : 0)
+
+/** Whether a generator supplies the plant at some time. */
+export const generators = ({ plant }: System): boolean => supplyStates(plant.input) > 0
+
+/** Place of a generator's channel in an observation. */
+export const generatorPlace = (system: System, which: keyof typeof generatorChannel): number =>
+  motorsEnd(system) + generatorChannel[which]
 
 /** Place of a motor's channel in an observation. */
 export const placeOf = (system: System, motor: number, which: keyof typeof channel): number =>
@@ -34,7 +47,9 @@ export function createObserver(system: System): (state: Float64Array, into: Floa
   const buses = plant.input.buses.length
   const nodes = new Float64Array(2 * (plant.network.order + 1))
   const { nodeOfBus } = plant.topology
+  const end = generators(system) ? motorsEnd(system) : -1
   return (state, into) => {
+    system.supply?.followFrequency()
     system.solver.recover(nodes)
     for (let b = 0; b < buses; b++) into[b] = Math.hypot(nodes[2 * nodeOfBus[b]!]!, nodes[2 * nodeOfBus[b]! + 1]!)
     for (let i = 0; i < plant.motors.length; i++) {
@@ -49,9 +64,19 @@ export function createObserver(system: System): (state: Float64Array, into: Floa
       into[at + 5] = Math.sqrt(system.currentSquare[i]!)
       into[at + 6] = Math.sqrt(square) * connection.terminal[i]!
       into[at + 7] = square * connection.admittance[2 * i]!
-      into[at + 8] = -square * (connection.admittance[2 * i + 1]! + connection.shunt[i]!)
+      into[at + 8] = -square * (connection.admittance[2 * i + 1]! + connection.shunt[i]! * connection.frequency)
     }
+    if (end >= 0) observeGenerator(system, state, into, end)
   }
+}
+
+function observeGenerator({ supply, plant }: System, state: Float64Array, into: Float64Array, end: number): void {
+  const fed = supply?.generator ? supply : null
+  const excitation = fed === null ? 0 : state[fed.at + generatorState.excitation]!
+  into[end] = plant.input.frequency * (fed?.frequency ?? 1)
+  into[end + 1] = excitation
+  into[end + 2] = fed === null ? 0 : fed.ceiling() - excitation
+  into[end + 3] = fed?.power ?? 0
 }
 
 /** The electrical state of one motor in an observation. */

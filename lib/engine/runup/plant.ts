@@ -4,6 +4,7 @@ import { type LoadSegments, loadSegments } from '../driven/load-segments'
 import { breakdownSlip } from '../machines/breakdown-slip'
 import { type MachineTable, machineTable } from '../machines/machine-table'
 import { type AdmittanceMatrix, addElement, addShunts, branchMatrix } from '../network/admittance'
+import { capacitorsAt, linesAt, threeWindingsAt, transformersAt } from '../network/at-frequency'
 import { withLags } from '../network/phase-shift'
 import { refuse, type Setup } from '../network/refusal'
 import { impedancePart, type NonlinearLoads, nonlinearLoads } from '../network/static-load'
@@ -18,6 +19,8 @@ export interface Plant {
   branches: AdmittanceMatrix
   /** Branches, capacitors, charging and the impedance part of static loads; without source and motors. */
   network: AdmittanceMatrix
+  /** The same at a frequency in parts of rated; static loads as at rated frequency. */
+  networkAt(part: number): AdmittanceMatrix
   supplyNode: number
   loads: NonlinearLoads
   motors: readonly MotorInput[]
@@ -49,11 +52,20 @@ export function preparePlant(input: CaseInput): Setup<Plant> {
   if (!found.ok) return found
   const topology = found.value
   const nodeOf = (busId: string): number => topology.nodeOf.get(busId)!
-  const network = branchMatrix(topology, input.lines, transformers, threeWindings)
-  addShunts(network, topology, input.lines, input.capacitors)
-  for (const load of input.loads) {
-    const node = nodeOf(load.busId)
-    addElement(network, node, node, impedancePart(load))
+  const networkAt = (part: number): AdmittanceMatrix => {
+    const lines = linesAt(input.lines, part)
+    const network = branchMatrix(
+      topology,
+      lines,
+      transformersAt(transformers, part),
+      threeWindingsAt(threeWindings, part),
+    )
+    addShunts(network, topology, lines, capacitorsAt(input.capacitors, part))
+    for (const load of input.loads) {
+      const node = nodeOf(load.busId)
+      addElement(network, node, node, impedancePart(load))
+    }
+    return network
   }
   const { motors } = input
   if (motors.length === 0 && input.loads.length === 0 && input.buses.length === 0) {
@@ -66,7 +78,8 @@ export function preparePlant(input: CaseInput): Setup<Plant> {
       input,
       topology,
       branches: branchMatrix(topology, input.lines, transformers, threeWindings),
-      network,
+      network: networkAt(1),
+      networkAt,
       supplyNode: nodeOf(input.supply.busId),
       loads: nonlinearLoads(input.loads, topology.nodeOf),
       motors,

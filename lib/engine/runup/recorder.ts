@@ -1,7 +1,7 @@
 import type { Integrator } from '../numeric/dormand-prince'
 import type { Courses } from './course'
 import { createExtremeSearch, type Watch } from './extremes'
-import { createObserver, observationLength, placeOf } from './observation'
+import { createObserver, generatorPlace, generators, observationLength, placeOf } from './observation'
 import { addSample, type SampleStore, sampleStore } from './sampler'
 import type { System } from './system'
 
@@ -125,6 +125,7 @@ function allWatches(courses: Courses): Watch[] {
     ...courses.buses.flatMap((bus) => [bus.deepest, bus.highest]),
     ...courses.starts.flatMap((start) => Object.values<Watch>(start.watches)),
     ...courses.running.flatMap((running) => Object.values<Watch>(running.watches)),
+    ...Object.values<Watch>(courses.generator?.watches ?? {}),
   ]
 }
 
@@ -146,5 +147,12 @@ export function plotScales(system: System): Float64Array {
     scale[placeOf(system, i, 'active')] = 2 * motor.ratedPower
     scale[placeOf(system, i, 'reactive')] = 2 * motor.ratedPower
   })
+  if (!generators(system)) return scale
+  const { supply, disturbance, frequency } = system.plant.input
+  const set = (supply.generator ?? disturbance?.to?.generator)!
+  scale[generatorPlace(system, 'frequency')] = 0.05 * frequency
+  scale[generatorPlace(system, 'excitation')] = 2 * set.ratedVoltage
+  scale[generatorPlace(system, 'room')] = 2 * set.ratedVoltage
+  scale[generatorPlace(system, 'power')] = set.ratedPower
   return scale
 }

@@ -23,7 +23,8 @@ import type {
 import { type DutyResult, judgeDuty } from '../starters/duty'
 import type { Courses, RunningCourse, StartCourse } from './course'
 import type { Watch } from './extremes'
-import { placeOf } from './observation'
+import { generatorSeries } from './generator-result'
+import { generatorPlace, generators, placeOf } from './observation'
 import { plotScales } from './recorder'
 import { type SampleStore, sampleAt, thinSamples } from './sampler'
 import type { SettledStates } from './settled'
@@ -207,6 +208,7 @@ export function caseSeries(system: System, samples: SampleStore): CaseSeries {
   const { buses } = system.plant.input
   const { motors } = system.plant
   const places = motors.flatMap((_, i) => plotted.map((which) => placeOf(system, i, which)))
+  if (generators(system)) places.push(generatorPlace(system, 'frequency'), generatorPlace(system, 'excitation'))
   const kept = thinSamples(samples, [...buses.keys(), ...places], plotScales(system))
   const column = (place: number): number[] => kept.map((index) => samples.data[index * samples.width + place]!)
   const motorSeries = (i: number): MotorSeries => ({
@@ -223,5 +225,6 @@ export function caseSeries(system: System, samples: SampleStore): CaseSeries {
     time: kept.map((index) => samples.time[index]!),
     busVoltage: Object.fromEntries(buses.map((bus, b) => [bus.id, column(b)])),
     motors: Object.fromEntries(motors.map((motor, i) => [motor.id, motorSeries(i)])),
+    ...(generators(system) && { generator: generatorSeries(system, column) }),
   }
 }

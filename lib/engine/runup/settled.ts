@@ -1,5 +1,6 @@
 import type { Courses } from './course'
 import { runningEquilibrium } from './equilibrium'
+import { settleSupply } from './generator-course'
 import { findBalance, turningMotors } from './hang'
 import { createObserver, observationLength } from './observation'
 import type { RunRecord } from './simulate'
@@ -29,6 +30,7 @@ export function settledStates(system: System, courses: Courses, record: RunRecor
     observe(speeds, into)
     return into
   }
+  if (system.supply?.generator) return settledOnGenerator(system, courses, record, speeds, observation)
   const moving = turningMotors(system)
   const balance = findBalance(system, speeds, near)
   if (balance === null) return { afterStart: null, afterProcess: null, speeds }
@@ -41,6 +43,24 @@ export function settledStates(system: System, courses: Courses, record: RunRecor
   system.driven = system.plant.process
   const carried = !crawling && runningEquilibrium(system, moving, speeds).kind === 'found'
   const afterProcess = carried ? observation() : null
+  system.driven = system.plant.driven
+  return { afterStart, afterProcess, speeds: ended }
+}
+
+/** On a generator the balance is waited for: voltage and frequency move with it. */
+function settledOnGenerator(
+  system: System,
+  courses: Courses,
+  record: RunRecord,
+  state: Float64Array,
+  observation: () => Float64Array | null,
+): SettledStates {
+  const ended = Float64Array.from(state)
+  const started = courses.starts.every((start) => start.outcome?.kind === 'started')
+  if (!started || record.end.kind !== 'settled') return { afterStart: null, afterProcess: null, speeds: ended }
+  const afterStart = observation()
+  system.driven = system.plant.process
+  const afterProcess = settleSupply(system, state, true) ? observation() : null
   system.driven = system.plant.driven
   return { afterStart, afterProcess, speeds: ended }
 }

@@ -1,7 +1,5 @@
 import { type Complex, radianPerSecond, second } from '../../units/si'
 import { pieceAt } from '../driven/load-segments'
-import { evaluateMachine } from '../machines/machine-table'
-import { cagesOf } from '../machines/rotor-flux'
 import { createIntegrator } from '../numeric/dormand-prince'
 import { findRoot } from '../numeric/root'
 import { attemptEnd, endAttempts } from './attempts'
@@ -11,6 +9,7 @@ import { contactorInstants, noteVoltage, switchContactors, tripContactors } from
 import { type Courses, type StartCourse, untilOf } from './course'
 import { type Crossing, firstCrossings } from './crossing'
 import { createDisturbance } from './disturbance'
+import { noteGenerator } from './generator-course'
 import { findBalance, findHang, hangOutcome } from './hang'
 import { busVoltages, motorState, placeOf } from './observation'
 import { createRecorder } from './recorder'
@@ -27,7 +26,7 @@ import {
   switchCapacitor,
   switchDue,
 } from './schedule'
-import type { System } from './system'
+import { stepScale } from './step-scale'
 import { protectionDue, trip, tripProtected } from './trip'
 
 /** How a run ended. */
@@ -51,8 +50,6 @@ export interface RunRecord {
 
 /** Longest step, s. */
 const longest = 1
-/** Error allowed in a step in a rotor flux, in parts of that at rated voltage. */
-const fluxTolerance = 1e-7
 /** Within this time of a switching, s, rotor fluxes build up and swing, and the torque is not yet that of the speed. */
 const fluxTime = 0.2
 /** Torque left, in parts of rated, below which a shaft counts as settled, and as worth a look for a hang. */
@@ -84,7 +81,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const recorder = createRecorder(system, courses, integrator)
   const { now } = recorder
   const scratch = new Float64Array(system.stateLength)
-  const disturbance = createDisturbance(system)
+  const supplied = courses.generator !== null
+  const disturbance = createDisturbance(system, state)
   let first: Float64Array | null = null
   let firstPower: Complex | null = null
   let lastHangTorque = Number.POSITIVE_INFINITY
@@ -126,6 +124,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
       first = Float64Array.from(now)
       firstPower = supplyPower(system, before.source)
     }
+    if (courses.generator !== null && !noteGenerator(system, courses.generator, now, state, t)) return false
     for (const move of moved) {
       const { start } = move
       if (start.standstill === null && !move.off) start.standstill = motorState(system, now, start.motor)
@@ -249,12 +248,17 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     const open = starts.filter((start) => start.outcome === null && start.switchedOn)
     // A start that was given up goes on turning: there is no settled plant to wait for.
     const givenUp = starts.some(({ outcome }) => outcome?.kind === 'timed-out' || outcome?.kind === 'tripped')
-    if (open.length === 0) return givenUp || torque < settledTorque
+    if (open.length === 0) return givenUp || (torque < settledTorque && isSupplyCalm())
     const waits = open.some((start) => untilOf(start)?.kind === 'time' || rampEnd(start) > t)
-    if (waits || torque > hangingTorque || torque > lastHangTorque / 2) return false
+    if (waits || torque > hangingTorque || torque > lastHangTorque / 2 || !isSupplyCalm()) return false
     lastHangTorque = torque
     judgeHanging(open)
     return open.every((start) => start.outcome !== null) && torque < settledTorque
+  }
+
+  function isSupplyCalm(): boolean {
+    if (!system.supply?.generator) return true
+    return system.derivative(integrator.time, state, scratch) && system.supply.isCalm(scratch)
   }
 
   /** A shaft still held at rest that goes once the fluxes of its motor stand; after a steady solution that this makes. */
@@ -282,7 +286,8 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 
   /** Passes over time in which nothing moves, up to the next instant; false where something does move. */
   function skipStillness(t: number, until: number): boolean {
-    const moves = system.fluxModel !== null || starts.some((start) => start.position === 'open' || rampEnd(start) > t)
+    const moves =
+      system.fluxModel !== null || supplied || starts.some((start) => start.position === 'open' || rampEnd(start) > t)
     if (until - t <= longest || restlessness() > settledTorque || moves) return false
     const speeds = findBalance(system, state, 1e-5)
     if (speeds === null) return false
@@ -372,24 +377,4 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
 function noteHeat(start: StartCourse, i2t: number): void {
   start.extraHeat += ((start.steps[start.step]?.heat ?? 1) - 1) * (i2t - start.i2tSeen)
   start.i2tSeen = i2t
-}
-
-/** Error allowed in a step: speeds in parts of synchronous speed, integrals in parts of ten seconds of locked rotor at rated voltage. */
-function stepScale(system: System, tolerance: number): Float64Array {
-  const { plant } = system
-  const scale = new Float64Array(system.stateLength)
-  plant.motors.forEach((motor, i) => {
-    scale[i] = tolerance * plant.synchronous[i]!
-    const at = system.integral[i]!
-    if (at < 0) return
-    evaluateMachine(plant.machines, i, 1)
-    const [re, im] = [plant.machines.admittance[2 * i]!, plant.machines.admittance[2 * i + 1]!]
-    scale[at] = (10 * tolerance * motor.ratedVoltage ** 2 * (re * re + im * im)) / 3
-    scale[at + 1] = 10 * tolerance * motor.ratedVoltage ** 2 * plant.machines.airgap[i]!
-  })
-  plant.motors.forEach((motor, i) => {
-    const at = system.fluxModel?.index[i] ?? -1
-    if (at >= 0) scale.fill(fluxTolerance * motor.ratedVoltage, at, at + 2 * cagesOf(plant.machines, i))
-  })
-  return scale
 }

@@ -1,5 +1,7 @@
 import { type Complex, type VoltAmpere, voltAmpere } from '../../units/si'
+import type { GeneratorInput } from '../generator-input'
 import { atSlip } from '../machines/at-slip'
+import { firstReactance } from '../machines/generator'
 import { type AdmittanceMatrix, addElement } from '../network/admittance'
 import { refuse, type Setup } from '../network/refusal'
 import { createSparseSolver } from '../network/sparse-solver'
@@ -42,6 +44,8 @@ function seenFrom({ supplyNode, topology }: Plant, matrix: AdmittanceMatrix): Co
  */
 export function sourceImpedance(plant: Plant): Setup<SourceImpedance> {
   const { supply } = plant.input
+  if (supply.generator)
+    return { ok: true, value: { impedance: generatorImpedance(supply.generator, 1), takenOut: null } }
   if (supply.motorsInLevel.length === 0) return { ok: true, value: { impedance: supply.impedance, takenOut: null } }
   const matrix = { order: plant.branches.order, data: Float64Array.from(plant.branches.data) }
   for (const motor of supply.motorsInLevel) {
@@ -68,3 +72,9 @@ export function sourceImpedance(plant: Plant): Setup<SourceImpedance> {
     },
   }
 }
+
+/** Impedance in ohm behind which a generator meets the first instant, at a frequency in parts of rated. */
+export const generatorImpedance = (generator: GeneratorInput, part: number): Complex => ({
+  re: generator.resistance,
+  im: part * firstReactance(generator),
+})

@@ -1,16 +1,16 @@
 import { type LoadSegments, loadTorque, loadTorqueAt } from '../driven/load-segments'
-import { evaluateMachine } from '../machines/machine-table'
+import { evaluateMachine, setMachineFrequency } from '../machines/machine-table'
 import { saturate, saturationOf } from '../machines/saturation'
 import type { AdmittanceMatrix } from '../network/admittance'
-import { reduceNetwork } from '../network/reduce'
-import { createSolver, type NetworkSolver } from '../network/solver'
-import { createSparseSolver } from '../network/sparse-solver'
+import type { NetworkSolver } from '../network/solver'
 import { codes, connect, connections, disconnect, evaluateConnection, isRegulated } from '../starters/connection'
 import { evaluateDrive } from '../starters/drive'
 import type { Step } from '../starters/position'
 import { createFluxModel, type FluxModel } from './flux-model'
 import type { Plant } from './plant'
 import { createRegulation } from './regulation'
+import { solvableNetwork } from './solvable-network'
+import { createSupplyModel, type SupplyModel, supplyStates } from './supply-model'
 
 /** The plant with its network reduced for one driving node, motors in given positions. The run-up works on it in place. */
 export interface System {
@@ -34,12 +34,16 @@ export interface System {
   readonly stateLength: number
   /** Rotor fluxes behind the integrals in the state; null in a quasi-static case. */
   readonly fluxModel: FluxModel | null
+  /** A generator, or supplies that follow one another; null for one supply of the network. */
+  readonly supply: SupplyModel | null
   /** Load curves in force. */
   driven: readonly LoadSegments[]
   /** Brings a motor into a position of its starting device at case time t, or off the line. */
   move(motor: number, step: Pick<Step, 'link' | 'rotorResistance'> | null, t: number): void
   /** EMF in parts of that before the start; 0 takes the plant off its supply. */
   setSource(part: number): void
+  /** Puts a plant without supply on its second one. */
+  transfer(state: Float64Array): void
   /** Case time that `solveAt` holds for; ramps of starting devices look at it. */
   setTime(t: number): void
   /** Solves the network with every motor at the given speed (rad/s); false where there is no solution. */
@@ -58,44 +62,18 @@ export interface System {
 const regulationTolerance = 1e-11
 const mostRounds = 60
 
-/** Nodes that stay after the reduction: motors first, nodes with nonlinear loads last; how many come first. */
-function keptNodes(plant: Plant, driven: number): { nodes: number[]; linear: number } {
-  const nonlinear = new Set<number>(plant.loads.node)
-  nonlinear.delete(driven)
-  const motors = new Set<number>(plant.node)
-  const linear = [...motors].filter((node) => node !== driven && !nonlinear.has(node))
-  return { nodes: [...linear, ...nonlinear], linear: linear.length }
-}
-
-/** Nodes that matter from which on the network is solved whole and sparse; with fewer the reduced dense one is faster. */
-const sparseFrom = 24
-
-/** The network made ready for solving; null where it is singular. */
-function solvable(
-  plant: Plant,
-  matrix: AdmittanceMatrix,
-  drivenNode: number,
-): { rowOf: Int32Array; solver: NetworkSolver } | null {
-  const kept = keptNodes(plant, drivenNode)
-  const nominalOf = (node: number): number => plant.topology.busOfNode[node]!.nominal
-  if (kept.nodes.length >= sparseFrom) return createSparseSolver(matrix, plant.loads, drivenNode, nominalOf)
-  const network = reduceNetwork(matrix, kept.nodes, drivenNode)
-  if (network === null) return null
-  const nominal = Float64Array.from(kept.nodes, nominalOf)
-  return { rowOf: network.rowOf, solver: createSolver(network, plant.loads, kept.linear, nominal) }
-}
-
 /**
  * Reduces the network to motors and nonlinear loads, driven at one node, and joins it with the motors.
  *
  * @returns null where the rest of the network is singular
  */
 export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode: number): System | null {
-  const network = solvable(plant, matrix, drivenNode)
+  const network = solvableNetwork(plant, matrix, drivenNode)
   if (network === null) return null
   const { solver } = network
   const count = plant.motors.length
-  const { machines, synchronous, torqueFactor, inertia } = plant
+  const { machines, torqueFactor, inertia } = plant
+  const synchronous = Float64Array.from(plant.synchronous)
   const row = Int32Array.from(plant.node, (node) => network.rowOf[node]!)
   const connection = connections(count)
   const ownRotor = Float64Array.from({ length: count }, (_, i) => machines.circuit[8 * i + 4]!)
@@ -114,6 +92,18 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
   })
   const fluxModel = createFluxModel(plant, connection, length)
   if (fluxModel !== null) length = fluxModel.length
+  const ratedCircuit = Float64Array.from(machines.circuit)
+  const found =
+    network.reduced !== null && drivenNode === plant.network.order
+      ? createSupplyModel(plant, network.reduced.nodes, length, network.reduced.network, solver, (part) => {
+          setMachineFrequency(machines, ratedCircuit, part)
+          connection.frequency = part
+          for (let i = 0; i < count; i++) synchronous[i] = part * plant.synchronous[i]!
+        })
+      : null
+  if (found === 'singular') return null
+  const feeding: SupplyModel | null = found
+  length += supplyStates(plant.input)
   const fed = new Float64Array(2)
   const saturations = plant.motors.map(({ circuit }) => saturationOf(circuit))
   const { shunt, injection, voltage, driven } = solver
@@ -144,7 +134,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     const saturation = saturations[i]
     if (saturation) {
       // Behind an impedance the winding's share of the voltage is that of the round before.
-      const winding = Math.sqrt(connection.winding[i]! * square) / plant.motors[i]!.ratedVoltage
+      const winding = Math.sqrt(connection.winding[i]! * square) / plant.motors[i]!.ratedVoltage / connection.frequency
       saturate(machines, i, saturation, slip, winding)
     }
     const atFull = regulated[i] ? (torqueFactor[i]! * machines.airgap[i]! * square) / synchronous[i]! : 0
@@ -155,7 +145,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     const at = 2 * row[i]!
     if (at < 0) return
     shunt[at] = shunt[at]! + connection.admittance[2 * i]!
-    shunt[at + 1] = shunt[at + 1]! + connection.admittance[2 * i + 1]! + connection.shunt[i]!
+    shunt[at + 1] = shunt[at + 1]! + connection.admittance[2 * i + 1]! + connection.shunt[i]! * connection.frequency
   }
 
   /** Network and devices in turns until the voltages that the devices saw are those of the network. */
@@ -217,8 +207,10 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
 
   function solveAt(speeds: Float64Array): boolean {
     const moving = fluxModel?.on ? fluxModel : null
+    if (feeding !== null && !feeding.look(speeds)) return false
     if (dead) {
       withoutSupply()
+      feeding?.carry(true)
       if (moving !== null) for (let i = 0; i < count; i++) if (moving.index[i]! >= 0) moving.open(i, speeds[i]!, speeds)
       return true
     }
@@ -234,6 +226,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       addShunt(i)
     }
     if (!(regulatedMotors > 0 ? regulate(speeds) : solver.solve())) return false
+    feeding?.carry(false)
     for (let i = 0; i < count; i++) {
       const square = squareAt(i)
       busSquare[i] = square
@@ -263,7 +256,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       const yIm = connection.admittance[2 * i + 1]!
       const share = connection.current[i]!
       currentSquare[i] = ((yRe * yRe + yIm * yIm) * square * share * share) / 3
-      const withCapacitors = yIm + connection.shunt[i]!
+      const withCapacitors = yIm + connection.shunt[i]! * connection.frequency
       lineSquare[i] = ((yRe * yRe + withCapacitors * withCapacitors) * square) / 3
     }
     return true
@@ -298,6 +291,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
     integral,
     stateLength: length,
     fluxModel,
+    supply: feeding,
     driven: plant.driven,
     move(motor, step, t) {
       const added = step?.rotorResistance ?? 0
@@ -327,6 +321,10 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       if (dead) lastVoltage.set(voltage)
       driven.set([part * emf[0], part * emf[1]])
     },
+    transfer(state) {
+      system.setSource(1)
+      feeding?.transfer(state)
+    },
     solveAt,
     derivative(t, state, rate) {
       time = t
@@ -340,6 +338,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
         rate[at + 1] = slipLoss[i]!
       }
       if (shared.length > 0) couple(rate)
+      feeding?.rates(state, rate)
       if (!fluxModel?.on) return true
       for (let i = 0; i < count; i++) {
         const at = fluxModel.index[i]!
@@ -355,6 +354,7 @@ export function createSystem(plant: Plant, matrix: AdmittanceMatrix, drivenNode:
       return found
     },
     begin(state) {
+      if (feeding !== null && solveAt(state)) feeding.begin(state)
       if (fluxModel === null || !solveAt(state)) return
       for (let i = 0; i < count; i++) {
         const at = fluxModel.index[i]!

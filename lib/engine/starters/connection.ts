@@ -34,6 +34,8 @@ export interface Connections {
   motorSquare: Float64Array
   lineSquare: Float64Array
   slipLoss: Float64Array
+  /** Frequency in parts of rated, with which the reactances of devices go. */
+  frequency: number
 }
 
 export const codes = { nothing: 0, direct: 1, tap: 2, star: 3, series: 4, part: 5, soft: 6, drive: 7 } as const
@@ -53,6 +55,7 @@ export function connections(count: number): Connections {
     motorSquare: new Float64Array(count),
     lineSquare: new Float64Array(count),
     slipLoss: new Float64Array(count),
+    frequency: 1,
   }
 }
 
@@ -150,7 +153,7 @@ export function evaluateConnection(
   } else if (code === codes.tap || code === codes.series) {
     const k = connection.settings[width * i]!
     const zRe = connection.settings[width * i + 1]!
-    const zIm = connection.settings[width * i + 2]!
+    const zIm = connection.settings[width * i + 2]! * connection.frequency
     const yRe = k * k * re
     const yIm = k * k * im
     const dRe = 1 + zRe * yRe - zIm * yIm

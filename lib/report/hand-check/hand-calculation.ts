@@ -4,7 +4,7 @@ import type { MotorRecord } from '@/lib/study/document/machine-records'
 import type { SupplyRecord, TransformerRecord } from '@/lib/study/document/network-records'
 import type { StudyDocument } from '@/lib/study/document/study-document'
 import { circuitEstimator, circuitInput } from '@/lib/study/to-engine/circuit-input'
-import { voltageFactorOf } from '@/lib/study/to-engine/supply-input'
+import { generatorImpedance, voltageFactorOf } from '@/lib/study/to-engine/supply-input'
 import type { Complex } from '@/lib/units/si'
 import type { Wording } from '../wording/en'
 import { add, byRatio, magnitude, scale } from './complex'
@@ -41,6 +41,9 @@ type Words = Wording['handCheck']
 const supplyPart = (supply: SupplyRecord, words: Words): HandPart => {
   const { level, statedAt, xOverR } = supply
   const name = words.supply(supply.tag)
+  if (level.form === 'generator') {
+    return { name, how: words.supplyGenerator, impedance: generatorImpedance(level, statedAt.si) }
+  }
   if (level.form === 'impedance' || xOverR === null) {
     const impedance =
       level.form === 'impedance'

@@ -9,7 +9,7 @@ import { second, siemens } from '@/lib/units/si'
 export const reducedCase = (input: CaseInput, motorId: string): CaseInput | null => {
   const motor = input.motors.find((one) => one.id === motorId)
   if (motor?.duty.kind !== 'starting') return null
-  const { supply } = input
+  const { generator: _generator, ...supply } = input.supply
   const { load, processLoad } = motor.duty
   const { shaft: _shaft, ...alone } = motor
   const { disturbance: _disturbance, ...still } = input

@@ -1,6 +1,7 @@
 import type { ReactElement } from 'react'
 import type { CaseFigure } from '@/lib/drawing/case-figure'
 import { currentPlot } from '@/lib/drawing/current-plot'
+import { frequencyPlot } from '@/lib/drawing/frequency-plot'
 import type { Scene } from '@/lib/drawing/scene'
 import { mostSeries } from '@/lib/drawing/series-style'
 import { speedPlot } from '@/lib/drawing/speed-plot'
@@ -60,6 +61,7 @@ const plotsOf = (context: ReportContext, { record, result }: CaseRun): readonly 
   }
   const shown: CaseFigure = { document, result, verdicts: input.result.verdicts }
   const size = { width: width / pt, height: 55 }
+  const frequency = frequencyPlot(shown, { ...size, height: 46 })
   const started = result.motors.filter(({ start }) => start !== null).map(({ motorId }) => motorId)
   return [
     ...head,
@@ -67,6 +69,7 @@ const plotsOf = (context: ReportContext, { record, result }: CaseRun): readonly 
       figure(context, voltagePlot(shown, { ...size, busIds: [id] }), say.voltage(busTag(document, id))),
     ),
     figure(context, voltagePlot(shown, { ...size, busIds: overview(shown) }), say.places),
+    ...(frequency ? [figure(context, frequency, say.frequency)] : []),
     figure(context, speedPlot(shown, { ...size, height: 46 }), say.speed),
     figure(context, currentPlot(shown, { ...size, height: 46 }), say.current),
     ...started.flatMap((motorId) => {

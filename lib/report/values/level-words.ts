@@ -1,12 +1,8 @@
 import type { SupplyRecord } from '@/lib/study/document/network-records'
+import { isShortCircuitLevel, levelText } from '@/lib/study/words/level-text'
 
 /** `90 MVA, X/R 2.5` as typed. */
-export const levelWords = ({ level, xOverR }: SupplyRecord): string => {
-  const size =
-    level.form === 'power'
-      ? level.power.text
-      : level.form === 'current'
-        ? level.current.text
-        : `${level.resistance.text} + j ${level.reactance.text}`
-  return xOverR === null ? size : `${size}, X/R ${xOverR.text}`
-}
+export const levelWords = (supply: SupplyRecord): string =>
+  supply.xOverR === null || !isShortCircuitLevel(supply)
+    ? levelText(supply)
+    : `${levelText(supply)}, X/R ${supply.xOverR.text}`

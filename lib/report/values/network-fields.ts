@@ -1,3 +1,5 @@
+import type { Entered } from '@/lib/study/document/entered'
+import type { GeneratorLevel } from '@/lib/study/document/generator-level'
 import type {
   BusRecord,
   CapacitorRecord,
@@ -21,6 +23,7 @@ export const busFields = (words: Words): readonly RecordField<BusRecord>[] => [
 const levelOf = ({ level }: SupplyRecord): FieldValue | null => {
   if (level.form === 'power') return ofEntered(level.power)
   if (level.form === 'current') return ofEntered(level.current)
+  if (level.form === 'generator') return ofEntered(level.rating)
   const { resistance, reactance } = level
   return { text: `${resistance.text} + j ${reactance.text}`, provenance: reactance.provenance }
 }
@@ -30,10 +33,48 @@ const factorOf = ({ voltageFactor }: SupplyRecord, words: Words): FieldValue | n
   return ofWords(voltageFactor.kind === 'unknown' ? words.values.unknown : voltageFactor.kind)
 }
 
+/** The data sheet of a generator; empty for a supply of the network. */
+const generatorFields = (words: Words): readonly RecordField<SupplyRecord>[] => {
+  const say = words.generator
+  const field = (
+    label: string,
+    of: (level: GeneratorLevel) => Entered | null | undefined,
+  ): RecordField<SupplyRecord> => ({
+    label,
+    of: ({ level }) => (level.form === 'generator' ? ofEntered(of(level) ?? null) : null),
+  })
+  return [
+    field(say.resistance, (one) => one.resistance),
+    field(say.synchronous, (one) => one.synchronous),
+    field(say.transient, (one) => one.transient),
+    field(say.transientTime, (one) => one.transientTime),
+    field(say.subtransient, (one) => one.subtransient?.reactance),
+    field(say.subtransientTime, (one) => one.subtransient?.time),
+    field(say.quadrature, (one) => one.quadrature?.reactance),
+    field(say.quadratureTime, (one) => one.quadrature?.time),
+    field(say.gain, (one) => one.regulator?.gain),
+    field(say.regulatorTime, (one) => one.regulator?.time),
+    field(say.reset, (one) => one.regulator?.reset),
+    field(say.ceiling, (one) => one.regulator?.ceiling),
+    {
+      label: say.exciter,
+      of: ({ level }) =>
+        level.form === 'generator' && level.regulator
+          ? ofWords(level.regulator.fedFromTerminals ? say.fromTerminals : say.independent)
+          : null,
+    },
+    field(say.inertia, (one) => one.inertia),
+    field(say.droop, (one) => one.governor?.droop),
+    field(say.governorTime, (one) => one.governor?.time),
+    field(say.largestPower, (one) => one.governor?.power),
+  ]
+}
+
 export const supplyFields = (words: Words, document: StudyDocument): readonly RecordField<SupplyRecord>[] => [
   { label: words.meaning, of: (supply) => ofWords(supply.meaning) },
   { label: words.bus, of: (supply) => ofWords(busTag(document, supply.bus)) },
   { label: words.level, of: levelOf },
+  ...generatorFields(words),
   { label: words.statedAt, of: (supply) => ofEntered(supply.statedAt) },
   { label: words.voltageFactor, of: (supply) => factorOf(supply, words) },
   { label: words.levelInstant, of: (supply) => ofWords(words.values[supply.instant]) },

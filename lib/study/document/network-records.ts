@@ -1,5 +1,6 @@
 import * as z from 'zod'
 import { entered } from './entered'
+import { generatorLevel } from './generator-level'
 import { note, recordId, tag } from './identity'
 
 export const busRecord = z.strictObject({
@@ -17,8 +18,11 @@ const level = z
     z.strictObject({ form: z.literal('power'), power: entered('apparent-power') }),
     z.strictObject({ form: z.literal('current'), current: entered('current') }),
     z.strictObject({ form: z.literal('impedance'), resistance: entered('impedance'), reactance: entered('impedance') }),
+    generatorLevel,
   ])
-  .describe('Short-circuit level as the utility states it: power, current, or the impedance R + jX.')
+  .describe(
+    'Short-circuit level as the utility states it: power, current, or the impedance R + jX; or the generator that supplies the plant instead.',
+  )
 
 const voltageFactor = z
   .discriminatedUnion('kind', [

@@ -43,7 +43,30 @@ export const scheduleRecord = z.strictObject({
   tag,
   starts: z.array(scheduledStart).max(50).describe('Which motors start, when, and by which method.'),
   disturbance: z
-    .strictObject({ at: entered('time'), duration: entered('time'), remaining: entered('ratio') })
+    .strictObject({
+      at: entered('time'),
+      duration: entered('time'),
+      remaining: entered('ratio'),
+      to: z
+        .strictObject({
+          supply: recordId,
+          angle: z
+            .number()
+            .min(-180)
+            .max(180)
+            .default(0)
+            .describe('By which its voltage leads that of the first, degrees.'),
+        })
+        .nullable()
+        .default(null)
+        .describe(
+          'Supply at the same bus that the plant comes back on; it waits unloaded at its stated voltage. Null: the first one comes back.',
+        ),
+      decayTime: entered('time')
+        .nullable()
+        .default(null)
+        .describe('Time in which the residual voltage of the motors decays; a quicker return is not assessed.'),
+    })
     .nullable()
     .default(null)
     .describe(

@@ -1,6 +1,7 @@
 import type { FieldIssue } from '../../errors'
 import type { CaseChange, CaseRecord } from '../document/case-records'
 import type { StudyDocument } from '../document/study-document'
+import { isShortCircuitLevel } from '../words/level-text'
 import { known, unless } from './issue'
 import type { RecordIndex } from './record-index'
 
@@ -15,12 +16,14 @@ const changeIssues = (
   switch (change.kind) {
     case 'voltage-before':
       return []
-    case 'voltage-factor':
+    case 'voltage-factor': {
+      const supply = index.supplies.get(record.supply)
       return unless(
-        index.supplies.get(record.supply)?.level.form !== 'impedance',
+        supply === undefined || isShortCircuitLevel(supply),
         path,
-        `The supply of case ${record.tag} is given as an impedance, which contains no voltage factor; remove this change.`,
+        `The supply of case ${record.tag} is no short-circuit level and contains no voltage factor; remove this change.`,
       )
+    }
     case 'transformer-impedance':
       return known(index.transformers, change.transformer, [...path, 'transformer'], who, 'transformer')
     default: {
@@ -57,6 +60,17 @@ const startsAndRuns = (record: CaseRecord, index: RecordIndex, path: FieldIssue[
   })
 }
 
+/** A transfer goes to a supply at the same bus. */
+const transferAtOneBus = (record: CaseRecord, index: RecordIndex, path: FieldIssue['path']): FieldIssue[] => {
+  const to = index.schedules.get(record.schedule)?.disturbance?.to
+  const [first, second] = [index.supplies.get(record.supply), to && index.supplies.get(to.supply)]
+  return unless(
+    !first || !second || first.bus === second.bus,
+    path,
+    `Case ${record.tag} goes over from supply ${first?.tag} to ${second?.tag}, which stand at different buses; choose one at the same bus.`,
+  )
+}
+
 /** What a case takes together must exist and fit together. */
 export const caseReferences = ({ cases }: StudyDocument, index: RecordIndex): FieldIssue[] =>
   cases.flatMap((record, i) => {
@@ -72,6 +86,7 @@ export const caseReferences = ({ cases }: StudyDocument, index: RecordIndex): Fi
       ...known(index.schedules, record.schedule, [...path, 'schedule'], who, 'schedule'),
       ...known(index.loadConditions, record.loadCondition, [...path, 'loadCondition'], who, 'load condition'),
       ...startsAndRuns(record, index, path),
+      ...transferAtOneBus(record, index, [...path, 'schedule']),
       ...record.changes.flatMap((change, k) => changeIssues(change, record, connected, index, [...path, 'changes', k])),
       ...unless(
         record.role !== 'sensitivity' || record.reason.trim() !== '',

@@ -5,6 +5,7 @@ import type { Entered } from '../document/entered'
 import type { MotorRecord } from '../document/machine-records'
 import type { StudyDocument } from '../document/study-document'
 import { checkDrivenLoads } from './check-driven-loads'
+import { generatorIssues } from './check-generator'
 import { checkProtection } from './check-protection'
 import { checkStarters } from './check-starters'
 import { unless } from './issue'
@@ -27,7 +28,7 @@ const supplies = ({ plant }: StudyDocument): FieldIssue[] =>
     const { level, voltageFactor, xOverR, tag } = supply
     return [
       ...unless(
-        level.form === 'impedance' || xOverR !== null,
+        level.form === 'impedance' || level.form === 'generator' || xOverR !== null,
         [...path, 'xOverR'],
         `Give the X/R of supply ${tag}; the report cannot leave it open, and there is no default for a weak network.`,
       ),
@@ -35,6 +36,7 @@ const supplies = ({ plant }: StudyDocument): FieldIssue[] =>
       ...(level.form === 'current'
         ? above(level.current, 0, [...path, 'level', 'current'], `The level of supply ${tag}`)
         : []),
+      ...(level.form === 'generator' ? generatorIssues(level, supply, path) : []),
       ...(voltageFactor.kind === 'other'
         ? above(voltageFactor.value, 0, [...path, 'voltageFactor', 'value'], `The voltage factor of supply ${tag}`)
         : []),

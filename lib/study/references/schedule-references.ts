@@ -64,6 +64,29 @@ const contactorIssues = ({ contactors, tag }: ScheduleRecord, path: Path, index:
     ),
   ])
 
+const transferIssues = (
+  { tag }: ScheduleRecord,
+  { to, remaining, decayTime }: NonNullable<ScheduleRecord['disturbance']>,
+  path: Path,
+  index: RecordIndex,
+): FieldIssue[] => [
+  ...unless(
+    decayTime === null || decayTime.si >= 0,
+    [...path, 'decayTime'],
+    `The decay time of the residual voltage in schedule ${tag} cannot be below 0.`,
+  ),
+  ...(to === null
+    ? []
+    : [
+        ...known(index.supplies, to.supply, [...path, 'to', 'supply'], `Schedule ${tag}`, 'supply condition'),
+        ...unless(
+          remaining.si === 0,
+          [...path, 'remaining'],
+          `Schedule ${tag} takes the plant to another supply, so nothing of the voltage remains in between; enter 0 %.`,
+        ),
+      ]),
+]
+
 /** References of schedules, and what in them cannot be. */
 export const scheduleReferences = ({ schedules }: StudyDocument, index: RecordIndex): FieldIssue[] =>
   schedules.flatMap((record, i) => {
@@ -86,6 +109,7 @@ export const scheduleReferences = ({ schedules }: StudyDocument, index: RecordIn
               [...path, 'disturbance', 'remaining'],
               `What remains of the voltage in schedule ${tag} cannot be below 0.`,
             ),
+            ...transferIssues(record, disturbance, [...path, 'disturbance'], index),
           ]),
       ...once(contactors, [...path, 'contactors'], `the contactors of schedule ${tag}`),
       ...contactorIssues(record, path, index),

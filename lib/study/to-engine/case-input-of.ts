@@ -74,7 +74,7 @@ export const caseInputOf = (
   const { plant, settings, frequency } = document
   const condition = found(index.plantConditions.get(record.plantCondition), record.id)
   const supply = found(index.supplies.get(record.supply), record.id)
-  const disturbance = disturbanceInput(index.schedules.get(record.schedule))
+  const disturbance = disturbanceInput(index.schedules.get(record.schedule), index.supplies)
   const circuitOf = (motorId: string) => found(circuits.get(motorId), `motor ${motorId}`)
   const starts = startingDuties(document, record, index)
   const samePlate = starts.flatMap(({ motorId }) => {

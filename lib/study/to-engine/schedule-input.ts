@@ -2,7 +2,9 @@ import type { MotorInput } from '../../engine/case-input'
 import type { Contactor, Disturbance } from '../../engine/schedule-input'
 import { perUnit, radianPerSecond, second, volt } from '../../units/si'
 import type { MotorRecord } from '../document/machine-records'
+import type { SupplyRecord } from '../document/network-records'
 import type { ScheduleRecord } from '../document/schedule-record'
+import { secondSupplyInput } from './supply-input'
 
 type Starting = Extract<MotorInput['duty'], { kind: 'starting' }>
 
@@ -40,9 +42,19 @@ export const contactorInput = (
 }
 
 /** What the supply does during the run; undefined where it stands still. */
-export const disturbanceInput = (schedule: ScheduleRecord | undefined): Disturbance | undefined => {
+export const disturbanceInput = (
+  schedule: ScheduleRecord | undefined,
+  supplies: ReadonlyMap<string, SupplyRecord>,
+): Disturbance | undefined => {
   const disturbance = schedule?.disturbance
   if (!disturbance) return undefined
-  const { at, duration, remaining } = disturbance
-  return { at: second(at.si), duration: second(duration.si), remaining: perUnit(remaining.si) }
+  const { at, duration, remaining, to, decayTime } = disturbance
+  const next = to && supplies.get(to.supply)
+  return {
+    at: second(at.si),
+    duration: second(duration.si),
+    remaining: perUnit(remaining.si),
+    ...(to && next && { to: secondSupplyInput(next, (to.angle * Math.PI) / 180) }),
+    ...(decayTime && { decayTime: second(decayTime.si) }),
+  }
 }

@@ -36,7 +36,9 @@ const starts = (record: CaseRecord, document: StudyDocument): string => {
 const dip = (record: CaseRecord, document: StudyDocument): string => {
   const disturbance = document.schedules.find(({ id }) => id === record.schedule)?.disturbance
   if (!disturbance) return ''
-  const { at, duration, remaining } = disturbance
+  const { at, duration, remaining, to } = disturbance
+  if (to)
+    return `transfer to the ${supplyTag(document, to.supply)} supply after ${duration.text} without${at.si === 0 ? '' : `, beginning at ${at.text}`}`
   const what = remaining.si === 0 ? 'supply away' : `supply at ${remaining.text}`
   return `${what} for ${duration.text}${at.si === 0 ? '' : `, beginning at ${at.text}`}`
 }

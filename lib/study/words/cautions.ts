@@ -46,6 +46,7 @@ type Rule = (document: StudyDocument) => { about: readonly string[]; sentence: s
 const shortCircuitPower = ({ level, statedAt }: StudyDocument['plant']['supplies'][number]): number => {
   if (level.form === 'power') return level.power.si
   if (level.form === 'current') return Math.sqrt(3) * statedAt.si * level.current.si
+  if (level.form === 'generator') return level.rating.si / (level.subtransient?.reactance ?? level.transient).si
   return statedAt.si ** 2 / Math.hypot(level.resistance.si, level.reactance.si)
 }
 
@@ -109,9 +110,25 @@ const estimated: Rule = ({ plant }) => ({
     'The circuit is estimated from the nameplate, and a nameplate does not fix the run-up: circuits that meet the same plate differ in run-up time by a fifth and more. Ask the maker for the torque-speed curve before relying on the run-up.',
 })
 
+const generators: Rule = ({ plant }) => ({
+  about: plant.supplies.filter(({ level }) => level.form === 'generator').map(({ tag }) => tag),
+  sentence:
+    'The generator is computed from its data sheet without saturation, its regulator and governor as first-order lags. Ask its maker for the voltage and frequency dip at this load step before relying on it, and look after its protection against undervoltage, underfrequency and overload.',
+})
+
+const transfers: Rule = ({ schedules }) => ({
+  about: schedules
+    .filter(({ disturbance }) => disturbance !== null && disturbance.remaining.si === 0)
+    .map(({ tag }) => tag),
+  sentence:
+    'Motors that still turn hold a residual voltage while the plant is without supply. Closing another supply on it out of phase can break shafts and windings: transfer after it has decayed, or by a scheme that watches the angle, and have the makers confirm it.',
+})
+
 const touched: readonly (readonly [string, Rule])[] = [
   ['energisation', energisation],
   ['residual-voltage', gaps],
+  ['generator', generators],
+  ['supply-transfer', transfers],
   ['stored-energy', storedEnergy],
   ['capacitor', capacitors],
   ['process-surge', surge],

@@ -39,6 +39,12 @@ export const noticeSentence = (notice: Notice, document: StudyDocument): string 
       return `${motorTag(document, notice.motorId)} is switched on while it turns near synchronous speed: its first periods are those of the transient model; steady circuits show only where they lead.`
     case 'transient-model-unfit':
       return `The fifth-order model does not fit this case (${unfitCauses[notice.cause]}): its numbers are quasi-static.`
+    case 'prime-mover-overloaded':
+      return `The generator is asked for ${printQuantity(notice.share, 'ratio', { unit: '%', digits: 3 })} of the largest power of its prime mover, at ${printQuantity(notice.at, 'time', { unit: 's', decimals: 2 })}: its speed falls as long as that lasts.`
+    case 'excitation-at-ceiling':
+      return `The excitation of the generator is at its ceiling for ${printQuantity(notice.time, 'time', { unit: 's', decimals: 2 })}: the regulator cannot raise the voltage further there.`
+    case 'transfer-within-residual':
+      return `The plant comes on the other supply after ${printQuantity(notice.deadTime, 'time', { unit: 's', decimals: 2 })}, before the residual voltage of its motors has decayed (${printQuantity(notice.decayTime, 'time', { unit: 's', decimals: 2 })}): current and torque of that closing are not assessed and can exceed those of a start.`
     case 'load-below-floor':
       return `Load ${loadTag(document, notice.loadId)} is below its voltage floor from ${printQuantity(notice.at, 'time', { unit: 's', decimals: 2 })} on and counts as constant impedance there.`
   }

@@ -53,13 +53,32 @@ export const schedule: KindDescription = {
     {
       kind: 'group',
       name: 'disturbance',
-      label: 'Dip of the supply',
+      label: 'Dip or transfer of the supply',
       absent: 'none',
       hint: 'Running motors slow down and re-accelerate; 0 % takes the plant off its supply.',
       fields: [
         { kind: 'quantity', name: 'at', label: 'Begin', quantity: 'time', initial: '0 s' },
         { kind: 'quantity', name: 'duration', label: 'Length', quantity: 'time' },
         { kind: 'quantity', name: 'remaining', label: 'What remains of the voltage', quantity: 'ratio' },
+        {
+          kind: 'group',
+          name: 'to',
+          label: 'Transfer to another supply',
+          absent: 'the first one comes back',
+          hint: 'It stands at the same bus and waits unloaded at its stated voltage; nothing remains in between: 0 %.',
+          fields: [
+            { kind: 'reference', name: 'supply', label: 'Supply condition', to: 'supply' },
+            { kind: 'decimal', name: 'angle', label: 'Its voltage leads by, degrees' },
+          ],
+        },
+        {
+          kind: 'quantity',
+          name: 'decayTime',
+          label: 'Decay of the residual voltage',
+          quantity: 'time',
+          optional: true,
+          hint: 'A return before it is not assessed.',
+        },
       ],
     },
     {

@@ -1,5 +1,6 @@
 import { column, type KindDescription } from '../kind-description'
 import { busField, noteField, tagField } from './fields-for-all'
+import { generatorForm } from './generator'
 
 const levelForms = [
   {
@@ -24,6 +25,7 @@ const levelForms = [
       { kind: 'quantity' as const, name: 'reactance', label: 'Source reactance X', quantity: 'impedance' as const },
     ],
   },
+  generatorForm,
 ]
 
 const voltageField = { kind: 'quantity' as const, name: 'voltage', label: 'Line voltage', quantity: 'voltage' as const }
@@ -39,16 +41,22 @@ export const supply: KindDescription = {
     tagField('For example weakest, usual, strongest.'),
     busField('bus', 'At bus'),
     { kind: 'text', name: 'meaning', label: 'State of the utility’s network', optional: true },
-    { kind: 'variants', name: 'level', label: 'Short-circuit level', tag: 'form', options: levelForms },
+    { kind: 'variants', name: 'level', label: 'Short-circuit level, or generator', tag: 'form', options: levelForms },
     {
       kind: 'quantity',
       name: 'xOverR',
       label: 'X/R',
       quantity: 'ratio',
       optional: true,
-      hint: 'Needed with a level in MVA or kA; there is no default. An impedance carries its own.',
+      hint: 'Needed with a level in MVA or kA; there is no default. An impedance or generator carries its own.',
     },
-    { kind: 'quantity', name: 'statedAt', label: 'Voltage the level was stated at', quantity: 'voltage' },
+    {
+      kind: 'quantity',
+      name: 'statedAt',
+      label: 'Voltage the level was stated at',
+      quantity: 'voltage',
+      hint: 'Of a generator: its rated voltage.',
+    },
     {
       kind: 'variants',
       name: 'voltageFactor',

@@ -5,6 +5,7 @@ import { computedRuns, runsOf } from '../../values/roles'
 import type { Section } from '../section'
 import { changeOverTable } from './change-over-table'
 import { flickerTable } from './flicker-table'
+import { generatorTable } from './generator-table'
 import { modelsTable } from './models-table'
 import { notices } from './notices'
 import { openRanges } from './open-ranges'
@@ -33,6 +34,7 @@ export const results: Section = (context) => {
     subsection(context, 'results-running', say.running.title),
     ...runningTable(context, ['design']),
     ...modelsTable(context),
+    ...generatorTable(context),
     ...peaksTable(context),
     ...protectionTable(context),
     ...heatTable(context),

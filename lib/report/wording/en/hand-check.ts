@@ -13,6 +13,7 @@ export const handCheck = {
   supplyLevel: (factor: string, voltage: string, level: string, ratio: string) =>
     `|Z| = ${factor} × (${voltage})² / ${level}, parted by X/R ${ratio}`,
   supplyImpedance: 'as stated',
+  supplyGenerator: 'reactance of the generator at the first instant, in ohm at its rated voltage',
   line: (length: string, r: string, x: string, parallel: number) =>
     `${length} × (${r} + j ${x})${parallel > 1 ? ` / ${parallel}` : ''}`,
   transformer: (impedance: string, voltage: string, rating: string, ratio: string) =>

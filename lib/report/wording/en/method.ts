@@ -36,6 +36,23 @@ export const method = {
       ],
     },
     {
+      id: 'method-generator',
+      title: 'Generators and transfers',
+      content: [
+        'A generator as supply is computed by two-axis theory without saturation, with X″_{q} taken as X″_{d}. The first instant lies behind X″_{d}, or behind X′_{d} where no sub-transient values are stated; then the field and the damper decay and the regulator answers:',
+        formula(
+          String.raw`T'_\mathrm{d0}\,\dot E'_\mathrm{q} = E_\mathrm{fd} - E'_\mathrm{q} - (X_\mathrm{d}-X'_\mathrm{d})\,I_\mathrm{d},\qquad T_\mathrm{e}\,\dot E_\mathrm{fd} = \left[K\,(U_\mathrm{ref}-U)\right]_0^{\max} - E_\mathrm{fd}`,
+          'The field follows excitation minus transient EMF minus armature reaction; excitation follows the regulator, held between zero and its ceiling, with a lag.',
+        ),
+        formula(
+          String.raw`T_\mathrm{g}\,\dot P_\mathrm{m} = \left[P_\mathrm{ref} - \frac{n-1}{\delta}\,S_\mathrm{r}\right]_0^{\max} - P_\mathrm{m},\qquad 2H\,S_\mathrm{r}\,\dot n = P_\mathrm{m} - P_\mathrm{e}`,
+          'Mechanical power follows the governor with droop and a lag; speed follows the difference of mechanical and electrical power over twice H.',
+        ),
+        'The ceiling stands before the lag of the exciter, so that excitation rises towards it. Before the start the set runs at rated frequency and holds the stated voltage. Reactances and synchronous speeds follow the frequency; static loads do not. The sustained dip is found by letting the regulator come to rest with every speed held.',
+        'On a transfer the plant is without supply for the stated time and comes on a second supply that waits unloaded at its voltage. Residual voltages of motors are left out: a return quicker than the stated decay is not assessed.',
+      ],
+    },
+    {
       id: 'method-motor',
       title: 'Motors',
       content: [

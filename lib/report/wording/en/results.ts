@@ -20,6 +20,22 @@ export const results = {
     notReached: 'not reached',
     at: (time: string) => `at ${time}`,
   },
+  generator: {
+    title: 'Generator',
+    intro:
+      'Dips in per cent of the voltage that the generator held before the load step. “First” is the instant just after it, behind X″_{d} or X′_{d}; “initial” is the lowest voltage of the run; “sustained” is the voltage once the regulator has done what it can with every motor held at its speed at the step.',
+    heads: {
+      case: 'Case',
+      outcome: 'Outcome',
+      first: 'First, %',
+      lowest: 'Initial, % (at s)',
+      sustained: 'Sustained, %',
+      lowestFrequency: 'Lowest Hz (at s)',
+      settledFrequency: 'Settled Hz',
+      power: 'Largest kW',
+      ceiling: 'At ceiling, s',
+    },
+  },
   starts: {
     title: 'Starts',
     heads: {
@@ -163,6 +179,7 @@ export const results = {
     notComputed: (outcome: string) => `Not plotted: ${outcome}`,
     voltage: (place: string) => `Voltage at ${place} with the limits that apply there.`,
     places: 'Voltages at all places with a limit.',
+    frequency: 'Frequency of the generator.',
     speed: 'Speed.',
     current: 'Currents.',
     torque: (motor: string) =>
