@@ -1,7 +1,7 @@
 import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { atAnotherDesk, signIn } from './pages/session'
-import { computeCases, decide, openStudy } from './pages/study'
+import { computeCases, decide, freeze, openStudy } from './pages/study'
 import { expect, test } from './support/test'
 
 const problems = async (page: Page) => {
@@ -22,9 +22,7 @@ test('a checker points at a number, the preparer sees it at once and answers, th
   const study = await openStudy(page)
   await computeCases(page, study)
   await page.goto(`${study}/review`)
-  await decide(page, 'Freeze revision', { label: 'What this revision is about', text: 'For the review.' })
-  await page.getByRole('row').nth(1).getByRole('link').click()
-  await page.waitForURL(/\/revisions\//)
+  await freeze(page, 'For the review.')
   const revision = new URL(page.url()).pathname
   await decide(page, 'Send for check')
   await connected(page)

@@ -2,7 +2,7 @@ import fs from 'node:fs'
 import AxeBuilder from '@axe-core/playwright'
 import type { Page } from '@playwright/test'
 import { atAnotherDesk, signIn } from './pages/session'
-import { computeCases, decide, openStudy, sign, waiveAll } from './pages/study'
+import { computeCases, decide, freeze, openStudy, sign, waiveAll } from './pages/study'
 import { person } from './support/people'
 import { expect, test } from './support/test'
 
@@ -29,9 +29,7 @@ test('an engineer computes, three people sign, the client downloads and anyone v
 
   await test.step('the preparer freezes a revision and sends it for check', async () => {
     await page.goto(`${study}/review`)
-    await decide(page, 'Freeze revision', { label: 'What this revision is about', text: 'First issue.' })
-    await page.getByRole('row').nth(1).getByRole('link').click()
-    await page.waitForURL(/\/revisions\//)
+    await freeze(page, 'First issue.')
     revision = new URL(page.url()).pathname
     await decide(page, 'Send for check')
     await expect(page.getByRole('button', { name: 'Accept check' })).toHaveCount(0)

@@ -30,6 +30,16 @@ export async function decide(page: Page, verb: string, field?: { label: string; 
   await expect(dialog).toBeHidden()
 }
 
+/** Freezes a revision on the page of the review and opens it: the newest stands first, once the list has it. */
+export async function freeze(page: Page, note: string): Promise<void> {
+  const rows = page.getByRole('row')
+  const before = await rows.count()
+  await decide(page, 'Freeze revision', { label: 'What this revision is about', text: note })
+  await expect(rows).toHaveCount(before === 0 ? 2 : before + 1)
+  await rows.nth(1).getByRole('link').click()
+  await page.waitForURL(/\/revisions\//)
+}
+
 /** Waives whatever holds up the closing of the review, each with a reason. */
 export async function waiveAll(page: Page): Promise<void> {
   const holdUps = page.getByRole('region', { name: 'Before the review is closed' })

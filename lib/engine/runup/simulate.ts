@@ -54,6 +54,10 @@ const longest = 1
 const fluxTime = 0.2
 /** Torque left, in parts of rated, below which a shaft counts as settled, and as worth a look for a hang. */
 const settledTorque = 1e-5
+
+/** Torques left, in parts of rated, below which a plant may be wavering about its balance; steps after which that is looked at. */
+const waveringTorque = 1e-2
+const patientSteps = 60
 const hangingTorque = 4e-3
 /** No run of a plant needs so many steps; a caller is not kept waiting for one that does. */
 const mostSteps = 400_000
@@ -85,6 +89,7 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
   const disturbance = createDisturbance(system, state)
   let first: Float64Array | null = null
   let firstPower: Complex | null = null
+  let waveringSteps = 0
   let lastHangTorque = Number.POSITIVE_INFINITY
 
   function result(end: RunEnd): RunRecord {
@@ -236,6 +241,16 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     return most
   }
 
+  /** Whether the plant has come to rest. About its balance an explicit method may waver for as long as it is let: then the balance itself is looked for. */
+  function isSettled(torque: number): boolean {
+    if (torque < settledTorque) return true
+    waveringSteps = torque < waveringTorque ? waveringSteps + 1 : 0
+    if (waveringSteps < patientSteps || waveringSteps % patientSteps !== 0) return false
+    const balance = findBalance(system, state, 1e-4)
+    if (balance !== null) state.set(balance)
+    return balance !== null
+  }
+
   /** Whether the run is over: starts resolved and shafts settled, or every open start hanging. */
   function isOver(t: number): boolean {
     if (starts.some((start) => untilOf(start)?.kind === 'after' || (!start.switchedOn && !isForlorn(start))))
@@ -248,12 +263,13 @@ export function simulate(before: BeforeStart, courses: Courses): RunRecord {
     const open = starts.filter((start) => start.outcome === null && start.switchedOn)
     // A start that was given up goes on turning: there is no settled plant to wait for.
     const givenUp = starts.some(({ outcome }) => outcome?.kind === 'timed-out' || outcome?.kind === 'tripped')
-    if (open.length === 0) return givenUp || (torque < settledTorque && isSupplyCalm())
+    const settled = isSettled(torque)
+    if (open.length === 0) return givenUp || (settled && isSupplyCalm())
     const waits = open.some((start) => untilOf(start)?.kind === 'time' || rampEnd(start) > t)
     if (waits || torque > hangingTorque || torque > lastHangTorque / 2 || !isSupplyCalm()) return false
     lastHangTorque = torque
     judgeHanging(open)
-    return open.every((start) => start.outcome !== null) && torque < settledTorque
+    return open.every((start) => start.outcome !== null) && settled
   }
 
   function isSupplyCalm(): boolean {
