@@ -54,6 +54,8 @@ export interface HoldUp {
 }
 
 export interface CommentsView {
+  /** Place in the project's chain of events that this view stands at; an older view never replaces a newer one. */
+  sequence: number
   revisionId: string
   comments: CommentLine[]
   people: Participant[]

@@ -11,7 +11,11 @@ const pause = 1500
 /** The comments of a revision as they are now: asked for anew when somebody says that one was made, answered or closed. */
 export const useComments = (given: CommentsView, href: string) => {
   const [view, setView] = useState(given)
-  useEffect(() => setView(given), [given])
+  // a page that was asked for before the last comment may arrive after it
+  const take = useCallback((next: CommentsView) => {
+    setView((now) => (next.revisionId === now.revisionId && next.sequence < now.sequence ? now : next))
+  }, [])
+  useEffect(() => take(given), [given, take])
   // rises with each asking, so that a late answer never covers a newer one
   const asked = useRef(0)
   const look = useCallback(async () => {
@@ -19,9 +23,9 @@ export const useComments = (given: CommentsView, href: string) => {
     const turn = asked.current
     const answer = await fetch(href, { cache: 'no-store' }).catch(() => null)
     if (turn !== asked.current) return
-    if (answer?.ok) setView(await answer.json())
+    if (answer?.ok) take(await answer.json())
     else if (!answer || answer.status >= 500) setTimeout(() => whenOnline(() => void look()), pause)
-  }, [href])
+  }, [href, take])
   useEffect(
     () =>
       onHappened(({ subject, action }) => {

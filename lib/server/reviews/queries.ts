@@ -30,7 +30,12 @@ export const revisionComments = query({
       ...withEntries,
     })
     const ground = rows.length > 0 ? await loadGround(tx, revisionId) : null
+    const { sequence } = await tx.project.findFirstOrThrow({
+      where: { id: row.projectId },
+      select: { sequence: true },
+    })
     return {
+      sequence,
       revisionId,
       comments: ground ? rows.map((one) => presentComment(one, revisionId, ground, policy)) : [],
       people: await participantsOf(tx, row.projectId, at),
